@@ -201,7 +201,7 @@ mod tests {
         for (size, text) in [
             (0.0837, "0.084"),
             (1234.0, "1.2e3"),
-            (-9.96, "-10.0"),
+            (-9.96, "-10"),
             (0.0, "0"),
         ] {
             assert_eq!(two_digits(size), text);
