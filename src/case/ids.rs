@@ -1,0 +1,87 @@
+//! Ids: each names one thing in the whole case.
+
+use indexmap::IndexMap;
+
+use crate::document::{Reader, Table, is_id};
+use crate::finding::{FaultCode, Located, Span, nearest};
+
+/// What an id can name.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum IdKind {
+    Substance,
+    Input,
+    Reaction,
+}
+
+impl IdKind {
+    fn word(self) -> &'static str {
+        match self {
+            IdKind::Substance => "substance",
+            IdKind::Input => "input",
+            IdKind::Reaction => "reaction",
+        }
+    }
+}
+
+/// All ids of a case, with what they name and where.
+#[derive(Default)]
+pub(super) struct Ids {
+    taken: IndexMap<String, (IdKind, Span)>,
+}
+
+impl Ids {
+    /// Takes the ids of a table of named things.
+    pub(super) fn take(&mut self, table: Option<&Table<'_, '_>>, kind: IdKind) {
+        for (id, _) in table.map_or_else(Vec::new, Table::entries) {
+            // A table is there, so its reader is.
+            if let Some(table) = table {
+                self.take_one(table.reader(), &id, kind);
+            }
+        }
+    }
+
+    fn take_one(&mut self, reader: &Reader<'_>, id: &Located<String>, kind: IdKind) {
+        if !is_id(&id.value) {
+            reader.fault(
+                FaultCode::Value,
+                &id.span,
+                format!("the id `{}`", id.value),
+                "lower-case letters, digits and hyphens, begun by a letter; not `exact`",
+                "rename it, and where it is used",
+            );
+        }
+        if let Some((other, first)) = self.taken.get(&id.value) {
+            let line = reader.text().place(first.start).line;
+            reader.fault(
+                FaultCode::DuplicateId,
+                &id.span,
+                format!("the id `{}` for a {}", id.value, kind.word()),
+                format!("an id of its own: line {line} has it for a {}", other.word()),
+                "rename one of the two, and where it is used",
+            );
+            return;
+        }
+        self.taken.insert(id.value.clone(), (kind, id.span.clone()));
+    }
+
+    pub(super) fn kind(&self, id: &str) -> Option<IdKind> {
+        self.taken.get(id).map(|(kind, _)| *kind)
+    }
+
+    /// Reports an id that nothing has, with the nearest one of the kind that was asked for.
+    pub(super) fn unknown(&self, reader: &Reader<'_>, id: &str, span: &Span, wanted: &[IdKind]) {
+        let fitting = self.taken.iter().filter(|(_, (kind, _))| wanted.contains(kind));
+        let advice = match nearest(id, fitting.map(|(id, _)| id.as_str()), 1).first() {
+            Some(near) => format!("did you mean `{near}`?"),
+            None => "define it, or use one that is defined".to_string(),
+        };
+        let words: Vec<&str> = wanted.iter().map(|kind| kind.word()).collect();
+        reader.fault(
+            FaultCode::UnknownId,
+            span,
+            format!("`{id}`"),
+            format!("the id of a {} of this case", words.join(" or ")),
+            advice,
+        );
+    }
+}

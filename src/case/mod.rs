@@ -1,0 +1,25 @@
+//! The case: what the preparer states, read from a TOML file with the place of every value.
+//!
+//! Reading is complete in one go: all faults of the file are reported together. What the names in
+//! the case mean in the sources is the business of [`crate::source`], not of this module.
+
+mod assumptions;
+mod ids;
+mod inputs;
+mod model;
+mod output;
+mod prose;
+mod reactions;
+mod read;
+mod record;
+mod sources;
+mod substances;
+
+pub use ids::IdKind;
+pub use model::{
+    Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText, Reaction,
+    RecordHead, ResultUnits, Revision, Role, RoundingRule, Status,
+};
+pub use prose::{Binding, MARKDOWN, bindings, is_escaped};
+pub use reactions::RESULT_QUANTITIES;
+pub use read::{CASE_NAME, read_case};

@@ -1,0 +1,97 @@
+//! Reading `[units]` and `[rounding]`: how results are given.
+
+use indexmap::IndexMap;
+use num_traits::One;
+
+use crate::document::{Reader, Table, quantity, unit, value_fault};
+use crate::finding::{FaultCode, Located};
+use crate::quantity::{Exact, Unit, order_of_magnitude, power_of_ten};
+
+use super::ids::Ids;
+use super::model::{Reaction, ResultUnits, RoundingRule};
+use super::prose::check_result;
+
+pub(super) fn read_units(table: Option<&Table<'_, '_>>) -> ResultUnits {
+    if let Some(table) = table {
+        table.only(&["energy", "temperature", "mass", "amount", "time"]);
+    }
+    ResultUnits {
+        energy: read_unit(table, "energy", "kJ"),
+        temperature: read_unit(table, "temperature", "K"),
+        mass: read_unit(table, "mass", "kg"),
+        amount: read_unit(table, "amount", "mol"),
+        time: read_unit(table, "time", "s"),
+    }
+}
+
+/// The unit of a key, of the same kind as the default.
+fn read_unit(table: Option<&Table<'_, '_>>, key: &str, default: &str) -> Unit {
+    // The defaults are words of the unit table; its own test reads each of them.
+    let default = Unit::parse(default).expect("a default unit is known");
+    let Some(table) = table else { return default };
+    let Some(text) = table.string(key) else {
+        return default;
+    };
+    let Some(given) = unit(table.reader(), &text) else {
+        return default;
+    };
+    if given.dimension() == default.dimension() {
+        return given;
+    }
+    table.reader().fault(
+        FaultCode::Quantity,
+        &text.span,
+        format!("\"{}\", a unit of {}", text.value, given.dimension()),
+        format!("a unit of {}", default.dimension()),
+        format!("write it as \"{}\"", default.symbol()),
+    );
+    default
+}
+
+pub(super) fn read_rounding(
+    table: Option<&Table<'_, '_>>,
+    ids: &Ids,
+    reactions: &IndexMap<String, Reaction>,
+) -> Vec<RoundingRule> {
+    let Some(table) = table else {
+        return Vec::new();
+    };
+    let mut rules = Vec::new();
+    for (result, value) in table.entries() {
+        let reader = table.reader();
+        check_result(reader, &result.value, &result.span, ids, reactions);
+        let text = value.string();
+        rules.extend(text.and_then(|text| read_rule(reader, result, &text)));
+    }
+    rules
+}
+
+fn read_rule(
+    reader: &Reader<'_>,
+    result: Located<String>,
+    text: &Located<String>,
+) -> Option<RoundingRule> {
+    let place = quantity(reader, text)?.value;
+    let Some(power) = as_power(&place.decimal.value()) else {
+        value_fault(
+            reader,
+            &text.span,
+            format!("\"{}\"", text.value),
+            "a place: 1, 0.1, 0.01, 10 … with its unit",
+            "write \"0.1 kJ/mol\" for one decimal",
+        );
+        return None;
+    };
+    Some(RoundingRule {
+        result,
+        place: power,
+        unit: place.unit,
+        span: text.span.clone(),
+    })
+}
+
+fn as_power(value: &Exact) -> Option<i64> {
+    let order = order_of_magnitude(value)?;
+    let digits = power_of_ten(-order) * value;
+    digits.is_one().then_some(order)
+}

@@ -1,0 +1,142 @@
+//! Reading `[reactions]`.
+
+use indexmap::IndexMap;
+
+use crate::document::{Table, is_id, notation_fault, quantity, value_fault};
+use crate::finding::{FaultCode, Located};
+use crate::notation::{Equation, Participant};
+use crate::quantity::{Dimension, Quantity};
+
+use super::ids::{IdKind, Ids};
+use super::model::{DeclaredKind, DeclaredSubstance, Input, Reaction};
+
+/// The results that a reaction can have.
+pub const RESULT_QUANTITIES: [&str; 3] = ["heat", "heat-per", "heat-per-mass"];
+
+pub(super) fn read_reactions(
+    table: &Table<'_, '_>,
+    ids: &Ids,
+    inputs: &IndexMap<String, Input>,
+    substances: &IndexMap<String, DeclaredSubstance>,
+) -> IndexMap<String, Reaction> {
+    let mut reactions = IndexMap::new();
+    for (id, value) in table.entries() {
+        let Some(table) = value.table() else { continue };
+        let context = Context {
+            table: &table,
+            ids,
+            inputs,
+            substances,
+        };
+        if let Some(reaction) = context.read_reaction(id) {
+            reactions.insert(reaction.id.value.clone(), reaction);
+        }
+    }
+    reactions
+}
+
+struct Context<'a, 'r, 'd> {
+    table: &'a Table<'r, 'd>,
+    ids: &'a Ids,
+    inputs: &'a IndexMap<String, Input>,
+    substances: &'a IndexMap<String, DeclaredSubstance>,
+}
+
+impl Context<'_, '_, '_> {
+    fn read_reaction(&self, id: Located<String>) -> Option<Reaction> {
+        self.table.only(&["equation", "temperature", "per"]);
+        let temperature = self.read_temperature();
+        let advice = "write equation = \"N2(g) + 3 H2(g) -> 2 NH3(g)\"";
+        let text = self.table.required_string("equation", advice)?;
+        let equation = Equation::parse(&text.value);
+        if let Err(errors) = &equation {
+            for error in errors {
+                notation_fault(self.table.reader(), &text, error);
+            }
+        }
+        let equation = Located::new(equation.ok()?, text.span.clone());
+        self.check_participants(&equation, &text);
+        let per = self.read_per(&equation);
+        Some(Reaction {
+            id,
+            equation,
+            temperature,
+            per,
+        })
+    }
+
+    /// A temperature, or the id of an input that is one.
+    fn read_temperature(&self) -> Option<Located<Quantity>> {
+        let reader = self.table.reader();
+        let text = self.table.string("temperature")?;
+        let found = if is_id(&text.value) {
+            let Some(input) = self.inputs.get(&text.value) else {
+                self.ids.unknown(reader, &text.value, &text.span, &[IdKind::Input]);
+                return None;
+            };
+            Located::new(input.value.value.clone(), text.span.clone())
+        } else {
+            quantity(reader, &text)?
+        };
+        if found.value.unit.dimension() == Dimension::TEMPERATURE {
+            return Some(found);
+        }
+        reader.fault(
+            FaultCode::Quantity,
+            &text.span,
+            format!("\"{}\"", text.value),
+            "a temperature",
+            "write it as \"25 °C\" or \"298.15 K\"",
+        );
+        None
+    }
+
+    fn check_participants(&self, equation: &Located<Equation>, text: &Located<String>) {
+        let reader = self.table.reader();
+        for term in equation.value.left.iter().chain(&equation.value.right) {
+            let Participant::Declared(id) = &term.participant else {
+                continue;
+            };
+            let span = reader.text().inside(&text.span, &text.value, &term.span);
+            match self.substances.get(id).map(|s| &s.kind) {
+                Some(DeclaredKind::Compound { .. }) => {}
+                Some(DeclaredKind::Inert) => value_fault(
+                    reader,
+                    &span,
+                    format!("`{id}`, which is declared inert"),
+                    "substances with a formula",
+                    "give it a formula and a phase, or leave it out of the equation",
+                ),
+                None if self.ids.kind(id) == Some(IdKind::Substance) => {}
+                None => self.ids.unknown(reader, id, &span, &[IdKind::Substance]),
+            }
+        }
+    }
+
+    /// The participant that `per` names, as it is written in the equation.
+    fn read_per(&self, equation: &Located<Equation>) -> Option<Located<String>> {
+        let text = self.table.string("per")?;
+        let terms = equation.value.left.iter().chain(&equation.value.right);
+        let names: Vec<String> = terms.map(|term| term.participant.to_string()).collect();
+        let wanted = canonical_participant(&text.value);
+        if names.contains(&wanted) {
+            return Some(Located::new(wanted, text.span));
+        }
+        self.table.reader().fault(
+            FaultCode::Value,
+            &text.span,
+            format!("\"{}\"", text.value),
+            format!("a participant of the equation: {}", names.join(", ")),
+            "write it as it stands in the equation",
+        );
+        None
+    }
+}
+
+/// A participant in the one way that equations print it.
+fn canonical_participant(text: &str) -> String {
+    match crate::notation::Species::parse(text) {
+        Ok(species) if !is_id(text) => species.to_string(),
+        _ => text.to_string(),
+    }
+}

@@ -1,0 +1,108 @@
+//! Reading a case, table by table.
+
+use indexmap::IndexMap;
+
+use crate::document::{Table, with_document};
+use crate::finding::{FaultCode, Faults, Text};
+
+use super::assumptions::read_assumptions;
+use super::ids::{IdKind, Ids};
+use super::inputs::read_inputs;
+use super::model::Case;
+use super::output::{read_rounding, read_units};
+use super::prose::read_prose;
+use super::reactions::read_reactions;
+use super::record::read_record;
+use super::sources::{read_choices, read_consult};
+use super::substances::read_substances;
+
+/// What a case is called in findings, whatever its file is called.
+pub const CASE_NAME: &str = "case.toml";
+
+const TABLES: [&str; 9] = [
+    "record",
+    "prose",
+    "assumptions",
+    "sources",
+    "substances",
+    "inputs",
+    "reactions",
+    "rounding",
+    "units",
+];
+
+/// Tables of the case format that this version does not work.
+const NOT_WORKED: [&str; 6] = [
+    "streams",
+    "cycles",
+    "balances",
+    "adiabatic",
+    "heating-values",
+    "criteria",
+];
+
+/// Reads a case. It is there only where no fault was found.
+pub fn read_case(text: &Text) -> (Option<Case>, Faults) {
+    let (case, faults) = with_document(text, |document| read_root(&document.root));
+    let case = if faults.is_empty() { case } else { None };
+    (case, faults)
+}
+
+fn read_root(root: &Table<'_, '_>) -> Option<Case> {
+    refuse_unworked(root);
+    let mut known = TABLES.to_vec();
+    known.extend(NOT_WORKED);
+    root.only(&known);
+    let substances = root.table("substances");
+    let inputs = root.table("inputs");
+    let reactions = root.table("reactions");
+    let mut ids = Ids::default();
+    ids.take(substances.as_ref(), IdKind::Substance);
+    ids.take(inputs.as_ref(), IdKind::Input);
+    ids.take(reactions.as_ref(), IdKind::Reaction);
+
+    let record = root.table("record");
+    if record.is_none() {
+        root.missing("record", "begin the case with a [record] table: number, revision, title, …");
+    }
+    let record = record.and_then(|table| read_record(&table));
+    let substances = substances.map_or_else(IndexMap::new, |t| read_substances(&t));
+    let inputs = inputs.map_or_else(IndexMap::new, |t| read_inputs(&t));
+    let reactions = match reactions {
+        Some(table) => read_reactions(&table, &ids, &inputs, &substances),
+        None => {
+            root.missing("reactions", "add a reaction: [reactions.NAME] with its equation");
+            IndexMap::new()
+        }
+    };
+    let units = read_units(root.table("units").as_ref());
+    let sources = root.table("sources");
+    if sources.is_none() {
+        root.missing("sources", "add [sources] with consult = [\"codata-1989\", \"nasa-glenn-2021\"]");
+    }
+    Some(Case {
+        prose: read_prose(root.table("prose").as_ref(), &ids, &reactions),
+        assumptions: read_assumptions(root),
+        consult: read_consult(sources.as_ref()),
+        choices: read_choices(sources.as_ref()),
+        rounding: read_rounding(root.table("rounding").as_ref(), &ids, &reactions),
+        record: record?,
+        substances,
+        inputs,
+        reactions,
+        units,
+    })
+}
+
+fn refuse_unworked(root: &Table<'_, '_>) {
+    for key in NOT_WORKED {
+        let Some(value) = root.get(key) else { continue };
+        root.reader().fault(
+            FaultCode::NotWorked,
+            &value.key_span,
+            format!("[{key}]"),
+            "tables that this version works: heats of reaction at the reference temperature",
+            "remove the table, or use a version that works it; nothing is left out silently",
+        );
+    }
+}

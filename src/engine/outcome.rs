@@ -1,0 +1,184 @@
+//! A result: its value, what is known of it, and how it is stated.
+
+use num_traits::Signed;
+
+use crate::quantity::{
+    Combined, Dimension, Exact, LinearForm, Real, Significance, Stated, Unit, combine,
+    exact_text, order_of_magnitude, power_of_ten,
+};
+use crate::source::Problem;
+
+use super::work::WorkOptions;
+
+/// The coverage factor of expanded uncertainties (about 95 % where the distribution is about
+/// normal; JCGM 100:2008, 6.2.2 and 6.3.3).
+pub const COVERAGE: u32 = 2;
+
+/// Whether heat is given off or taken up.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Direction {
+    Released,
+    Absorbed,
+    Neither,
+}
+
+impl Direction {
+    pub fn word(self) -> &'static str {
+        match self {
+            Direction::Released => "released",
+            Direction::Absorbed => "absorbed",
+            Direction::Neither => "neither released nor absorbed",
+        }
+    }
+}
+
+/// Which rule decided the stated digits.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum StatedBy {
+    /// The expanded uncertainty, which covers every value used (JCGM 100 7.2.6).
+    Uncertainty,
+    /// The significant digits of the values used (ASTM E29).
+    Significance,
+    /// The house place for tables with a fixed number of decimals.
+    FixedDecimals,
+    /// `[rounding]` of the case.
+    Rounding,
+}
+
+/// A result of the working.
+#[derive(Clone, Debug)]
+pub struct Outcome {
+    /// `hydrogenation.heat`
+    pub id: String,
+    pub value: Real,
+    pub unit: Unit,
+    pub significance: Significance,
+    pub form: LinearForm,
+    pub combined: Combined,
+    /// Half-width at k = 2, in `unit`; none where no value used states an uncertainty.
+    pub expanded: Option<f64>,
+    pub stated: Stated,
+    pub stated_by: StatedBy,
+    /// The value as the other rule would state it.
+    pub remark: Option<Stated>,
+}
+
+impl Outcome {
+    /// Combines the uncertainty and decides the stated digits.
+    pub fn new(
+        problem: &Problem,
+        options: &WorkOptions,
+        id: String,
+        value: Real,
+        unit: Unit,
+        significance: Significance,
+        form: LinearForm,
+    ) -> Outcome {
+        let uncertainty = |index: usize| problem.values[index].uncertainty;
+        let combined = combine(&form, &uncertainty, &problem.correlations);
+        let expanded = combined.standard.map(|u| u * f64::from(COVERAGE));
+        let rules = Rules {
+            value: &value,
+            significance: limited(significance, &unit, &form, problem),
+            fixed: rests_on_fixed_decimals(&form, problem),
+            expanded,
+            complete: combined.stated == combined.of && combined.of > 0,
+        };
+        let (stated, stated_by, remark) = rules.decide(options.place_for(&id, &unit));
+        Outcome {
+            id,
+            unit,
+            significance,
+            form,
+            combined,
+            expanded,
+            stated,
+            stated_by,
+            remark,
+            value,
+        }
+    }
+
+    pub fn direction(&self) -> Direction {
+        match self.value.to_exact() {
+            Some(value) if value.is_negative() => Direction::Released,
+            Some(value) if value.is_positive() => Direction::Absorbed,
+            _ => Direction::Neither,
+        }
+    }
+
+    /// Whether every value used that is not exact states an uncertainty.
+    pub fn is_complete(&self) -> bool {
+        self.combined.stated == self.combined.of
+    }
+}
+
+/// What decides the stated digits.
+struct Rules<'a> {
+    value: &'a Real,
+    significance: Significance,
+    fixed: bool,
+    expanded: Option<f64>,
+    complete: bool,
+}
+
+impl Rules<'_> {
+    /// The expanded uncertainty where it is complete, otherwise ASTM E29; a place that the case
+    /// names goes before both. The rule that did not decide is the remark.
+    fn decide(&self, place: Option<i64>) -> (Stated, StatedBy, Option<Stated>) {
+        let by_digits = Stated::by_significance(self.value, self.significance);
+        let by_digits = by_digits.unwrap_or_else(|| unrounded(self.value));
+        let by_uncertainty = self.expanded.and_then(|u| Stated::by_uncertainty(self.value, u));
+        let at_place = |place| Stated::at_place(self.value, place, self.expanded);
+        if let Some(stated) = place.and_then(at_place) {
+            return (stated, StatedBy::Rounding, by_uncertainty.or(Some(by_digits)));
+        }
+        match by_uncertainty {
+            Some(stated) if self.complete => (stated, StatedBy::Uncertainty, Some(by_digits)),
+            _ if self.fixed => (by_digits, StatedBy::FixedDecimals, None),
+            _ => (by_digits, StatedBy::Significance, by_uncertainty),
+        }
+    }
+}
+
+/// A value that no rule limits, in full.
+fn unrounded(value: &Real) -> Stated {
+    let text = value.to_exact().map_or_else(|| value.to_f64().to_string(), |v| exact_text(&v));
+    Stated {
+        value_text: text,
+        uncertainty_text: None,
+        place: None,
+    }
+}
+
+fn rests_on_fixed_decimals(form: &LinearForm, problem: &Problem) -> bool {
+    form.iter().any(|(index, _)| problem.values[index].significance == Significance::Unlimited)
+}
+
+/// Where a table with a fixed number of decimals is among the values, its printed zeros claim
+/// nothing: the result is stated to 0.1 kJ/mol (or the same in its own unit) at the finest.
+fn limited(
+    significance: Significance,
+    unit: &Unit,
+    form: &LinearForm,
+    problem: &Problem,
+) -> Significance {
+    if !rests_on_fixed_decimals(form, problem) {
+        return significance;
+    }
+    let house = Significance::Place(house_place(unit));
+    Significance::sum([significance, house].into_iter())
+}
+
+/// The place of 0.1 kJ/mol (0.1 kJ per 0.018 kg would be no rule: per mass it is 1 kJ/kg).
+fn house_place(unit: &Unit) -> i64 {
+    let per_mole = Dimension::ENERGY.over(Dimension::AMOUNT) == unit.dimension();
+    let coherent = Exact::from_integer(if per_mole { 100 } else { 1000 }.into());
+    order_of_magnitude(&(coherent / unit.factor())).unwrap_or(0)
+}
+
+/// A place in the unit of a result, given in another unit of the same kind.
+pub fn place_in(place: i64, from: &Unit, to: &Unit) -> Option<i64> {
+    let size = power_of_ten(place) * from.factor() / to.factor();
+    order_of_magnitude(&size)
+}

@@ -1,0 +1,222 @@
+//! What it costs to mix sources of different reference temperature, pressure or reference state.
+
+use num_traits::{Signed, Zero};
+
+use crate::finding::{Finding, FindingCode, Severity, Text};
+use crate::notation::{Element, Species};
+use crate::quantity::{Exact, Quantity, exact_text, to_f64, two_digits};
+use crate::source::{Problem, ProblemReaction, ValueKind};
+
+use super::work::Working;
+
+/// The temperature of the conventions, K.
+fn conventional_temperature() -> Exact {
+    Exact::new(29815.into(), 100.into())
+}
+
+/// All findings about mixed references, one for each reaction and kind.
+pub(super) fn check(problem: &Problem, working: &Working, text: &Text) -> Vec<Finding> {
+    let mut findings = pressure(problem, text);
+    for reaction in working.reactions.iter().filter(|r| r.hess.is_some()) {
+        let reaction = &problem.reactions[reaction.reaction];
+        let place = text.place(reaction.span.start);
+        for (severity, code, message) in temperature(problem, reaction)
+            .into_iter()
+            .chain(states(problem, reaction))
+        {
+            findings.push(Finding {
+                severity,
+                code,
+                message,
+                at: place.clone(),
+            });
+        }
+    }
+    findings
+}
+
+type Said = (Severity, FindingCode, String);
+
+/// Enthalpies of ideal gases do not depend on pressure; those of condensed substances by about
+/// V·Δp (from (∂H/∂p)_T = V − T(∂V/∂T)_p). 100 cm³/mol stands for a large molar volume.
+fn pressure(problem: &Problem, text: &Text) -> Vec<Finding> {
+    let enthalpies = problem.values.iter().filter(|v| v.kind == ValueKind::FormationEnthalpy);
+    let mut pressures: Vec<(Exact, &str, usize)> = Vec::new();
+    for value in enthalpies.filter(|v| !v.printed.exact) {
+        let head = &problem.sources[value.source].head;
+        let Some(pressure) = head.pressure.as_ref().map(Quantity::value_in_si) else {
+            continue;
+        };
+        if !pressures.iter().any(|(p, _, _)| *p == pressure) {
+            pressures.push((pressure, &head.id, value.used_at.start));
+        }
+    }
+    let [first, .., last] = &pressures[..] else {
+        return Vec::new();
+    };
+    let pascal = (&last.0 - &first.0).abs();
+    let cost = to_f64(&pascal) * 1e-4 / 1000.0;
+    vec![Finding {
+        severity: Severity::Note,
+        code: FindingCode::ReferencePressure,
+        message: format!(
+            "{} and {} have standard pressures {} Pa apart. That moves no enthalpy of an ideal \
+             gas, and one of a condensed substance of 100 cm³/mol by about {} kJ/mol.",
+            first.1,
+            last.1,
+            exact_text(&pascal),
+            two_digits(cost),
+        ),
+        at: text.place(last.2),
+    }]
+}
+
+/// A formation enthalpy at another temperature is off by ΔCp of the formation reaction times the
+/// difference (Kirchhoff); the heat capacities come from whatever source consulted has them.
+fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
+    let mut cost = 0.0;
+    let mut names = Vec::new();
+    let mut unknown = Vec::new();
+    for term in &reaction.terms {
+        let value = &problem.values[problem.substances[term.substance].value];
+        let head = &problem.sources[value.source].head;
+        let Some(reference) = head.temperature.as_ref() else { continue };
+        let kelvin = conventional_temperature() - reference.value_in_si();
+        if kelvin.is_zero() || value.printed.exact {
+            continue;
+        }
+        if !names.contains(&format!("{} ({reference})", head.id)) {
+            names.push(format!("{} ({reference})", head.id));
+        }
+        let species = &problem.substances[term.substance].species;
+        match formation_heat_capacity(problem, species) {
+            Some(cp) => cost += to_f64(&term.nu) * cp * to_f64(&kelvin),
+            None => unknown.push(species.to_string()),
+        }
+    }
+    if names.is_empty() {
+        return None;
+    }
+    let size = match unknown.is_empty() {
+        true => format!("moves the heat by about {} kJ/mol", two_digits(cost / 1000.0)),
+        false => format!(
+            "moves the heat by an amount not known here, because no consulted source gives the \
+             heat capacities that the formation of {} needs (100 J/(mol K) would make {} kJ/mol \
+             for each kelvin)",
+            unknown.join(", "),
+            two_digits(0.1)
+        ),
+    };
+    Some((
+        Severity::Caution,
+        FindingCode::ReferenceTemperature,
+        format!(
+            "{}: {} gives values for another reference temperature than 298.15 K. They are used \
+             as printed; referring them to 298.15 K {size}.",
+            reaction.id,
+            names.join(", ")
+        ),
+    ))
+}
+
+/// Cp of a species less that of its elements at 298.15 K, J/(mol K).
+fn formation_heat_capacity(problem: &Problem, species: &Species) -> Option<f64> {
+    let mut sum = heat_capacity(problem, species)?;
+    for (element, count) in species.formula.counts() {
+        let state = problem.reference_states.of_element(*element)?;
+        let atoms = state.formula.counts().get(element)?;
+        sum -= to_f64(&(count / atoms)) * heat_capacity(problem, state)?;
+    }
+    Some(sum)
+}
+
+fn heat_capacity(problem: &Problem, species: &Species) -> Option<f64> {
+    let kelvin = conventional_temperature();
+    for source in &problem.sources[..problem.consulted] {
+        let r = source.head.gas_constant.as_ref();
+        let r = r.map_or(8.314_462_618_153_24, |r| to_f64(&r.value()));
+        for entry in source.of_composition(&species.formula.hill()) {
+            let same = entry.notations().any(|other| other == species);
+            let function = entry.heat_capacity.iter().find(|f| f.serves(&kelvin));
+            if let (true, Some(function)) = (same, function) {
+                return function.at(to_f64(&kelvin), r);
+            }
+        }
+    }
+    None
+}
+
+/// Sources that count an element from another form do not add up with the others unless the
+/// atoms of that element cancel within them.
+fn states(problem: &Problem, reaction: &ProblemReaction) -> Vec<Said> {
+    let mut said = Vec::new();
+    for (index, source) in problem.sources.iter().enumerate() {
+        for (element, state) in &source.head.reference_states {
+            let Some(usual) = problem.reference_states.of_element(*element) else {
+                continue;
+            };
+            let atoms = net_atoms(problem, reaction, index, *element);
+            if usual != state && !atoms.is_zero() {
+                said.push(mixed_state(problem, reaction, index, *element, state, &atoms));
+            }
+        }
+    }
+    said
+}
+
+/// Σ ν·n of an element over the terms whose value comes from one source.
+fn net_atoms(problem: &Problem, reaction: &ProblemReaction, source: usize, element: Element) -> Exact {
+    let atoms = reaction.terms.iter().map(|term| {
+        let substance = &problem.substances[term.substance];
+        let count = substance.species.formula.counts().get(&element);
+        match (problem.values[substance.value].source == source, count) {
+            (true, Some(count)) => &term.nu * count,
+            _ => Exact::zero(),
+        }
+    });
+    atoms.sum()
+}
+
+fn mixed_state(
+    problem: &Problem,
+    reaction: &ProblemReaction,
+    source: usize,
+    element: Element,
+    state: &Species,
+    atoms: &Exact,
+) -> Said {
+    let id = problem.sources[source].id();
+    let symbol = element.symbol();
+    let cost = match state_enthalpy(problem, state) {
+        Some(kilojoule) => {
+            let per_atom = state.formula.counts().get(&element).cloned();
+            let total = kilojoule * atoms / per_atom.unwrap_or_else(|| Exact::from_integer(1.into()));
+            format!("moves the heat by {} kJ/mol", two_digits(to_f64(&total)))
+        }
+        None => format!("moves the heat by {} times the enthalpy of {state}, which no consulted \
+                         source gives", exact_text(atoms)),
+    };
+    (
+        Severity::Stop,
+        FindingCode::ReferenceState,
+        format!(
+            "{}: {id} counts {symbol} from {state}, the others from its usual reference state. \
+             {} atoms of {symbol} do not cancel within {id}: that {cost}. Take all substances with \
+             {symbol} from one source.",
+            reaction.id,
+            exact_text(atoms)
+        ),
+    )
+}
+
+/// The formation enthalpy of an unusual reference state on the conventional scale, kJ/mol.
+fn state_enthalpy(problem: &Problem, state: &Species) -> Option<Exact> {
+    let kilo = Exact::from_integer(1000.into());
+    problem.sources[..problem.consulted].iter().find_map(|source| {
+        let counted_from_it = source.head.reference_states.iter().any(|(_, s)| s == state);
+        let entries = source.of_composition(&state.formula.hill());
+        let entry = entries.iter().find(|e| e.notations().any(|s| s == state))?;
+        let value = entry.formation_enthalpy.as_ref()?;
+        (!counted_from_it).then(|| value.value_in_si() / &kilo)
+    })
+}

@@ -1,0 +1,124 @@
+//! What the values used are worth: findings about their verification and their digits.
+
+use std::collections::BTreeMap;
+
+use crate::finding::{Finding, FindingCode, Severity, Text};
+use crate::quantity::{InputUncertainty, Significance};
+use crate::source::{Problem, Standing, ValueUsed};
+
+use super::outcome::{Outcome, StatedBy};
+
+/// How many results or values a message names.
+const MOST: usize = 8;
+
+/// A caution for each source and standing below "compared with the original", naming its values.
+pub(super) fn not_compared(problem: &Problem, text: &Text) -> Vec<Finding> {
+    let mut groups: BTreeMap<(usize, Standing), Vec<&ValueUsed>> = BTreeMap::new();
+    for value in problem.values.iter().filter(|v| !v.standing.is_compared()) {
+        groups.entry((value.source, value.standing)).or_default().push(value);
+    }
+    let finding = |((source, standing), values): (&(usize, Standing), &Vec<&ValueUsed>)| Finding {
+        severity: Severity::Caution,
+        code: FindingCode::NotCompared,
+        message: format!(
+            "{} of {} ({}): not compared with the printed table. Compare before relying on it.",
+            list(values.iter().map(|v| v.substance.clone())),
+            problem.sources[*source].id(),
+            standing.word(),
+        ),
+        at: text.place(values[0].used_at.start),
+    };
+    groups.iter().map(finding).collect()
+}
+
+/// A note where results rest on a table whose trailing zeros claim nothing.
+pub(super) fn fixed_decimals(problem: &Problem, outcomes: &[Outcome], text: &Text) -> Vec<Finding> {
+    let decided: Vec<&Outcome> = outcomes
+        .iter()
+        .filter(|outcome| outcome.stated_by == StatedBy::FixedDecimals)
+        .collect();
+    let first = problem.values.iter().find(|v| v.significance == Significance::Unlimited);
+    let (Some(first), false) = (first, decided.is_empty()) else {
+        return Vec::new();
+    };
+    vec![Finding {
+        severity: Severity::Note,
+        code: FindingCode::FixedDecimals,
+        message: format!(
+            "{} prints a fixed number of decimals whatever is known, so its digits limit nothing: \
+             {} stated to 0.1 kJ/mol at the finest (or the like in another unit). [rounding] \
+             states another place.",
+            problem.sources[first.source].id(),
+            named(&decided),
+        ),
+        at: text.place(first.used_at.start),
+    }]
+}
+
+/// A caution where the uncertainty of results does not cover all values used.
+pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -> Vec<Finding> {
+    let short: Vec<&Outcome> = outcomes.iter().filter(|o| !o.is_complete()).collect();
+    let Some(first) = short.first() else {
+        return Vec::new();
+    };
+    let mut silent: Vec<usize> = Vec::new();
+    for outcome in &short {
+        for (index, _) in outcome.form.iter() {
+            let silent_one = problem.values[index].uncertainty == InputUncertainty::NotStated;
+            if silent_one && !silent.contains(&index) && silent.len() <= MOST {
+                silent.push(index);
+            }
+        }
+    }
+    let at = silent.first().map_or(0, |index| problem.values[*index].used_at.start);
+    vec![Finding {
+        severity: Severity::Caution,
+        code: FindingCode::UncertaintyIncomplete,
+        message: format!(
+            "The uncertainty of {} covers {} of {} values used: {} not stated, which is not zero.",
+            named(&short),
+            first.combined.stated,
+            first.combined.of,
+            list(silent.iter().map(|index| {
+                let value = &problem.values[*index];
+                format!("{} ({})", value.substance, problem.sources[value.source].id())
+            })),
+        ),
+        at: text.place(at),
+    }]
+}
+
+/// A note where the case asks for a finer place than the values carry.
+pub(super) fn rounding_finer(outcomes: &[Outcome], at: impl Fn(&str) -> crate::finding::Place) -> Vec<Finding> {
+    let finer = |outcome: &&Outcome| {
+        outcome.stated_by == StatedBy::Rounding
+            && outcome.remark.as_ref().is_some_and(|remark| outcome.stated.place < remark.place)
+    };
+    let finding = |outcome: &Outcome| Finding {
+        severity: Severity::Caution,
+        code: FindingCode::RoundingFiner,
+        message: format!(
+            "[rounding] states {} as {} {}; what is known of it carries {} only.",
+            outcome.id,
+            outcome.stated.value_text,
+            outcome.unit.symbol(),
+            outcome.remark.as_ref().map_or("less", |r| r.value_text.as_str()),
+        ),
+        at: at(&outcome.id),
+    };
+    outcomes.iter().filter(finer).map(finding).collect()
+}
+
+fn named(outcomes: &[&Outcome]) -> String {
+    list(outcomes.iter().map(|outcome| outcome.id.clone()))
+}
+
+/// The first few items of a list, with the number of those left out.
+pub(super) fn list(items: impl Iterator<Item = String>) -> String {
+    let items: Vec<String> = items.collect();
+    let shown = items.iter().take(MOST).cloned().collect::<Vec<_>>().join(", ");
+    match items.len().saturating_sub(MOST) {
+        0 => shown,
+        more => format!("{shown} and {more} more"),
+    }
+}

@@ -1,0 +1,14 @@
+//! What the program has to say about a case: faults, which stop the reading, and findings, which
+//! judge a finished working. Both name a place in a file. Rendering is left to the command line.
+
+mod fault;
+mod nearest;
+mod place;
+mod severity;
+mod text;
+
+pub use fault::{Fault, FaultCode, Faults};
+pub use nearest::{nearest, shorten};
+pub use place::{Located, Place, Span};
+pub use severity::{Finding, FindingCode, Severity};
+pub use text::Text;

@@ -1,0 +1,10 @@
+pub mod notation;
+pub mod quantity;
+pub mod finding;
+pub mod document;
+pub mod case;
+pub mod source;
+pub mod engine;
+pub mod basis;
+pub mod calculation;
+pub mod record;

@@ -1,0 +1,35 @@
+//! The record: what the pages say, as data, and the attachments that travel with them.
+//!
+//! Nothing here knows how pages are laid out or how a PDF is made.
+
+mod assemble;
+mod attachments;
+mod basis_rows;
+mod budget;
+mod cautions;
+mod formation_table;
+mod front;
+mod manifest;
+mod math;
+mod numerals;
+mod pages;
+mod prose;
+mod references;
+mod result_rows;
+mod results_json;
+mod rich;
+mod speak;
+mod stating;
+mod symbols;
+mod tables;
+mod value_rows;
+mod working;
+
+pub use assemble::{Record, assemble};
+pub use attachments::AttachedFile;
+pub use manifest::{MANIFEST_NAME, Manifest, Typesetting};
+pub use math::Math;
+pub use numerals::minus;
+pub use pages::*;
+pub use results_json::results_json;
+pub use rich::{Rich, Run};

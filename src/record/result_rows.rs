@@ -1,0 +1,91 @@
+//! Results as they are stated.
+
+use crate::calculation::Calculation;
+use crate::engine::{COVERAGE, Outcome};
+use crate::quantity::two_digits;
+
+use super::numerals::{minus, unit};
+use super::pages::ResultRow;
+
+pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
+    let mut rows = Vec::new();
+    for (section, reaction) in calculation.working.reactions.iter().enumerate() {
+        let id = &calculation.problem.reactions[reaction.reaction].id;
+        let prefix = format!("{id}.");
+        let own = calculation.working.outcomes.iter().filter(|o| o.id.starts_with(&prefix));
+        rows.extend(own.map(|outcome| result_row(calculation, outcome, section)));
+        if reaction.hess.is_none() {
+            rows.push(not_worked(id, section));
+        }
+    }
+    rows
+}
+
+fn result_row(calculation: &Calculation, outcome: &Outcome, section: usize) -> ResultRow {
+    ResultRow {
+        id: outcome.id.clone(),
+        what: what(calculation, outcome),
+        section,
+        stated: Some(minus(&outcome.stated.value_text)),
+        expanded: stated_uncertainty(outcome),
+        unit: unit(&outcome.unit),
+        direction: Some(outcome.direction().word().to_string()),
+        coverage: coverage(outcome),
+    }
+}
+
+/// A reaction that was not worked stands in the list all the same.
+fn not_worked(id: &str, section: usize) -> ResultRow {
+    ResultRow {
+        id: format!("{id}.heat"),
+        what: "Heat of reaction: not worked, see the findings".to_string(),
+        section,
+        stated: None,
+        expanded: None,
+        unit: String::new(),
+        direction: None,
+        coverage: "not worked".to_string(),
+    }
+}
+
+/// What a result is, in words.
+pub(super) fn what(calculation: &Calculation, outcome: &Outcome) -> String {
+    let (id, quantity) = outcome.id.split_once('.').unwrap_or((&outcome.id, ""));
+    let reaction = calculation.case.reactions.get(id);
+    let per = reaction.and_then(|r| r.per.as_ref()).map_or("", |per| per.value.as_str());
+    match quantity {
+        "heat" => "Heat of reaction at 298.15 K, per mole of reaction as written".to_string(),
+        "heat-per" => format!("Heat of reaction at 298.15 K, per mole of {per}"),
+        _ => format!("Heat of reaction at 298.15 K, per mass of {per}"),
+    }
+}
+
+/// The expanded uncertainty where it covers every value used, otherwise none.
+pub(super) fn stated_uncertainty(outcome: &Outcome) -> Option<String> {
+    outcome.is_complete().then(|| outcome.stated.uncertainty_text.clone())?
+}
+
+/// What the uncertainty covers, in words.
+pub(super) fn coverage(outcome: &Outcome) -> String {
+    let (stated, of) = (outcome.combined.stated, outcome.combined.of);
+    match (outcome.expanded, of) {
+        (_, 0) => "exact".to_string(),
+        (Some(_), _) if outcome.is_complete() => {
+            format!("k = {COVERAGE}, about 95 %; covers all {of} values used")
+        }
+        (Some(expanded), _) => format!(
+            "covers {stated} of {of} values used; those alone give ±{} {} (k = {COVERAGE})",
+            two_digits(expanded),
+            unit(&outcome.unit)
+        ),
+        (None, _) => format!("not stated by any of {of} values used"),
+    }
+}
+
+/// A result in running text: −552.6 ± 0.8 kJ/mol.
+pub(super) fn in_words(outcome: &Outcome) -> String {
+    let value = minus(&outcome.stated.value_text);
+    let uncertainty = stated_uncertainty(outcome);
+    let uncertainty = uncertainty.map_or(String::new(), |u| format!("\u{a0}±\u{a0}{u}"));
+    format!("{value}{uncertainty}\u{a0}{}", unit(&outcome.unit))
+}

@@ -1,0 +1,116 @@
+//! The equations that the working shows in symbols.
+
+use super::math::Math;
+
+fn symbol(text: &str) -> Math {
+    Math::Symbol { text: text.into() }
+}
+
+fn upright(text: &str) -> Math {
+    Math::Upright { text: text.into() }
+}
+
+fn row(of: Vec<Math>) -> Math {
+    Math::Row { of }
+}
+
+fn with_sub(base: Math, sub: Math) -> Math {
+    Math::Attach {
+        base: Box::new(base),
+        sub: Some(Box::new(sub)),
+        sup: None,
+    }
+}
+
+fn with_both(base: Math, sub: Math, sup: Math) -> Math {
+    Math::Attach {
+        base: Box::new(base),
+        sub: Some(Box::new(sub)),
+        sup: Some(Box::new(sup)),
+    }
+}
+
+/// Δ_x H°_i
+fn enthalpy(of: &str, index: Option<&str>) -> Math {
+    let h = match index {
+        Some(index) => with_both(symbol("H"), symbol(index), upright("°")),
+        None => Math::Attach {
+            base: Box::new(symbol("H")),
+            sub: None,
+            sup: Some(Box::new(upright("°"))),
+        },
+    };
+    row(vec![with_sub(upright("Δ"), upright(of)), h])
+}
+
+fn sum(index: &str) -> Math {
+    Math::Sum {
+        index: Box::new(symbol(index)),
+    }
+}
+
+/// Δ_rH° = Σ_i ν_i Δ_fH°_i
+pub(super) fn hess_law() -> Math {
+    row(vec![
+        enthalpy("r", None),
+        upright("="),
+        sum("i"),
+        with_sub(symbol("ν"), symbol("i")),
+        enthalpy("f", Some("i")),
+    ])
+}
+
+/// u²(y) = Σ_i (c_i u_i)² + Σ_i≠j r_ij c_i c_j u_i u_j; U = 2 u
+pub(super) fn combined_uncertainty() -> Math {
+    let indexed = |base: &str, index: &str| with_sub(symbol(base), symbol(index));
+    row(vec![
+        Math::Attach {
+            base: Box::new(symbol("u")),
+            sub: None,
+            sup: Some(Box::new(upright("2"))),
+        },
+        upright("="),
+        sum("i"),
+        with_both(symbol("c"), symbol("i"), upright("2")),
+        with_both(symbol("u"), symbol("i"), upright("2")),
+        upright("+"),
+        upright("2"),
+        Math::Sum {
+            index: Box::new(row(vec![symbol("i"), upright("<"), symbol("j")])),
+        },
+        with_sub(symbol("r"), row(vec![symbol("i"), symbol("j")])),
+        indexed("c", "i"),
+        indexed("c", "j"),
+        indexed("u", "i"),
+        indexed("u", "j"),
+    ])
+}
+
+/// M = Σ_k n_k A_k
+pub(super) fn molar_mass_sum() -> Math {
+    row(vec![
+        symbol("M"),
+        upright("="),
+        sum("k"),
+        with_sub(symbol("n"), symbol("k")),
+        with_sub(symbol("A"), symbol("k")),
+    ])
+}
+
+/// Δ_rh = Δ_rH° / (|ν| M)
+pub(super) fn per_mass_quotient() -> Math {
+    row(vec![
+        with_sub(upright("Δ"), upright("r")),
+        symbol("h"),
+        upright("="),
+        Math::Fraction {
+            over: Box::new(enthalpy("r", None)),
+            under: Box::new(row(vec![
+                upright("|"),
+                symbol("ν"),
+                upright("|"),
+                symbol("M"),
+            ])),
+        },
+    ])
+}

@@ -1,0 +1,55 @@
+//! The sources that are there from the first minute.
+
+use crate::finding::Text;
+
+use super::glenn_entries;
+use super::read::read_source;
+use super::store::Source;
+
+/// The conventions: elements in their reference states, the hydrogen ion and the electron.
+pub(super) const CONVENTIONS: &str = "conventions";
+pub(super) const ATOMIC_WEIGHTS: &str = "atomic-weights-2021";
+const GLENN: &str = "nasa-glenn-2021";
+
+/// Source files that are part of the program.
+const FILES: [(&str, &str); 4] = [
+    (CONVENTIONS, include_str!("data/conventions.toml")),
+    ("codata-1989", include_str!("data/codata-1989.toml")),
+    (ATOMIC_WEIGHTS, include_str!("data/atomic-weights-2021.toml")),
+    ("constants-2022", include_str!("data/constants-2022.toml")),
+];
+
+/// The ids of all built-in sources.
+pub const BUILT_IN: [&str; 5] = [
+    CONVENTIONS,
+    "codata-1989",
+    GLENN,
+    ATOMIC_WEIGHTS,
+    "constants-2022",
+];
+
+/// A built-in source by its id.
+pub fn built_in(id: &str) -> Option<Source> {
+    if id == GLENN {
+        return Some(Source::glenn(glenn_entries::head(GLENN)));
+    }
+    let (name, content) = FILES.iter().find(|(name, _)| *name == id)?;
+    read_source(&Text::new(*name, *content)).0
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn every_built_in_source_reads_without_fault_and_bears_its_id() {
+        for (id, content) in FILES {
+            let (source, faults) = read_source(&Text::new(id, content));
+            assert_eq!(faults.into_sorted(), [], "{id}");
+            assert_eq!(source.map(|s| s.head.id), Some(id.to_string()));
+        }
+        for id in BUILT_IN {
+            assert!(built_in(id).is_some(), "{id}");
+        }
+    }
+}

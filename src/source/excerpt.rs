@@ -1,0 +1,204 @@
+//! What of a source travels with a record: the entries that decided something, as a source file.
+
+use std::collections::BTreeSet;
+
+use serde::Serialize;
+
+use crate::notation::Species;
+use crate::quantity::{Decimal, Quantity};
+
+use super::heat_capacity::HeatCapacity;
+use super::model::{Digits, Entry, SourceHead, Subject};
+use super::problem::{Problem, ValueKind};
+use super::standing::Standing;
+use super::store::Source;
+
+/// The name under which a source's excerpt is attached.
+pub fn attachment_name(id: &str) -> String {
+    format!("source-{id}.toml")
+}
+
+/// For each source of a problem, its excerpt as TOML: all forms of the formulas that the case
+/// names, and the atomic weights used. The head names the SHA-256 of the whole file.
+pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
+    let mut formulas: BTreeSet<String> = BTreeSet::new();
+    for substance in &problem.substances {
+        formulas.insert(substance.species.formula.hill());
+    }
+    let states = reference_formulas(problem);
+    let excerpt = |(index, source): (usize, &Source)| {
+        let mut wanted = formulas.clone();
+        if index == 0 {
+            wanted.extend(states.iter().cloned());
+        }
+        let entries = entries(problem, index, source, &wanted);
+        (attachment_name(source.id()), text(source, &entries))
+    };
+    problem.sources.iter().enumerate().map(excerpt).collect()
+}
+
+/// Formation equations are written from the reference states, which therefore travel as well.
+fn reference_formulas(problem: &Problem) -> BTreeSet<String> {
+    let elements = problem.substances.iter().flat_map(|s| s.species.formula.counts().keys());
+    let states = elements.filter_map(|e| problem.reference_states.of_element(*e));
+    let mut formulas: BTreeSet<String> = states.map(|s| s.formula.hill()).collect();
+    // The electron stands in the formation equations of ions.
+    if let Ok(electron) = Species::parse("e-") {
+        formulas.insert(electron.formula.hill());
+    }
+    formulas
+}
+
+fn entries(
+    problem: &Problem,
+    index: usize,
+    source: &Source,
+    formulas: &BTreeSet<String>,
+) -> Vec<Entry> {
+    let mut entries: Vec<Entry> = formulas.iter().flat_map(|f| source.of_composition(f)).collect();
+    let weights = problem.values.iter();
+    let weights = weights.filter(|v| v.source == index && v.kind == ValueKind::AtomicWeight);
+    entries.extend(weights.filter_map(|v| source.of_symbol(&v.substance)).cloned());
+    entries
+}
+
+#[derive(Serialize)]
+struct File {
+    source: toml::Table,
+    #[serde(skip_serializing_if = "Vec::is_empty")]
+    entry: Vec<toml::Table>,
+    #[serde(skip_serializing_if = "Vec::is_empty")]
+    correlation: Vec<toml::Table>,
+    #[serde(skip_serializing_if = "Vec::is_empty")]
+    erratum: Vec<toml::Table>,
+}
+
+fn text(source: &Source, entries: &[Entry]) -> String {
+    let named = |species: &Species| {
+        let mut all = entries.iter().flat_map(Entry::notations);
+        all.any(|other| other == species)
+    };
+    let correlations = source.correlations.iter();
+    let correlations = correlations.filter(|c| c.between.iter().all(named));
+    let file = File {
+        source: head(&source.head),
+        entry: entries.iter().map(entry).collect(),
+        correlation: correlations.map(correlation).collect(),
+        erratum: source.errata.iter().map(erratum).collect(),
+    };
+    // Tables of strings and arrays of them always have a TOML form.
+    toml::to_string(&file).expect("an excerpt is made of strings")
+}
+
+/// A table filled key by key; what is not there is left out.
+#[derive(Default)]
+struct Fields(toml::Table);
+
+impl Fields {
+    fn put(mut self, key: &str, value: Option<impl Into<toml::Value>>) -> Fields {
+        if let Some(value) = value {
+            self.0.insert(key.to_string(), value.into());
+        }
+        self
+    }
+}
+
+fn head(head: &SourceHead) -> toml::Table {
+    let digits = match head.digits {
+        Digits::Significant => "significant",
+        Digits::FixedDecimals => "fixed-decimals",
+    };
+    let states = head.reference_states.iter().map(|(element, species)| {
+        (element.symbol().to_string(), toml::Value::from(species.to_string()))
+    });
+    let states: toml::Table = states.collect();
+    Fields::default()
+        .put("id", Some(head.id.clone()))
+        .put("title", Some(head.title.clone()))
+        .put("authors", head.authors.clone())
+        .put("year", head.year.clone())
+        .put("publisher", head.publisher.clone())
+        .put("report", head.report.clone())
+        .put("edition", head.edition.clone())
+        .put("doi", head.doi.clone())
+        .put("licence", head.licence.clone())
+        .put("temperature", head.temperature.as_ref().map(Quantity::to_string))
+        .put("pressure", head.pressure.as_ref().map(Quantity::to_string))
+        .put("energy-unit", head.energy_unit.as_ref().map(|u| u.symbol().to_string()))
+        .put("coverage", head.coverage_text.clone())
+        .put("gas-constant", head.gas_constant.as_ref().map(|r| r.printed().to_string()))
+        .put("digits", Some(digits))
+        .put("standing", Some(head.standing.word()))
+        .put("extract-of", Some(head.sha256.clone()))
+        .put("reference-states", (!states.is_empty()).then_some(states))
+        .0
+}
+
+fn entry(entry: &Entry) -> toml::Table {
+    let subject = match &entry.subject {
+        Subject::Species(species) => species.to_string(),
+        Subject::Symbol(symbol) => symbol.clone(),
+    };
+    let also: Vec<String> = entry.also.iter().map(Species::to_string).collect();
+    let functions: Vec<toml::Table> = entry.heat_capacity.iter().map(heat_capacity).collect();
+    let transitions: Vec<toml::Table> = entry.transitions.iter().map(transition).collect();
+    Fields::default()
+        .put("substance", Some(subject))
+        .put("also", (!also.is_empty()).then_some(also))
+        .put("name", entry.name.clone())
+        .put("cas", entry.cas.clone())
+        .put("locator", Some(entry.locator.clone()))
+        .put("note", entry.note.clone())
+        .put("standing", Some(Standing::word(entry.standing)))
+        .put("reference-for", entry.reference_for.map(|e| e.symbol()))
+        .put("formation-enthalpy", entry.formation_enthalpy.as_ref().map(number_text))
+        .put("combustion-enthalpy", entry.combustion_enthalpy.as_ref().map(number_text))
+        .put("atomic-weight", entry.atomic_weight.as_ref().map(number_text))
+        .put("value", entry.value.as_ref().map(Quantity::to_string))
+        .put("heat-capacity", (!functions.is_empty()).then_some(functions))
+        .put("transitions", (!transitions.is_empty()).then_some(transitions))
+        .0
+}
+
+fn heat_capacity(function: &HeatCapacity) -> toml::Table {
+    let range = function.range.as_ref().map(|range| range.each_ref().map(Quantity::to_string).to_vec());
+    let printed = |decimal: &Decimal| decimal.printed().to_string();
+    let coefficients: Vec<String> = function.coefficients.iter().map(printed).collect();
+    let points = function.points.iter().map(|point| point.each_ref().map(printed).to_vec());
+    let points: Vec<Vec<String>> = points.collect();
+    Fields::default()
+        .put("form", Some(function.form.word()))
+        .put("range", range)
+        .put("coefficients", (!coefficients.is_empty()).then_some(coefficients))
+        .put("points", (!points.is_empty()).then_some(points))
+        .0
+}
+
+fn transition(transition: &super::model::Transition) -> toml::Table {
+    Fields::default()
+        .put("to", Some(transition.to.to_string()))
+        .put("temperature", Some(transition.temperature.to_string()))
+        .put("enthalpy", Some(transition.enthalpy.to_string()))
+        .0
+}
+
+fn correlation(stated: &super::model::StatedCorrelation) -> toml::Table {
+    let between = stated.between.each_ref().map(Species::to_string).to_vec();
+    Fields::default()
+        .put("between", Some(between))
+        .put("coefficient", Some(stated.coefficient.printed().to_string()))
+        .0
+}
+
+fn erratum(erratum: &super::model::Erratum) -> toml::Table {
+    Fields::default()
+        .put("text", Some(erratum.text.clone()))
+        .put("date", erratum.date.clone())
+        .put("authority", erratum.authority.clone())
+        .0
+}
+
+/// The number of a quantity whose unit the head of the source states.
+fn number_text(quantity: &Quantity) -> String {
+    quantity.printed_number().to_string()
+}

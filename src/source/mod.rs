@@ -1,0 +1,41 @@
+//! Sources: published tables and what they say, and the case's substances resolved against them.
+//!
+//! From here on every number carries where it came from. The built-in sources are data in
+//! `source/data/`; a user's own come from files in the same format. Reading a case is not done
+//! here, working it neither.
+
+mod builtin;
+mod choose;
+mod compare;
+mod consult;
+mod excerpt;
+mod glenn;
+mod glenn_entries;
+mod heat_capacity;
+mod matching;
+mod model;
+mod problem;
+mod read;
+mod read_entry;
+mod reference_states;
+mod resolve;
+mod search;
+mod standing;
+mod store;
+mod suggest;
+mod unbalanced;
+
+pub use builtin::{BUILT_IN, built_in};
+pub use consult::{Consultation, SourceFiles, consult};
+pub use excerpt::{attachment_name, excerpts};
+pub use heat_capacity::{Form, HeatCapacity};
+pub use model::{Digits, Entry, SourceHead, Subject};
+pub use problem::{
+    Comparison, Judgement, Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
+};
+pub use read::{read_source, sha256_hex};
+pub use reference_states::ReferenceStates;
+pub use resolve::resolve;
+pub use search::{Hit, search};
+pub use standing::Standing;
+pub use store::Source;

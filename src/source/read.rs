@@ -1,0 +1,246 @@
+//! Reading a source file in the project's own format.
+
+use sha2::{Digest, Sha256};
+
+use crate::document::{Document, Reader, Table, one_of, quantity, unit, value_fault};
+use crate::document::{species, with_document};
+use crate::finding::{Faults, Located, Text};
+use crate::notation::Element;
+use crate::quantity::{Coverage, Decimal, StatedUncertainty};
+
+use super::model::{Digits, Entry, Erratum, SourceHead, StatedCorrelation};
+use super::read_entry::{EntryRules, read_entry};
+use super::standing::Standing;
+use super::store::Source;
+
+const HEAD_KEYS: [&str; 19] = [
+    "id",
+    "title",
+    "authors",
+    "year",
+    "publisher",
+    "report",
+    "edition",
+    "doi",
+    "licence",
+    "temperature",
+    "pressure",
+    "energy-unit",
+    "coverage",
+    "gas-constant",
+    "digits",
+    "standing",
+    "reference-states",
+    "note",
+    "extract-of",
+];
+
+/// Reads a source file. The source is there only where no fault was found.
+pub fn read_source(text: &Text) -> (Option<Source>, Faults) {
+    let (source, faults) = with_document(text, |document| read_document(document, text));
+    let source = if faults.is_empty() { source } else { None };
+    (source, faults)
+}
+
+fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
+    let root = &document.root;
+    root.only(&["source", "entry", "correlation", "erratum"]);
+    let Some(table) = root.table("source") else {
+        root.missing("source", "begin the file with a [source] table: id, title, …");
+        return None;
+    };
+    let head = read_head(&table, text)?;
+    let rules = EntryRules::of(&head);
+    let entries = root.tables("entry");
+    let entries: Vec<Entry> = entries.iter().filter_map(|t| read_entry(t, &rules)).collect();
+    require_for_entries(&table, &head, &entries);
+    let correlations = root.tables("correlation");
+    let correlations = correlations.iter().filter_map(read_correlation);
+    let errata = root.tables("erratum");
+    let errata = errata.iter().filter_map(read_erratum);
+    Some(Source::listed(
+        head,
+        entries,
+        correlations.collect(),
+        errata.collect(),
+    ))
+}
+
+/// What the entries need the head to say, so that nothing about them is guessed.
+fn require_for_entries(table: &Table<'_, '_>, head: &SourceHead, entries: &[Entry]) {
+    let enthalpies = entries.iter().any(|entry| entry.formation_enthalpy.is_some());
+    if enthalpies && head.temperature.is_none() && table.get("temperature").is_none() {
+        table.missing("temperature", "state the reference temperature: temperature = \"298.15 K\"");
+    }
+    let stated = entries.iter().flat_map(|e| [&e.formation_enthalpy, &e.atomic_weight]);
+    let mut stated = stated.flatten().filter_map(|q| q.uncertainty.as_ref());
+    let expanded = stated.any(|u| matches!(u, StatedUncertainty::Expanded { .. }));
+    if expanded && head.coverage_text.is_none() {
+        table.missing("coverage", "say what ± covers in this table: coverage = \"2\" for about 95 %");
+    }
+}
+
+fn read_head(table: &Table<'_, '_>, text: &Text) -> Option<SourceHead> {
+    table.only(&HEAD_KEYS);
+    let reader = table.reader();
+    let owned = |key| table.string(key).map(|text| text.value);
+    let measured = |key| {
+        let text = table.string(key)?;
+        quantity(reader, &text).map(|q| q.value)
+    };
+    let id = table.required_string("id", "name the source as cases will consult it");
+    let title = table.required_string("title", "give the title as it is cited");
+    let coverage = table.string("coverage");
+    let energy = table.string("energy-unit");
+    let constant = table.string("gas-constant");
+    Some(SourceHead {
+        id: checked_id(reader, id)?,
+        title: title?.value,
+        authors: read_authors(table),
+        year: table.get("year").and_then(|value| value.word()),
+        publisher: owned("publisher"),
+        report: owned("report"),
+        edition: owned("edition"),
+        doi: owned("doi"),
+        licence: owned("licence"),
+        temperature: measured("temperature"),
+        pressure: measured("pressure"),
+        energy_unit: energy.and_then(|text| unit(reader, &text)),
+        coverage: coverage.as_ref().map_or(Coverage::default(), |text| read_coverage(reader, text)),
+        coverage_text: coverage.map(|text| text.value),
+        gas_constant: constant.and_then(|text| read_decimal(reader, &text)),
+        digits: read_digits(table),
+        standing: read_standing(table).unwrap_or(Standing::EnteredOnce),
+        reference_states: read_reference_states(table),
+        sha256: owned("extract-of").unwrap_or_else(|| sha256_hex(text.as_str().as_bytes())),
+    })
+}
+
+/// The SHA-256 of some bytes as 64 hexadecimal digits.
+pub fn sha256_hex(bytes: &[u8]) -> String {
+    let digest = Sha256::digest(bytes);
+    digest.iter().map(|byte| format!("{byte:02x}")).collect()
+}
+
+fn checked_id(reader: &Reader<'_>, id: Option<Located<String>>) -> Option<String> {
+    let id = id?;
+    let fits = |c: char| c.is_ascii_lowercase() || c.is_ascii_digit() || "-.".contains(c);
+    if id.value.is_empty() || !id.value.chars().all(fits) || id.value.starts_with('.') {
+        value_fault(
+            reader,
+            &id.span,
+            format!("\"{}\"", id.value),
+            "an id of lower-case letters, digits, hyphens and points",
+            "the id becomes the name of an attachment: choose a plain one",
+        );
+        return None;
+    }
+    Some(id.value)
+}
+
+/// One string, or an array of names.
+fn read_authors(table: &Table<'_, '_>) -> Option<String> {
+    let value = table.get("authors")?;
+    if value.is_string() {
+        return Some(value.string()?.value);
+    }
+    let names: Vec<String> = value.strings().into_iter().map(|a| a.value).collect();
+    Some(names.join("; "))
+}
+
+fn read_coverage(reader: &Reader<'_>, text: &Located<String>) -> Coverage {
+    Coverage::parse(&text.value).unwrap_or_else(|error| {
+        value_fault(reader, &text.span, error.found(), error.expected(), error.advice());
+        Coverage::default()
+    })
+}
+
+/// A plain decimal number in a string.
+pub(super) fn read_decimal(reader: &Reader<'_>, text: &Located<String>) -> Option<Decimal> {
+    let decimal = Decimal::parse(&text.value);
+    if let Err(error) = &decimal {
+        value_fault(
+            reader,
+            &text.span,
+            format!("\"{}\"", text.value),
+            "a decimal number as printed",
+            error.advice(),
+        );
+    }
+    decimal.ok()
+}
+
+fn read_digits(table: &Table<'_, '_>) -> Digits {
+    const CHOICES: [(&str, Digits); 2] = [
+        ("significant", Digits::Significant),
+        ("fixed-decimals", Digits::FixedDecimals),
+    ];
+    let text = table.string("digits");
+    text.and_then(|text| one_of(table.reader(), &text, &CHOICES))
+        .unwrap_or(Digits::Significant)
+}
+
+/// The standing that a table states, where it states one.
+pub(super) fn read_standing(table: &Table<'_, '_>) -> Option<Standing> {
+    let choices = Standing::ALL.map(|standing| (standing.word(), standing));
+    one_of(table.reader(), &table.string("standing")?, &choices)
+}
+
+fn read_reference_states(table: &Table<'_, '_>) -> Vec<(Element, crate::notation::Species)> {
+    let Some(states) = table.table("reference-states") else {
+        return Vec::new();
+    };
+    let mut read = Vec::new();
+    for (symbol, value) in states.entries() {
+        let state = value.string().and_then(|s| species(states.reader(), &s));
+        match (Element::from_symbol(&symbol.value), state) {
+            (Some(element), Some(state)) => read.push((element, state)),
+            (None, _) => value_fault(
+                states.reader(),
+                &symbol.span,
+                format!("`{}`", symbol.value),
+                "the symbol of an element",
+                "write it as P = \"P(cr, white)\"",
+            ),
+            _ => {}
+        }
+    }
+    read
+}
+
+fn read_correlation(table: &Table<'_, '_>) -> Option<StatedCorrelation> {
+    table.only(&["between", "coefficient", "locator", "note"]);
+    let reader = table.reader();
+    let between: Vec<_> = table.strings("between").iter().filter_map(|s| species(reader, s)).collect();
+    let coefficient = table.required_string("coefficient", "state r, between -1 and 1")?;
+    let decimal = read_decimal(reader, &coefficient)?;
+    let one = crate::quantity::Exact::from_integer(1.into());
+    if decimal.value() > one || decimal.value() < -one {
+        value_fault(
+            reader,
+            &coefficient.span,
+            format!("\"{}\"", coefficient.value),
+            "a correlation coefficient from -1 to 1",
+            "check the number in the source",
+        );
+        return None;
+    }
+    let Ok(between) = <[_; 2]>::try_from(between) else {
+        table.missing("between", "name the two substances: between = [\"H2O(l)\", \"H2O(g)\"]");
+        return None;
+    };
+    Some(StatedCorrelation {
+        between,
+        coefficient: decimal,
+    })
+}
+
+fn read_erratum(table: &Table<'_, '_>) -> Option<Erratum> {
+    table.only(&["text", "date", "authority", "substance"]);
+    let text = table.required_string("text", "say what was corrected")?;
+    Some(Erratum {
+        text: text.value,
+        date: table.string("date").map(|d| d.value),
+        authority: table.string("authority").map(|a| a.value),
+    })
+}

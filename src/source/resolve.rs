@@ -1,0 +1,361 @@
+//! From a case and its sources to a problem.
+
+use std::collections::BTreeMap;
+
+use crate::case::{Case, DeclaredKind, Reaction};
+use crate::finding::{Fault, FaultCode, Faults, Finding, Located, Span, Text};
+use crate::notation::{Formula, Participant, Species, Term, balanced_form, imbalance};
+use crate::quantity::{Correlations, Exact, Quantity, to_f64};
+
+use super::builtin::ATOMIC_WEIGHTS;
+use super::choose::{Chosen, choose};
+use super::compare::compare;
+use super::consult::{Consultation, SourceFiles, load_built_in};
+use super::matching::Wanted;
+use super::model::Digits;
+use super::problem::{
+    Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
+};
+use super::reference_states::ReferenceStates;
+use super::store::Source;
+use super::unbalanced::unbalanced;
+use crate::quantity::{InputUncertainty, Significance};
+
+/// Resolves every substance of a case. All faults are reported; the problem is there only where
+/// there are none.
+pub fn resolve(
+    case: &Case,
+    text: &Text,
+    consultation: Consultation,
+    files: &dyn SourceFiles,
+) -> (Option<Problem>, Faults) {
+    let mut resolver = Resolver::new(case, text, consultation);
+    if case.reactions.values().any(|reaction| reaction.per.is_some()) {
+        resolver.add_atomic_weights(files);
+    }
+    let reactions = case.reactions.values();
+    let reactions: Vec<_> = reactions.map(|reaction| resolver.reaction(reaction)).collect();
+    resolver.check_choices();
+    let faults = std::mem::take(&mut resolver.faults);
+    let problem = faults.is_empty().then(|| resolver.problem(reactions));
+    (problem, faults)
+}
+
+/// What is known so far.
+pub(super) struct Resolver<'a> {
+    pub(super) case: &'a Case,
+    pub(super) text: &'a Text,
+    pub(super) sources: Vec<Source>,
+    consulted: usize,
+    became: Vec<(String, usize)>,
+    /// By the label of the case; none where it could not be resolved, so that the fault is
+    /// reported once.
+    known: BTreeMap<String, Option<usize>>,
+    substances: Vec<Substance>,
+    values: Vec<ValueUsed>,
+    atomic_weights: BTreeMap<String, usize>,
+    pub(super) findings: Vec<Finding>,
+    pub(super) faults: Faults,
+}
+
+impl<'a> Resolver<'a> {
+    fn new(case: &'a Case, text: &'a Text, consultation: Consultation) -> Resolver<'a> {
+        Resolver {
+            case,
+            text,
+            consulted: consultation.sources.len(),
+            sources: consultation.sources,
+            became: consultation.became,
+            known: BTreeMap::new(),
+            substances: Vec::new(),
+            values: Vec::new(),
+            atomic_weights: BTreeMap::new(),
+            findings: Vec::new(),
+            faults: Faults::default(),
+        }
+    }
+
+    fn add_atomic_weights(&mut self, files: &dyn SourceFiles) {
+        if self.sources.iter().any(|source| source.id() == ATOMIC_WEIGHTS) {
+            return;
+        }
+        let (source, faults) = load_built_in(ATOMIC_WEIGHTS, files);
+        self.faults.extend(faults);
+        self.sources.extend(source);
+    }
+
+    fn problem(self, reactions: Vec<Option<ProblemReaction>>) -> Problem {
+        let correlations = self.correlations();
+        Problem {
+            // The conventions are always the first source.
+            reference_states: ReferenceStates::of(&self.sources[0]),
+            consulted: self.consulted,
+            became: self.became,
+            substances: self.substances,
+            values: self.values,
+            reactions: reactions.into_iter().flatten().collect(),
+            correlations,
+            findings: self.findings,
+            sources: self.sources,
+        }
+    }
+
+    fn reaction(&mut self, reaction: &Reaction) -> Option<ProblemReaction> {
+        let equation = &reaction.equation;
+        self.check_balance(reaction);
+        let sides = [(&equation.value.left, -1), (&equation.value.right, 1)];
+        let mut terms = Vec::new();
+        let mut complete = true;
+        for (term, sign) in sides.iter().flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
+        {
+            let place = self.term_span(equation, term);
+            let Some(substance) = self.participant(&term.participant, &place) else {
+                complete = false;
+                continue;
+            };
+            let nu = &term.coefficient * Exact::from_integer((*sign).into());
+            terms.push(ProblemTerm { substance, nu });
+        }
+        if !complete {
+            return None;
+        }
+        let all = equation.value.left.iter().chain(&equation.value.right);
+        let names: Vec<String> = all.map(|term| term.participant.to_string()).collect();
+        let per = reaction.per.as_ref();
+        let per = per.and_then(|per| names.iter().position(|name| *name == per.value));
+        let molar_mass = per.map_or_else(Vec::new, |index| {
+            let species = self.substances[terms[index].substance].species.clone();
+            self.molar_mass(&species, &reaction.equation.span)
+        });
+        Some(ProblemReaction {
+            id: reaction.id.value.clone(),
+            equation: equation.value.clone(),
+            terms,
+            per,
+            molar_mass,
+            temperature: reaction.temperature.clone().map(|t| (t.value, t.span)),
+            span: equation.span.clone(),
+        })
+    }
+
+    /// The place of a term inside the literal that holds the equation.
+    fn term_span(&self, equation: &Located<crate::notation::Equation>, term: &Term) -> Span {
+        // The literal starts with one quote, or with three.
+        let literal = self.text.slice(&equation.span);
+        let quote = if literal.starts_with("\"\"\"") || literal.starts_with("'''") { 3 } else { 1 };
+        let start = equation.span.start + quote + term.span.start;
+        let end = equation.span.start + quote + term.span.end;
+        match end < equation.span.end {
+            true => start..end,
+            false => equation.span.clone(),
+        }
+    }
+
+    fn participant(&mut self, participant: &Participant, span: &Span) -> Option<usize> {
+        let label = participant.to_string();
+        if let Some(known) = self.known.get(&label) {
+            return *known;
+        }
+        let found = self.wanted(participant).and_then(|wanted| self.substance(&wanted, span));
+        self.known.insert(label, found);
+        found
+    }
+
+    /// What the case asks for; none where the reading of the case has reported it already.
+    fn wanted(&self, participant: &Participant) -> Option<Wanted> {
+        match participant {
+            Participant::Species(species) => Some(Wanted {
+                label: species.to_string(),
+                species: species.clone(),
+                names: Vec::new(),
+                cas: None,
+            }),
+            Participant::Declared(id) => {
+                let declared = self.case.substances.get(id)?;
+                let DeclaredKind::Compound { formula, phase } = &declared.kind else {
+                    return None;
+                };
+                let names = std::iter::once(id.clone()).chain(declared.name.clone());
+                Some(Wanted {
+                    label: id.clone(),
+                    species: Species {
+                        formula: formula.clone(),
+                        phase: Some(phase.clone()),
+                    },
+                    names: names.collect(),
+                    cas: declared.cas.clone(),
+                })
+            }
+        }
+    }
+
+    fn substance(&mut self, wanted: &Wanted, span: &Span) -> Option<usize> {
+        let chosen = choose(self, wanted, span)?;
+        let value = self.value_used(&chosen, span);
+        let comparisons = compare(self, wanted, &chosen, &self.values[value].clone(), span);
+        // `choose` returns entries of species alone.
+        let species = chosen.entry.species().cloned().unwrap_or(wanted.species.clone());
+        self.substances.push(Substance {
+            label: wanted.label.clone(),
+            species,
+            name: chosen.entry.name.clone(),
+            value,
+            comparisons,
+        });
+        Some(self.substances.len() - 1)
+    }
+
+    /// The same entry under two labels is one value.
+    fn value_used(&mut self, chosen: &Chosen, span: &Span) -> usize {
+        let printed = chosen.value.clone();
+        let entry = &chosen.entry;
+        let substance = entry.species().map_or_else(String::new, Species::to_string);
+        let same = |v: &ValueUsed| {
+            v.source == chosen.source && v.substance == substance && v.locator == entry.locator
+        };
+        if let Some(index) = self.values.iter().position(same) {
+            return index;
+        }
+        let head = &self.sources[chosen.source].head;
+        let significance = match (printed.exact, head.digits) {
+            (true, _) => Significance::Exact,
+            (false, Digits::FixedDecimals) => Significance::Unlimited,
+            (false, Digits::Significant) => Significance::Place(printed.decimal.place()),
+        };
+        let value = ValueUsed {
+            source: chosen.source,
+            kind: ValueKind::FormationEnthalpy,
+            substance,
+            species: entry.species().cloned(),
+            name: entry.name.clone(),
+            significance,
+            uncertainty: input_uncertainty(&printed, head),
+            printed,
+            locator: entry.locator.clone(),
+            note: entry.note.clone(),
+            standing: entry.standing,
+            used_at: span.clone(),
+        };
+        self.values.push(value);
+        self.values.len() - 1
+    }
+
+    /// The atomic weights that make up a molar mass, with the counts of atoms.
+    fn molar_mass(&mut self, species: &Species, span: &Span) -> Vec<(usize, Exact)> {
+        let counts = species.formula.counts().clone();
+        let weights = counts.into_iter().filter_map(|(element, count)| {
+            Some((self.atomic_weight(element.symbol(), span)?, count))
+        });
+        weights.collect()
+    }
+
+    fn atomic_weight(&mut self, symbol: &str, span: &Span) -> Option<usize> {
+        if let Some(index) = self.atomic_weights.get(symbol) {
+            return Some(*index);
+        }
+        let source = self.sources.iter().position(|s| s.id() == ATOMIC_WEIGHTS)?;
+        let head = &self.sources[source].head;
+        let Some(entry) = self.sources[source].of_symbol(symbol) else {
+            self.faults.push(Fault::new(
+                FaultCode::UnknownSubstance,
+                self.text,
+                span,
+                format!("the element {symbol}"),
+                format!("an element with a standard atomic weight in {ATOMIC_WEIGHTS}"),
+                "leave `per` out: its molar mass is not known here",
+            ));
+            return None;
+        };
+        let printed = entry.atomic_weight.clone()?;
+        self.values.push(ValueUsed {
+            source,
+            kind: ValueKind::AtomicWeight,
+            substance: symbol.to_string(),
+            species: None,
+            name: entry.name.clone(),
+            significance: Significance::Place(printed.decimal.place()),
+            uncertainty: input_uncertainty(&printed, head),
+            printed,
+            locator: entry.locator.clone(),
+            note: entry.note.clone(),
+            standing: entry.standing,
+            used_at: span.clone(),
+        });
+        self.atomic_weights.insert(symbol.to_string(), self.values.len() - 1);
+        Some(self.values.len() - 1)
+    }
+
+    fn check_balance(&mut self, reaction: &Reaction) {
+        let equation = &reaction.equation;
+        let sides = [&equation.value.left, &equation.value.right];
+        let [left, right] = sides.map(|side| side.iter().filter_map(|t| self.formula_of(t)).collect::<Vec<_>>());
+        if left.len() != equation.value.left.len() || right.len() != equation.value.right.len() {
+            return;
+        }
+        let signed = |side: &[(Exact, Formula)], sign: i32| -> Vec<(Exact, Formula)> {
+            let sign = Exact::from_integer(sign.into());
+            side.iter().map(|(c, f)| (c * &sign, f.clone())).collect()
+        };
+        let mut terms = signed(&left, -1);
+        terms.extend(signed(&right, 1));
+        let terms: Vec<(Exact, &Formula)> = terms.iter().map(|(c, f)| (c.clone(), f)).collect();
+        let off = imbalance(&terms);
+        if off.is_empty() {
+            return;
+        }
+        let formulas = |side: &'_ [(Exact, Formula)]| side.iter().map(|(_, f)| f.clone()).collect::<Vec<_>>();
+        let (left, right) = (formulas(&left), formulas(&right));
+        let form = balanced_form(&left.iter().collect::<Vec<_>>(), &right.iter().collect::<Vec<_>>());
+        self.faults.push(unbalanced(self.text, reaction, &off, form.as_deref()));
+    }
+
+    fn formula_of(&self, term: &Term) -> Option<(Exact, Formula)> {
+        let formula = self.wanted(&term.participant)?.species.formula;
+        Some((term.coefficient.clone(), formula))
+    }
+
+    /// A choice for a substance that no reaction names is a slip that should not pass.
+    fn check_choices(&mut self) {
+        for choice in &self.case.choices {
+            let label = Species::parse(&choice.substance.value)
+                .map_or(choice.substance.value.clone(), |species| species.to_string());
+            if !self.known.contains_key(&label) {
+                let known: Vec<&str> = self.known.keys().map(String::as_str).collect();
+                self.faults.push(Fault::new(
+                    FaultCode::UnknownId,
+                    self.text,
+                    &choice.substance.span,
+                    format!("a choice for `{}`", choice.substance.value),
+                    format!("a participant of a reaction: {}", known.join(", ")),
+                    "write the substance as it stands in the equation",
+                ));
+            }
+        }
+    }
+
+    /// Correlations that the sources state, between values used.
+    fn correlations(&self) -> Correlations {
+        let mut correlations = Correlations::default();
+        for (index, source) in self.sources.iter().enumerate() {
+            for stated in &source.correlations {
+                let of = |wanted: &Species| {
+                    let name = wanted.to_string();
+                    self.values.iter().position(|v| v.source == index && v.substance == name)
+                };
+                if let (Some(a), Some(b)) = (of(&stated.between[0]), of(&stated.between[1])) {
+                    // The reader of sources has checked that the coefficient is one.
+                    let _ = correlations.state(a, b, to_f64(&stated.coefficient.value()));
+                }
+            }
+        }
+        correlations
+    }
+}
+
+fn input_uncertainty(printed: &Quantity, head: &super::model::SourceHead) -> InputUncertainty {
+    match &printed.uncertainty {
+        _ if printed.exact => InputUncertainty::Exact,
+        None => InputUncertainty::NotStated,
+        Some(stated) => InputUncertainty::Standard(stated.standard(&head.coverage)),
+    }
+}

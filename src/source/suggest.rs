@@ -1,0 +1,176 @@
+//! Faults about substances, with help towards the one that was meant.
+
+use crate::finding::{Fault, FaultCode, Span, nearest};
+use crate::notation::Species;
+
+use super::builtin::{BUILT_IN, built_in};
+use super::matching::Wanted;
+use super::model::Entry;
+use super::resolve::Resolver;
+
+/// How many candidates a message names.
+const MOST: usize = 6;
+
+/// No consulted source lists the substance.
+pub(super) fn unknown_substance(resolver: &Resolver<'_>, wanted: &Wanted, span: &Span) -> Fault {
+    Fault::new(
+        FaultCode::UnknownSubstance,
+        resolver.text,
+        span,
+        format!("{}, which no consulted source lists", describe(wanted)),
+        format!("a substance of: {}", source_ids(resolver).join(", ")),
+        advice(resolver, wanted),
+    )
+}
+
+fn describe(wanted: &Wanted) -> String {
+    match wanted.is_declared() {
+        true => format!("`{}` = {}", wanted.label, wanted.species),
+        false => format!("`{}`", wanted.label),
+    }
+}
+
+fn source_ids<'r>(resolver: &'r Resolver<'_>) -> Vec<&'r str> {
+    resolver.sources.iter().map(|source| source.id()).collect()
+}
+
+fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
+    let forms = other_forms(resolver, wanted);
+    if !forms.is_empty() {
+        return format!("the sources list: {}", forms.join(", "));
+    }
+    let elsewhere = not_consulted(resolver, wanted);
+    if !elsewhere.is_empty() {
+        return format!("add to `consult` a source that lists it: {}", elsewhere.join(", "));
+    }
+    let near = near_names(resolver, wanted);
+    if near.is_empty() {
+        return "cite a value for it in a source file of your own and consult that".to_string();
+    }
+    format!("did you mean {}? Otherwise cite a value in a source file of your own", near.join(", "))
+}
+
+/// Entries of the same composition in other phases or forms, or of another identity.
+fn other_forms(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
+    let hill = wanted.species.formula.hill();
+    let mut forms = Vec::new();
+    for source in &resolver.sources {
+        for entry in source.of_composition(&hill) {
+            let form = format!("{} in {}", label(&entry), source.id());
+            if !forms.contains(&form) && forms.len() < MOST {
+                forms.push(form);
+            }
+        }
+    }
+    forms
+}
+
+/// Built-in sources that list the composition in the wanted phase and are not consulted.
+fn not_consulted(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<&'static str> {
+    let consulted = source_ids(resolver);
+    let hill = wanted.species.formula.hill();
+    let open = BUILT_IN.into_iter().filter(|id| !consulted.contains(id));
+    open.filter(|id| {
+        let entries = built_in(id).map_or_else(Vec::new, |source| source.of_composition(&hill));
+        !entries.is_empty()
+    })
+    .collect()
+}
+
+/// Substances whose notation or name is near to what was written.
+fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
+    let entries: Vec<Entry> = resolver.sources.iter().flat_map(|s| s.all()).collect();
+    let mut candidates: Vec<String> = entries.iter().filter_map(|e| Some(e.species()?.to_string())).collect();
+    candidates.extend(entries.iter().filter_map(|e| e.name.clone()));
+    let words = std::iter::once(&wanted.label).chain(&wanted.names);
+    let species = wanted.species.to_string();
+    let mut near: Vec<String> = Vec::new();
+    for word in words.chain([&species]) {
+        for candidate in nearest(word, candidates.iter().map(String::as_str), 3) {
+            let candidate = format!("`{candidate}`");
+            if !near.contains(&candidate) {
+                near.push(candidate);
+            }
+        }
+    }
+    near.truncate(MOST);
+    near
+}
+
+/// An entry with what tells it apart.
+fn label(entry: &Entry) -> String {
+    let form = entry.species().map_or_else(String::new, Species::to_string);
+    match (&entry.name, &entry.cas) {
+        (Some(name), Some(cas)) => format!("{form} ({name}, CAS {cas})"),
+        (Some(name), None) => format!("{form} ({name})"),
+        _ => form,
+    }
+}
+
+/// A source lists several entries that what the case says does not tell apart.
+pub(super) fn ambiguous(
+    resolver: &Resolver<'_>,
+    wanted: &Wanted,
+    span: &Span,
+    source: usize,
+    entries: &[Entry],
+) -> Fault {
+    let labels: Vec<String> = entries.iter().take(MOST).map(label).collect();
+    let same_notation = entries.windows(2).all(|pair| pair[0].species() == pair[1].species());
+    let advice = match same_notation {
+        true => declare(wanted, entries),
+        false => "name the form: write one of them in the equation".to_string(),
+    };
+    Fault::new(
+        FaultCode::AmbiguousSubstance,
+        resolver.text,
+        span,
+        format!("{}, which can be several things", describe(wanted)),
+        format!(
+            "one of {} (with {})",
+            labels.join("; "),
+            resolver.sources[source].id()
+        ),
+        advice,
+    )
+}
+
+/// The line of `[substances]` that would tell them apart.
+fn declare(wanted: &Wanted, entries: &[Entry]) -> String {
+    let Some(example) = entries.iter().find(|entry| entry.name.is_some()) else {
+        return "declare it under a name in [substances], with its CAS number".to_string();
+    };
+    let name = example.name.clone().unwrap_or_default();
+    let id: String = name.chars().map(|c| if c.is_ascii_alphanumeric() { c } else { '-' }).collect();
+    let phase = wanted.species.phase.as_ref().map_or_else(String::new, |p| p.label.symbol().to_string());
+    let cas = example.cas.as_ref().map_or_else(String::new, |cas| format!(", cas = \"{cas}\""));
+    format!(
+        "declare the one that you mean and use its id, for example {} = {{ formula = \"{}\", \
+         phase = \"{phase}\", name = \"{name}\"{cas} }}",
+        id.to_lowercase(),
+        wanted.species.formula
+    )
+}
+
+/// A source lists the substance, but not its formation enthalpy at the reference temperature.
+pub(super) fn no_enthalpy(
+    resolver: &Resolver<'_>,
+    wanted: &Wanted,
+    span: &Span,
+    source: usize,
+    entry: &Entry,
+) -> Fault {
+    let why = entry.note.as_ref().map_or_else(String::new, |note| format!(" ({note})"));
+    Fault::new(
+        FaultCode::Source,
+        resolver.text,
+        span,
+        format!(
+            "{} in {}, without a formation enthalpy at its reference temperature{why}",
+            label(entry),
+            resolver.sources[source].id()
+        ),
+        "an entry with `formation-enthalpy`",
+        format!("consult another source for `{}`, or cite a value of your own", wanted.label),
+    )
+}

@@ -1,0 +1,62 @@
+//! The fault of an equation that does not balance.
+
+use num_bigint::BigInt;
+
+use crate::case::Reaction;
+use crate::finding::{Fault, FaultCode, Text};
+use crate::notation::{Conserved, Surplus, Term};
+use crate::quantity::exact_text;
+
+/// Says which element or the charge is off and by how much, and the balanced form where there is
+/// exactly one.
+pub(super) fn unbalanced(
+    text: &Text,
+    reaction: &Reaction,
+    off: &[Surplus],
+    form: Option<&[BigInt]>,
+) -> Fault {
+    let found: Vec<String> = off.iter().map(describe).collect();
+    let advice = match form {
+        Some(coefficients) => format!("balanced it reads: {}", balanced(reaction, coefficients)),
+        None => "no single set of positive coefficients balances it: check the substances".into(),
+    };
+    Fault::new(
+        FaultCode::Unbalanced,
+        text,
+        &reaction.equation.span,
+        found.join("; "),
+        "as many atoms of each element, and as much charge, on the right as on the left",
+        advice,
+    )
+}
+
+fn describe(surplus: &Surplus) -> String {
+    let (left, right) = (exact_text(&surplus.left), exact_text(&surplus.right));
+    let difference = exact_text(&(&surplus.right - &surplus.left));
+    let sign = if difference.starts_with('-') { "" } else { "+" };
+    match &surplus.of {
+        Conserved::Element(element) => format!(
+            "{}: {left} on the left, {right} on the right ({sign}{difference})",
+            element.symbol()
+        ),
+        Conserved::Charge => {
+            format!("charge: {left} on the left, {right} on the right ({sign}{difference})")
+        }
+    }
+}
+
+fn balanced(reaction: &Reaction, coefficients: &[BigInt]) -> String {
+    let equation = &reaction.equation.value;
+    let (left, right) = coefficients.split_at(equation.left.len().min(coefficients.len()));
+    format!("{} -> {}", side(&equation.left, left), side(&equation.right, right))
+}
+
+fn side(terms: &[Term], coefficients: &[BigInt]) -> String {
+    let one = BigInt::from(1);
+    let term = |(term, coefficient): (&Term, &BigInt)| match *coefficient == one {
+        true => term.participant.to_string(),
+        false => format!("{coefficient} {}", term.participant),
+    };
+    let terms: Vec<String> = terms.iter().zip(coefficients).map(term).collect();
+    terms.join(" + ")
+}
