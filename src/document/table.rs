@@ -155,4 +155,13 @@ impl<'r, 'd> Table<'r, 'd> {
     pub fn boolean(&self, key: &str) -> Option<Located<bool>> {
         self.get(key)?.boolean()
     }
+
+    /// Every string in the table and below it, in the order of the file.
+    pub fn all_strings(&self) -> Vec<Located<String>> {
+        let mut found = Vec::new();
+        for (_, value) in self.entries() {
+            value.collect_strings(&mut found);
+        }
+        found
+    }
 }

@@ -114,6 +114,20 @@ impl<'r, 'd> Value<'r, 'd> {
         array.iter().enumerate().map(element).collect()
     }
 
+    /// Adds every string in the value and below it.
+    pub(super) fn collect_strings(&self, found: &mut Vec<Located<String>>) {
+        match self.value.get_ref() {
+            DeValue::String(text) => found.push(Located::new(text.to_string(), self.span())),
+            DeValue::Array(_) => {
+                for element in self.elements("an array") {
+                    element.collect_strings(found);
+                }
+            }
+            DeValue::Table(_) => found.extend(self.table().iter().flat_map(Table::all_strings)),
+            _ => {}
+        }
+    }
+
     pub fn table(&self) -> Option<Table<'r, 'd>> {
         match self.value.get_ref() {
             DeValue::Table(table) => Some(Table::inner(

@@ -21,6 +21,11 @@ impl Correlations {
         Self::default()
     }
 
+    /// The pairs for which a coefficient is stated, in order.
+    pub fn pairs(&self) -> impl Iterator<Item = (usize, usize)> {
+        self.0.keys().copied()
+    }
+
     /// States the coefficient between two values.
     ///
     /// # Errors

@@ -81,7 +81,10 @@ impl<'a> Resolver<'a> {
         }
         let (source, faults) = load_built_in(ATOMIC_WEIGHTS, files);
         self.faults.extend(faults);
-        self.sources.extend(source);
+        if let Some(source) = source {
+            self.became.push((ATOMIC_WEIGHTS.to_string(), self.sources.len()));
+            self.sources.push(source);
+        }
     }
 
     fn problem(self, reactions: Vec<Option<ProblemReaction>>) -> Problem {

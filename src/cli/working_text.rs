@@ -1,0 +1,122 @@
+//! The compact working that `compute` prints: results and findings first, readable at 80 columns.
+
+use std::path::Path;
+
+use super::findings;
+use super::terminal::{Style, Tone, plain, wrap};
+use crate::calculation::Calculation;
+use crate::engine::{Outcome, ReactionWorking};
+use crate::quantity::{exact_text, two_digits};
+use crate::source::Problem;
+
+/// The working of a case as text.
+pub fn shown(case: &Path, calculation: &Calculation, style: Style) -> String {
+    let head = &calculation.case.record;
+    let title = format!(
+        "{} revision {}, {}: {}",
+        head.number.value,
+        head.revision.value,
+        head.status.value.word(),
+        plain(&head.title)
+    );
+    let mut text = style.paint(Tone::Strong, wrap("", &title).trim_end()) + "\n\n";
+    text += &results(calculation, style);
+    if !calculation.working.findings.is_empty() {
+        text += &format!("\n{}\n", style.paint(Tone::Strong, "Findings"));
+        text += &findings::shown(case, &calculation.working.findings, style);
+    }
+    text += &format!("\n{}\n", style.paint(Tone::Strong, "Working"));
+    for working in &calculation.working.reactions {
+        text += &reaction(calculation, working);
+    }
+    text += &format!("\n{}\n", style.paint(Tone::Strong, "Values used"));
+    text + &values(&calculation.problem)
+}
+
+fn results(calculation: &Calculation, style: Style) -> String {
+    let outcomes = &calculation.working.outcomes;
+    let width = outcomes.iter().map(|o| o.id.chars().count()).max().unwrap_or(0);
+    let mut text = style.paint(Tone::Strong, "Results") + "\n";
+    for outcome in outcomes {
+        let line = format!("{} {}", stated(outcome), outcome.direction().word());
+        text += &wrap(&format!("  {:<width$}  ", outcome.id), &line);
+        text += &wrap(&format!("  {:<width$}  ", ""), &coverage(outcome));
+    }
+    if outcomes.is_empty() {
+        text += "  none\n";
+    }
+    text
+}
+
+fn stated(outcome: &Outcome) -> String {
+    let uncertainty = match (&outcome.stated.uncertainty_text, outcome.is_complete()) {
+        (Some(text), true) => format!(" ± {text}"),
+        _ => String::new(),
+    };
+    format!("{}{uncertainty} {}", outcome.stated.value_text, outcome.unit.symbol())
+}
+
+fn coverage(outcome: &Outcome) -> String {
+    let (stated, of) = (outcome.combined.stated, outcome.combined.of);
+    match outcome.expanded {
+        Some(expanded) => format!(
+            "U = {} (k = 2), covers {stated} of {of} values used",
+            two_digits(expanded)
+        ),
+        None => format!("uncertainty not stated by any of {of} values used"),
+    }
+}
+
+fn reaction(calculation: &Calculation, working: &ReactionWorking) -> String {
+    let problem = &calculation.problem;
+    let reaction = &problem.reactions[working.reaction];
+    let mut text = wrap(&format!("{}: ", reaction.id), &reaction.equation.to_string());
+    let Some(hess) = &working.hess else {
+        return text + "  not worked, see the findings\n";
+    };
+    let unit = calculation.working.outcome(&format!("{}.heat", reaction.id));
+    let unit = unit.map_or("", |outcome| outcome.unit.symbol());
+    let rows: Vec<[String; 4]> = hess.terms.iter().map(|term| {
+        [
+            exact_text(&term.nu),
+            problem.substances[term.substance].label.clone(),
+            format!("[{}] {}", term.value + 1, exact_text(&term.molar)),
+            exact_text(&term.contribution),
+        ]
+    })
+    .collect();
+    text += &table(&rows);
+    text + &wrap("  sum ", &format!("{} {unit}", exact_text(&hess.sum)))
+}
+
+/// Four columns, numbers flush right; a long cell takes its row with it.
+fn table(rows: &[[String; 4]]) -> String {
+    let width = |column: usize, most: usize| {
+        let lengths = rows.iter().map(|row| row[column].chars().count());
+        lengths.max().unwrap_or(0).min(most)
+    };
+    let (a, b, c, d) = (width(0, 8), width(1, 28), width(2, 22), width(3, 16));
+    let line = |row: &[String; 4]| {
+        let line = format!("  {:>a$}  {:<b$}  {:>c$}  {:>d$}", row[0], row[1], row[2], row[3]);
+        format!("{}\n", line.trim_end())
+    };
+    rows.iter().map(line).collect()
+}
+
+fn values(problem: &Problem) -> String {
+    let mut text = String::new();
+    for (index, value) in problem.values.iter().enumerate() {
+        let head = &problem.sources[value.source].head;
+        let line = format!(
+            "{} {} {} ({}; {}; {})",
+            value.substance,
+            value.kind.word(),
+            value.printed,
+            head.id,
+            plain(&value.locator),
+            value.standing.word()
+        );
+        text += &wrap(&format!("  [{}] ", index + 1), &line);
+    }
+    text
+}
