@@ -1,0 +1,2 @@
+//! Whole-program tests, in one binary because each links the typesetter.
+
