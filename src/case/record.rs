@@ -40,13 +40,15 @@ pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
     let revision = table.required_string("revision", "give the revision: revision = \"A\"");
     let title = table.required_string("title", "say what is calculated: title = \"…\"");
     let preparer = table.required_string("preparer", "name who answers for the case");
-    let status = table.required_string("status", "status = \"preliminary\", \"for-check\" or \"issued\"");
+    let status = table.required_string(
+        "status",
+        "status = \"preliminary\", \"for-check\" or \"issued\"",
+    );
     let date = required_date(table, "date");
     let number = number.and_then(|text| file_word(reader, text));
     let revision = revision.and_then(|text| file_word(reader, text));
-    let status = status.and_then(|text| {
-        Some(Located::new(one_of(reader, &text, &STATUSES)?, text.span))
-    });
+    let status =
+        status.and_then(|text| Some(Located::new(one_of(reader, &text, &STATUSES)?, text.span)));
     let texts = |key| table.strings(key).into_iter().map(|t| t.value).collect();
     let history = table.tables("history");
     let history: Vec<_> = history.iter().map(read_revision).collect();
@@ -127,7 +129,13 @@ fn read_signatures(table: &Table<'_, '_>) -> Vec<Role> {
         };
         if roles.contains(&role) {
             let found = format!("\"{}\" a second time", text.value);
-            value_fault(table.reader(), &text.span, found, "each role once", "remove one");
+            value_fault(
+                table.reader(),
+                &text.span,
+                found,
+                "each role once",
+                "remove one",
+            );
         }
         roles.push(role);
     }
