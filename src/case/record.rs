@@ -58,12 +58,12 @@ pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
     Some(RecordHead {
         number: number?,
         revision: revision?,
-        title: title.and_then(|title| filled(reader, title))?,
+        title: title.and_then(|title| filled(reader, title, LONGEST_TITLE))?,
         facility,
         equipment,
         related,
         date: date?,
-        preparer: preparer.and_then(|preparer| filled(reader, preparer))?,
+        preparer: preparer.and_then(|preparer| filled(reader, preparer, LONGEST_NAME))?,
         status: status?,
         history: history.into_iter().flatten().collect(),
         signatures,
@@ -97,7 +97,22 @@ fn file_word(reader: &Reader<'_>, text: Located<String>) -> Option<Located<Strin
     None
 }
 
-fn filled(reader: &Reader<'_>, text: Located<String>) -> Option<String> {
+/// The front sheet has places of fixed size for a title and a name.
+const LONGEST_TITLE: usize = 200;
+const LONGEST_NAME: usize = 80;
+
+fn filled(reader: &Reader<'_>, text: Located<String>, longest: usize) -> Option<String> {
+    let count = text.value.chars().count();
+    if count > longest {
+        value_fault(
+            reader,
+            &text.span,
+            format!("{count} characters"),
+            format!("at most {longest} characters"),
+            "shorten it; what is longer belongs into the prose",
+        );
+        return None;
+    }
     if text.value.trim().is_empty() {
         value_fault(reader, &text.span, "an empty string", "words", "fill it in");
         return None;

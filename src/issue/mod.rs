@@ -53,7 +53,8 @@ pub fn issue(calculation: &Calculation, files: &dyn SourceFiles) -> Result<Issue
     })
 }
 
-fn typesetting() -> Typesetting {
+/// What the typesetter brings to a record: its version, the template and the fonts.
+pub fn typesetting() -> Typesetting {
     let fonts = fonts()
         .into_iter()
         .map(|font| (font.name.to_string(), font.sha256.to_string()));

@@ -135,6 +135,7 @@ fn head(head: &SourceHead) -> toml::Table {
         .put("edition", head.edition.clone())
         .put("doi", head.doi.clone())
         .put("licence", head.licence.clone())
+        .put("note", head.note.clone())
         .put(
             "temperature",
             head.temperature.as_ref().map(Quantity::to_string),

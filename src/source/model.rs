@@ -28,6 +28,7 @@ pub struct SourceHead {
     pub edition: Option<String>,
     pub doi: Option<String>,
     pub licence: Option<String>,
+    pub note: Option<String>,
     /// Reference temperature of the formation enthalpies.
     pub temperature: Option<Quantity>,
     /// Standard-state pressure.

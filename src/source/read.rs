@@ -119,6 +119,7 @@ fn read_head(table: &Table<'_, '_>, text: &Text) -> Option<SourceHead> {
         edition: owned("edition"),
         doi: owned("doi"),
         licence: owned("licence"),
+        note: owned("note"),
         temperature: measured("temperature"),
         pressure: measured("pressure"),
         energy_unit: energy.and_then(|text| unit(reader, &text)),

@@ -40,6 +40,7 @@ pub fn resolve(
         .map(|reaction| resolver.reaction(reaction))
         .collect();
     resolver.check_choices();
+    resolver.check_correlations();
     let faults = std::mem::take(&mut resolver.faults);
     let problem = faults.is_empty().then(|| resolver.problem(reactions));
     (problem, faults)
@@ -244,7 +245,7 @@ impl<'a> Resolver<'a> {
         let significance = match (printed.exact, head.digits) {
             (true, _) => Significance::Exact,
             (false, Digits::FixedDecimals) => Significance::Unlimited,
-            (false, Digits::Significant) => Significance::Place(printed.decimal.place()),
+            (false, Digits::Significant) => printed.significance(),
         };
         let value = ValueUsed {
             source: chosen.source,
@@ -297,7 +298,7 @@ impl<'a> Resolver<'a> {
             substance: symbol.to_string(),
             species: None,
             name: entry.name.clone(),
-            significance: Significance::Place(printed.decimal.place()),
+            significance: printed.significance(),
             uncertainty: input_uncertainty(&printed, head),
             printed,
             locator: entry.locator.clone(),
@@ -367,6 +368,35 @@ impl<'a> Resolver<'a> {
                 ));
             }
         }
+    }
+
+    /// Correlations that cannot all be true would make a variance negative.
+    fn check_correlations(&mut self) {
+        let used: Vec<usize> = (0..self.values.len()).collect();
+        if self.correlations().is_consistent(&used) == Ok(true) {
+            return;
+        }
+        let with_any = self
+            .sources
+            .iter()
+            .filter(|source| !source.correlations.is_empty());
+        let ids: Vec<&str> = with_any.map(Source::id).collect();
+        let span = self
+            .case
+            .consult
+            .first()
+            .map_or(0..0, |name| name.span.clone());
+        self.faults.push(Fault::new(
+            FaultCode::Source,
+            self.text,
+            &span,
+            format!(
+                "correlations of {} that contradict each other",
+                ids.join(", ")
+            ),
+            "correlation coefficients that can all be true together (JCGM 100:2008, 5.2)",
+            "compare the coefficients with the source",
+        ));
     }
 
     /// Correlations that the sources state, between values used.

@@ -1,2 +1,1 @@
 //! Whole-program tests, in one binary because each links the typesetter.
-
