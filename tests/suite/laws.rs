@@ -9,5 +9,5 @@ mod invented;
 mod order;
 mod references;
 mod rerun;
-mod support;
 mod sums;
+mod support;

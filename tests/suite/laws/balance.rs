@@ -32,7 +32,11 @@ fn charge_has_to_balance_as_well() {
     let text = case(&["codata-1989"], &reaction("a", "H+(aq) -> 1/2 H2(g)"));
     let faults = calculation(&text, &Files::default()).unwrap_err();
     assert_eq!(codes(&faults), [FaultCode::Unbalanced]);
-    assert!(faults[0].found.starts_with("charge: "), "{}", faults[0].found);
+    assert!(
+        faults[0].found.starts_with("charge: "),
+        "{}",
+        faults[0].found
+    );
 }
 
 #[test]
@@ -40,5 +44,8 @@ fn every_unbalanced_equation_of_a_case_is_named() {
     let rest = reaction("a", "H2(g) + O2(g) -> H2O(l)") + &reaction("b", "H2(g) -> H2O(g)");
     let faults = calculation(&case(&["codata-1989"], &rest), &Files::default()).unwrap_err();
     assert_eq!(codes(&faults), [FaultCode::Unbalanced; 2]);
-    assert_eq!(faults[0].advice, "balanced it reads: 2 H2(g) + O2(g) -> 2 H2O(l)");
+    assert_eq!(
+        faults[0].advice,
+        "balanced it reads: 2 H2(g) + O2(g) -> 2 H2O(l)"
+    );
 }

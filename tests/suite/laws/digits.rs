@@ -12,7 +12,9 @@ const SOURCE: &str = "digits.toml";
 
 fn source(head: &str, a: &str, b: &str) -> Files {
     let entry = |substance: &str, value: &str| {
-        format!("[[entry]]\nsubstance = \"{substance}\"\nlocator = \"row\"\nformation-enthalpy = \"{value}\"\n")
+        format!(
+            "[[entry]]\nsubstance = \"{substance}\"\nlocator = \"row\"\nformation-enthalpy = \"{value}\"\n"
+        )
     };
     let text = format!(
         "[source]\nid = \"digits\"\ntitle = \"Invented digits\"\ntemperature = \"298.15 K\"\n\
@@ -32,7 +34,11 @@ fn case_of(equation: &str, more: &str) -> String {
 fn stated(calculation: &Calculation, id: &str) -> (String, Option<String>, StatedBy) {
     let outcome = outcome(calculation, id);
     let stated = &outcome.stated;
-    (stated.value_text.clone(), stated.uncertainty_text.clone(), outcome.stated_by)
+    (
+        stated.value_text.clone(),
+        stated.uncertainty_text.clone(),
+        outcome.stated_by,
+    )
 }
 
 fn significance(text: &str) -> (String, Option<String>, StatedBy) {
@@ -64,10 +70,16 @@ fn a_quotient_has_as_many_digits_as_its_worst_operand() {
     let calculation = worked(&text, &source("", "40.1", "-7.25"));
     assert_eq!(stated(&calculation, "a.heat"), significance("40.1"));
     assert_eq!(stated(&calculation, "a.heat-per"), significance("40.1"));
-    assert_eq!(stated(&calculation, "a.heat-per-mass"), significance("1.34e3"));
+    assert_eq!(
+        stated(&calculation, "a.heat-per-mass"),
+        significance("1.34e3")
+    );
     // Six digits are more than the molar mass has: 40.1000/30.026 to five digits is 1335.5.
     let calculation = worked(&text, &source("", "40.1000", "-7.25"));
-    assert_eq!(stated(&calculation, "a.heat-per-mass"), significance("1335.5"));
+    assert_eq!(
+        stated(&calculation, "a.heat-per-mass"),
+        significance("1335.5")
+    );
 }
 
 #[test]
@@ -85,10 +97,17 @@ fn a_complete_uncertainty_decides() {
     ] {
         let text = case_of("3 CH2O(l) -> C3H6O3(l)", "");
         let calculation = worked(&text, &source("coverage = \"2\"", a, b));
-        let wanted = (value.to_string(), Some(expanded.to_string()), StatedBy::Uncertainty);
+        let wanted = (
+            value.to_string(),
+            Some(expanded.to_string()),
+            StatedBy::Uncertainty,
+        );
         assert_eq!(stated(&calculation, "a.heat"), wanted, "{a}, {b}");
         // What ASTM E29 alone would say stands beside it.
-        let remark = outcome(&calculation, "a.heat").remark.clone().map(|r| r.value_text);
+        let remark = outcome(&calculation, "a.heat")
+            .remark
+            .clone()
+            .map(|r| r.value_text);
         assert_eq!(remark.as_deref(), Some("-128"));
         assert_eq!(messages(&calculation, "uncertainty-incomplete"), [""; 0]);
     }
@@ -104,12 +123,20 @@ fn an_incomplete_uncertainty_does_not_decide_and_is_said() {
     assert_eq!(heat.expanded, Some(0.08));
     // U = 0.08 alone would give the hundredths.
     let remark = heat.remark.clone().expect("the other rule");
-    assert_eq!((remark.value_text.as_str(), remark.uncertainty_text.as_deref()),
-        ("-127.55", Some("0.08")));
+    assert_eq!(
+        (
+            remark.value_text.as_str(),
+            remark.uncertainty_text.as_deref()
+        ),
+        ("-127.55", Some("0.08"))
+    );
     let said = messages(&calculation, "uncertainty-incomplete");
     assert_eq!(said.len(), 1);
-    assert!(said[0].contains("a.heat covers 1 of 2 values used: CH2O(l) (digits) not stated"),
-        "{}", said[0]);
+    assert!(
+        said[0].contains("a.heat covers 1 of 2 values used: CH2O(l) (digits) not stated"),
+        "{}",
+        said[0]
+    );
     let silent = worked(&text, &source("", "40.1", "-7.25"));
     assert_eq!(outcome(&silent, "a.heat").combined.standard, None);
     assert!(messages(&silent, "uncertainty-incomplete")[0].contains("covers 0 of 2"));
@@ -133,7 +160,10 @@ fn a_table_with_fixed_decimals_limits_nothing_below_the_house_place() {
         let wanted = (value.to_string(), None, StatedBy::FixedDecimals);
         assert_eq!(stated(&calculation, "a.heat"), wanted);
         let said = messages(&calculation, "fixed-decimals");
-        assert!(said.len() == 1 && said[0].starts_with("digits prints a fixed number"), "{said:?}");
+        assert!(
+            said.len() == 1 && said[0].starts_with("digits prints a fixed number"),
+            "{said:?}"
+        );
     }
     let text = case_of(equation, "[rounding]\n\"a.heat\" = \"0.01 kJ/mol\"");
     let calculation = worked(&text, &files);
@@ -156,8 +186,16 @@ fn a_place_that_the_case_names_goes_before_every_rule() {
         let rounding = format!("[rounding]\n\"a.heat\" = \"{place}\"");
         let text = case_of("3 CH2O(l) -> C3H6O3(l)", &rounding);
         let calculation = worked(&text, &files);
-        let wanted = (value.to_string(), Some(expanded.to_string()), StatedBy::Rounding);
+        let wanted = (
+            value.to_string(),
+            Some(expanded.to_string()),
+            StatedBy::Rounding,
+        );
         assert_eq!(stated(&calculation, "a.heat"), wanted, "{place}");
-        assert_eq!(messages(&calculation, "rounding-finer").len(), cautions, "{place}");
+        assert_eq!(
+            messages(&calculation, "rounding-finer").len(),
+            cautions,
+            "{place}"
+        );
     }
 }

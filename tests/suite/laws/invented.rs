@@ -111,7 +111,9 @@ pub fn balanced(compounds: &[Compound], numbers: &[Exact]) -> Vec<(String, Exact
     }
     for (position, (element, atoms)) in elements.into_iter().enumerate() {
         let counts = compounds.iter().zip(numbers);
-        let sum: Exact = counts.map(|(c, nu)| nu * ratio(c.atoms[position].into(), 1)).sum();
+        let sum: Exact = counts
+            .map(|(c, nu)| nu * ratio(c.atoms[position].into(), 1))
+            .sum();
         terms.push((element.to_string(), -sum / ratio(atoms, 1)));
     }
     terms.retain(|(_, nu)| !nu.is_zero());

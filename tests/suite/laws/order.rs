@@ -5,9 +5,7 @@ use hesswright::record::results_json;
 use proptest::prelude::*;
 
 use super::invented::{SOURCE, balanced, compounds, equation, files, numbers};
-use super::support::{
-    RECORD, case, exact, near, outcome, reaction, sensitivities, shares, worked,
-};
+use super::support::{RECORD, case, exact, near, outcome, reaction, sensitivities, shares, worked};
 
 /// Everything that is claimed of a result, the values used named by their substance.
 fn assert_same_result(a: &Calculation, b: &Calculation, id: &str) {
@@ -21,7 +19,10 @@ fn assert_same_result(a: &Calculation, b: &Calculation, id: &str) {
     assert_eq!(one.remark, other.remark, "{id}");
     let (one, other) = (shares(a, one), shares(b, other));
     assert!(one.keys().eq(other.keys()), "{id}");
-    assert!(one.values().zip(other.values()).all(|(a, b)| near(*a, *b)), "{id}: {one:?} {other:?}");
+    assert!(
+        one.values().zip(other.values()).all(|(a, b)| near(*a, *b)),
+        "{id}: {one:?} {other:?}"
+    );
 }
 
 /// A permutation of `n` things.

@@ -5,7 +5,9 @@ use super::rerun::assert_reruns;
 use super::support::{Files, case, messages, reaction, worked};
 
 fn source(id: &str, head: &str, entries: &str) -> String {
-    format!("[source]\nid = \"{id}\"\ntitle = \"Invented\"\nenergy-unit = \"kJ/mol\"\n{head}\n{entries}")
+    format!(
+        "[source]\nid = \"{id}\"\ntitle = \"Invented\"\nenergy-unit = \"kJ/mol\"\n{head}\n{entries}"
+    )
 }
 
 fn entry(substance: &str, rest: &str) -> String {
@@ -17,7 +19,8 @@ fn enthalpy(substance: &str, value: &str) -> String {
 }
 
 fn heat_capacity(substance: &str, value: &str) -> String {
-    let function = format!("heat-capacity = [{{ form = \"constant\", coefficients = [\"{value}\"] }}]");
+    let function =
+        format!("heat-capacity = [{{ form = \"constant\", coefficients = [\"{value}\"] }}]");
     entry(substance, &function)
 }
 
@@ -25,7 +28,11 @@ fn heat_capacity(substance: &str, value: &str) -> String {
 fn another_reference_temperature_costs_the_heat_capacity_of_formation() {
     // At 18 °C = 291.15 K, 7 K below 298.15 K. Cp(H2O, l) - Cp(H2) - Cp(O2)/2
     // = 75.0 - 29.0 - 30.0/2 = 31.0 J/(mol K); 7 K · 31.0 J/(mol K) = 0.217 kJ/mol.
-    let old = source("old", "temperature = \"18 °C\"", &enthalpy("H2O(l)", "-286.1"));
+    let old = source(
+        "old",
+        "temperature = \"18 °C\"",
+        &enthalpy("H2O(l)", "-286.1"),
+    );
     let capacities = source(
         "cp",
         "",
@@ -42,10 +49,22 @@ fn another_reference_temperature_costs_the_heat_capacity_of_formation() {
     let text = case(&["old.toml", "cp.toml"], &rest);
     let said = messages(&worked(&text, &files), "reference-temperature");
     assert_eq!(said.len(), 2, "{said:?}");
-    assert!(said[0].starts_with("one: old (18 °C) gives values"), "{}", said[0]);
-    assert!(said[0].ends_with("moves the heat by about 0.22 kJ/mol."), "{}", said[0]);
+    assert!(
+        said[0].starts_with("one: old (18 °C) gives values"),
+        "{}",
+        said[0]
+    );
+    assert!(
+        said[0].ends_with("moves the heat by about 0.22 kJ/mol."),
+        "{}",
+        said[0]
+    );
     // Four times as much, the other way: -0.868 kJ/mol.
-    assert!(said[1].ends_with("moves the heat by about -0.87 kJ/mol."), "{}", said[1]);
+    assert!(
+        said[1].ends_with("moves the heat by about -0.87 kJ/mol."),
+        "{}",
+        said[1]
+    );
     assert_reruns(&text, &files);
 }
 
@@ -64,20 +83,38 @@ fn heat_capacities_of_elements_that_cancel_travel_with_the_record() {
     ];
     let capacities = source("cp", "", &capacities.concat());
     let files = Files::of(&[("old.toml", &old), ("cp.toml", &capacities)]);
-    let text = case(&["old.toml", "cp.toml"], &reaction("a", "3 CH2O(l) -> C3H6O3(l)"));
+    let text = case(
+        &["old.toml", "cp.toml"],
+        &reaction("a", "3 CH2O(l) -> C3H6O3(l)"),
+    );
     let said = messages(&worked(&text, &files), "reference-temperature");
-    assert!(said[0].ends_with("moves the heat by about 0.14 kJ/mol."), "{}", said[0]);
+    assert!(
+        said[0].ends_with("moves the heat by about 0.14 kJ/mol."),
+        "{}",
+        said[0]
+    );
     assert_reruns(&text, &files);
 }
 
 #[test]
 fn a_reference_temperature_whose_cost_is_not_known_is_said_too() {
-    let old = source("old", "temperature = \"291.15 K\"", &enthalpy("H2O(l)", "-286.1"));
+    let old = source(
+        "old",
+        "temperature = \"291.15 K\"",
+        &enthalpy("H2O(l)", "-286.1"),
+    );
     let files = Files::of(&[("old.toml", &old)]);
-    let text = case(&["old.toml"], &reaction("one", "H2(g) + 1/2 O2(g) -> H2O(l)"));
+    let text = case(
+        &["old.toml"],
+        &reaction("one", "H2(g) + 1/2 O2(g) -> H2O(l)"),
+    );
     let said = messages(&worked(&text, &files), "reference-temperature");
     assert_eq!(said.len(), 1);
-    assert!(said[0].contains("not known here") && said[0].contains("H2O(l)"), "{}", said[0]);
+    assert!(
+        said[0].contains("not known here") && said[0].contains("H2O(l)"),
+        "{}",
+        said[0]
+    );
     assert_reruns(&text, &files);
 }
 
@@ -87,11 +124,17 @@ fn at_pressures(pressures: [&str; 3]) -> Vec<String> {
     let names = ["p0.toml", "p1.toml", "p2.toml"];
     let texts: Vec<String> = (0..3)
         .map(|i| {
-            let head = format!("temperature = \"298.15 K\"\npressure = \"{}\"", pressures[i]);
+            let head = format!(
+                "temperature = \"298.15 K\"\npressure = \"{}\"",
+                pressures[i]
+            );
             source(&format!("p{i}"), &head, &enthalpy(substances[i], "-100.0"))
         })
         .collect();
-    let files: Vec<(&str, &str)> = names.into_iter().zip(texts.iter().map(String::as_str)).collect();
+    let files: Vec<(&str, &str)> = names
+        .into_iter()
+        .zip(texts.iter().map(String::as_str))
+        .collect();
     let files = Files::of(&files);
     let text = case(&names, &reaction("a", "CH2O(l) + C2H4O2(l) -> C3H6O3(l)"));
     assert_reruns(&text, &files);
@@ -104,12 +147,24 @@ fn another_standard_pressure_costs_v_dp() {
     // 1 atm = 101325 Pa: 1325 Pa · 1e-4 m³/mol = 0.1325 J/mol.
     let said = at_pressures(["1 bar", "1 atm", "1 bar"]);
     assert_eq!(said.len(), 1);
-    assert!(said[0].starts_with("p0 and p1 have standard pressures 1325 Pa apart."), "{}", said[0]);
-    assert!(said[0].ends_with("100 cm³/mol by about 0.00013 kJ/mol."), "{}", said[0]);
+    assert!(
+        said[0].starts_with("p0 and p1 have standard pressures 1325 Pa apart."),
+        "{}",
+        said[0]
+    );
+    assert!(
+        said[0].ends_with("100 cm³/mol by about 0.00013 kJ/mol."),
+        "{}",
+        said[0]
+    );
     // The two that are farthest apart are named, in whatever order they are used:
     // 2 bar - 1 bar = 100000 Pa, 10 J/mol.
     let said = at_pressures(["1 bar", "2 bar", "1 atm"]);
-    assert!(said[0].starts_with("p0 and p1 have standard pressures 100000 Pa apart."), "{}", said[0]);
+    assert!(
+        said[0].starts_with("p0 and p1 have standard pressures 100000 Pa apart."),
+        "{}",
+        said[0]
+    );
     assert!(said[0].ends_with("by about 0.010 kJ/mol."), "{}", said[0]);
 }
 
@@ -142,13 +197,33 @@ fn another_reference_state_stops_unless_its_atoms_cancel() {
     // from white, 2 PCl3 would be 2·(-17.5) = -35.0 kJ/mol lower.
     let said = stops(&both, "2 P(cr, white) + 3 Cl2(g) -> 2 PCl3(l)");
     assert_eq!(said.len(), 1);
-    assert!(said[0].starts_with("a: red counts P from P(cr, red)"), "{}", said[0]);
-    assert!(said[0].contains("2 atoms of P do not cancel within red"), "{}", said[0]);
-    assert!(said[0].contains("moves the heat by -35 kJ/mol"), "{}", said[0]);
+    assert!(
+        said[0].starts_with("a: red counts P from P(cr, red)"),
+        "{}",
+        said[0]
+    );
+    assert!(
+        said[0].contains("2 atoms of P do not cancel within red"),
+        "{}",
+        said[0]
+    );
+    assert!(
+        said[0].contains("moves the heat by -35 kJ/mol"),
+        "{}",
+        said[0]
+    );
     // As a reactant the other way: +17.5, to two digits, half to even, 18.
     let said = stops(&both, "PCl3(l) + 1/2 O2(g) -> POCl3(l)");
-    assert!(said[0].contains("-1 atoms of P") && said[0].contains("by 18 kJ/mol"), "{}", said[0]);
+    assert!(
+        said[0].contains("-1 atoms of P") && said[0].contains("by 18 kJ/mol"),
+        "{}",
+        said[0]
+    );
     // Without a value of the red form on the usual scale the cost is not known.
     let said = stops(&["red.toml"], "2 P(cr, white) + 3 Cl2(g) -> 2 PCl3(l)");
-    assert!(said[0].contains("2 times the enthalpy of P(cr, red)"), "{}", said[0]);
+    assert!(
+        said[0].contains("2 times the enthalpy of P(cr, red)"),
+        "{}",
+        said[0]
+    );
 }

@@ -4,8 +4,8 @@ use std::fs;
 use std::path::Path;
 
 use hesswright::calculation::Calculation;
-use hesswright::folder::CaseFolder;
 use hesswright::finding::Text;
+use hesswright::folder::CaseFolder;
 use hesswright::record::{AttachedFile, MANIFEST_NAME, Manifest, Record, Typesetting, assemble};
 use proptest::prelude::*;
 
@@ -23,7 +23,9 @@ fn typesetting() -> Typesetting {
 
 fn attached<'a>(files: &'a [AttachedFile], name: &str) -> &'a str {
     let file = files.iter().find(|file| file.name == name);
-    let bytes = &file.unwrap_or_else(|| panic!("{name} is not attached")).bytes;
+    let bytes = &file
+        .unwrap_or_else(|| panic!("{name} is not attached"))
+        .bytes;
     std::str::from_utf8(bytes).expect("attachments are text")
 }
 
@@ -33,7 +35,10 @@ fn sources_of(record: &Record) -> Files {
         serde_json::from_str(attached(&record.attachments, MANIFEST_NAME)).expect("a manifest");
     let became = manifest.consult.iter().map(|(name, file)| {
         let file = file.as_str().expect("the manifest names attachments");
-        (name.clone(), attached(&record.attachments, file).to_string())
+        (
+            name.clone(),
+            attached(&record.attachments, file).to_string(),
+        )
     });
     Files(became.collect())
 }
@@ -61,9 +66,15 @@ pub fn assert_reruns(case: &str, files: &Files) {
 #[test]
 fn the_shipped_cases() {
     let folder = Path::new(env!("CARGO_MANIFEST_DIR")).join("cases");
-    for name in ["nitrobenzene-hydrogenation.toml", "acid-neutralisation.toml"] {
+    for name in [
+        "nitrobenzene-hydrogenation.toml",
+        "acid-neutralisation.toml",
+    ] {
         let path = folder.join(name);
-        let text = Text::new("case.toml", fs::read_to_string(&path).expect("a shipped case"));
+        let text = Text::new(
+            "case.toml",
+            fs::read_to_string(&path).expect("a shipped case"),
+        );
         let door = CaseFolder::of(&path, &text);
         let calculation = Calculation::of(text, &door).expect("a shipped case works");
         assert_same_record(&assemble(&calculation, &typesetting()));

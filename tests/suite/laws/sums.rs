@@ -127,15 +127,22 @@ fn a_value_on_both_sides_of_two_reactions_is_one_value() {
         enthalpy: enthalpy.to_string(),
     });
     // CH2O is a reactant of the first and a product of the second, C2H4O2 the other way round.
-    let rest = reaction("join", "2 CH2O(l) -> C2H4O2(l)") + &reaction("split", "C2H4O2(l) -> 2 CH2O(l)");
+    let rest =
+        reaction("join", "2 CH2O(l) -> C2H4O2(l)") + &reaction("split", "C2H4O2(l) -> 2 CH2O(l)");
     let calculation = worked(&case(&[SOURCE], &rest), &files(&all));
     assert_eq!(calculation.problem.values.len(), 2);
-    let (join, split) = (outcome(&calculation, "join.heat"), outcome(&calculation, "split.heat"));
+    let (join, split) = (
+        outcome(&calculation, "join.heat"),
+        outcome(&calculation, "split.heat"),
+    );
     // -250.0 - 2·(-100.0) = -50.0; u² = (2·1.0)² + (1·2.0)² = 8.
     assert_eq!(exact(join), &ratio(-50, 1));
     assert_eq!(exact(split), &ratio(50, 1));
     assert!(near(join.combined.standard, Some(8f64.sqrt())));
     let together = join.form.plus(&split.form);
-    assert!(together.is_empty(), "one and its reverse leave nothing: {together:?}");
+    assert!(
+        together.is_empty(),
+        "one and its reverse leave nothing: {together:?}"
+    );
     assert!(exact(join).is_negative());
 }

@@ -21,7 +21,9 @@ impl Files {
 
 impl SourceFiles for Files {
     fn text(&self, name: &str) -> Option<Result<Text, Fault>> {
-        self.0.get(name).map(|text| Ok(Text::new(name, text.as_str())))
+        self.0
+            .get(name)
+            .map(|text| Ok(Text::new(name, text.as_str())))
     }
 }
 
@@ -58,11 +60,17 @@ pub fn codes(faults: &[Fault]) -> Vec<FaultCode> {
 }
 
 pub fn outcome<'c>(calculation: &'c Calculation, id: &str) -> &'c Outcome {
-    calculation.working.outcome(id).unwrap_or_else(|| panic!("no result {id}"))
+    calculation
+        .working
+        .outcome(id)
+        .unwrap_or_else(|| panic!("no result {id}"))
 }
 
 pub fn exact(outcome: &Outcome) -> &Exact {
-    outcome.value.exact().expect("sums of printed decimals are exact")
+    outcome
+        .value
+        .exact()
+        .expect("sums of printed decimals are exact")
 }
 
 /// Sensitivities by the substance of the value; equal for equal results however the values used
