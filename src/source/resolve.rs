@@ -1,5 +1,6 @@
 //! From a case and its sources to a problem.
 
+use std::cell::OnceCell;
 use std::collections::BTreeMap;
 
 use crate::case::{Case, DeclaredKind, Reaction};
@@ -61,6 +62,8 @@ pub(super) struct Resolver<'a> {
     atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
+    /// All notations and names of the sources, gathered at the first unknown substance.
+    pub(super) names: OnceCell<Vec<String>>,
 }
 
 impl<'a> Resolver<'a> {
@@ -77,6 +80,7 @@ impl<'a> Resolver<'a> {
             atomic_weights: BTreeMap::new(),
             findings: Vec::new(),
             faults: Faults::default(),
+            names: OnceCell::new(),
         }
     }
 

@@ -11,6 +11,11 @@ use super::resolve::Resolver;
 /// How many candidates a message names.
 const MOST: usize = 6;
 
+/// How many faults are helped by a search through all names, which takes milliseconds each.
+const MOST_SEARCHED: usize = 20;
+
+const OWN_VALUE: &str = "cite a value for it in a source file of your own and consult that";
+
 /// No consulted source lists the substance.
 pub(super) fn unknown_substance(resolver: &Resolver<'_>, wanted: &Wanted, span: &Span) -> Fault {
     Fault::new(
@@ -39,6 +44,9 @@ fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
     if !forms.is_empty() {
         return format!("the sources list: {}", forms.join(", "));
     }
+    if resolver.faults.len() >= MOST_SEARCHED {
+        return OWN_VALUE.to_string();
+    }
     let elsewhere = not_consulted(resolver, wanted);
     if !elsewhere.is_empty() {
         return format!(
@@ -48,7 +56,7 @@ fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
     }
     let near = near_names(resolver, wanted);
     if near.is_empty() {
-        return "cite a value for it in a source file of your own and consult that".to_string();
+        return OWN_VALUE.to_string();
     }
     format!(
         "did you mean {}? Otherwise cite a value in a source file of your own",
@@ -85,12 +93,7 @@ fn not_consulted(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<&'static str> 
 
 /// Substances whose notation or name is near to what was written.
 fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
-    let entries: Vec<Entry> = resolver.sources.iter().flat_map(|s| s.all()).collect();
-    let mut candidates: Vec<String> = entries
-        .iter()
-        .filter_map(|e| Some(e.species()?.to_string()))
-        .collect();
-    candidates.extend(entries.iter().filter_map(|e| e.name.clone()));
+    let candidates = resolver.names.get_or_init(|| all_names(resolver));
     let words = std::iter::once(&wanted.label).chain(&wanted.names);
     let species = wanted.species.to_string();
     let mut near: Vec<String> = Vec::new();
@@ -104,6 +107,21 @@ fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
     }
     near.truncate(MOST);
     near
+}
+
+/// Every notation and every name that the consulted sources list.
+fn all_names(resolver: &Resolver<'_>) -> Vec<String> {
+    let entries: Vec<Entry> = resolver
+        .sources
+        .iter()
+        .flat_map(|source| source.all())
+        .collect();
+    let notations = entries
+        .iter()
+        .filter_map(|e| Some(e.species()?.to_string()));
+    notations
+        .chain(entries.iter().filter_map(|e| e.name.clone()))
+        .collect()
 }
 
 /// An entry with what tells it apart.

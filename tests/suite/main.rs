@@ -1,1 +1,4 @@
 //! Whole-program tests, in one binary because each links the typesetter.
+
+mod laws;
+mod record;
