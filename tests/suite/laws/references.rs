@@ -203,7 +203,7 @@ fn another_reference_state_stops_unless_its_atoms_cancel() {
         said[0]
     );
     assert!(
-        said[0].contains("2 atoms of P do not cancel within red"),
+        said[0].contains("2 mol of P does not cancel within red"),
         "{}",
         said[0]
     );
