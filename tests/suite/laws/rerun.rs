@@ -6,7 +6,7 @@ use std::path::Path;
 use hesswright::calculation::Calculation;
 use hesswright::finding::Text;
 use hesswright::folder::CaseFolder;
-use hesswright::record::{AttachedFile, MANIFEST_NAME, Manifest, Record, Typesetting, assemble};
+use hesswright::record::{Attachment, MANIFEST_NAME, Manifest, Record, Typesetting, assemble};
 use proptest::prelude::*;
 
 use super::invented::{SOURCE, balanced, compounds, equation, numbers, source};
@@ -21,7 +21,7 @@ fn typesetting() -> Typesetting {
     }
 }
 
-fn attached<'a>(files: &'a [AttachedFile], name: &str) -> &'a str {
+fn attached<'a>(files: &'a [Attachment], name: &str) -> &'a str {
     let file = files.iter().find(|file| file.name == name);
     let bytes = &file
         .unwrap_or_else(|| panic!("{name} is not attached"))
