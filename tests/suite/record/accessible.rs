@@ -13,11 +13,55 @@ use super::tree::{attribute, elements};
 
 /// Structure types of ISO 32000-1, 14.8.4.
 const STANDARD: [&str; 49] = [
-    "Document", "Part", "Art", "Sect", "Div", "BlockQuote", "Caption", "TOC", "TOCI", "Index",
-    "NonStruct", "Private", "P", "H", "H1", "H2", "H3", "H4", "H5", "H6", "L", "LI", "Lbl",
-    "LBody", "Table", "TR", "TH", "TD", "THead", "TBody", "TFoot", "Span", "Quote", "Note",
-    "Reference", "BibEntry", "Code", "Link", "Annot", "Ruby", "RB", "RT", "RP", "Warichu", "WT",
-    "WP", "Figure", "Formula", "Form",
+    "Document",
+    "Part",
+    "Art",
+    "Sect",
+    "Div",
+    "BlockQuote",
+    "Caption",
+    "TOC",
+    "TOCI",
+    "Index",
+    "NonStruct",
+    "Private",
+    "P",
+    "H",
+    "H1",
+    "H2",
+    "H3",
+    "H4",
+    "H5",
+    "H6",
+    "L",
+    "LI",
+    "Lbl",
+    "LBody",
+    "Table",
+    "TR",
+    "TH",
+    "TD",
+    "THead",
+    "TBody",
+    "TFoot",
+    "Span",
+    "Quote",
+    "Note",
+    "Reference",
+    "BibEntry",
+    "Code",
+    "Link",
+    "Annot",
+    "Ruby",
+    "RB",
+    "RT",
+    "RP",
+    "Warichu",
+    "WT",
+    "WP",
+    "Figure",
+    "Formula",
+    "Form",
 ];
 
 #[test]
@@ -39,7 +83,9 @@ fn the_catalogue_says_language_title_and_that_it_is_tagged() {
 fn parents(pdf: &Pdf) -> BTreeMap<i32, Object<'_>> {
     let root = dict(&catalogue(pdf), "StructTreeRoot");
     let pairs = tree(&dict(&root, "ParentTree"), "Nums").into_iter();
-    pairs.map(|(key, value)| (key.into_i32().expect("a number"), value)).collect()
+    pairs
+        .map(|(key, value)| (key.into_i32().expect("a number"), value))
+        .collect()
 }
 
 #[test]
@@ -50,7 +96,9 @@ fn every_page_is_in_the_structure_and_is_read_in_its_order() {
         for page in pdf.pages().iter() {
             let page = page.raw();
             assert_eq!(name(page, "Tabs"), "S");
-            let key = page.get::<i32>("StructParents").expect("a key of the parent tree");
+            let key = page
+                .get::<i32>("StructParents")
+                .expect("a key of the parent tree");
             let Some(Object::Array(owners)) = parents.get(&key) else {
                 panic!("the parent tree has no page {key}")
             };
@@ -69,12 +117,20 @@ fn roles_are_standard_or_mapped_to_standard_ones() {
         for element in elements(&pdf) {
             let role = match STANDARD.contains(&element.role.as_str()) {
                 true => {
-                    assert!(!map.contains_key(&element.role), "{} is remapped", element.role);
+                    assert!(
+                        !map.contains_key(&element.role),
+                        "{} is remapped",
+                        element.role
+                    );
                     continue;
                 }
                 false => name(&map, &element.role),
             };
-            assert!(STANDARD.contains(&role.as_str()), "{} is {role:?}", element.role);
+            assert!(
+                STANDARD.contains(&role.as_str()),
+                "{} is {role:?}",
+                element.role
+            );
         }
     }
 }
@@ -89,7 +145,13 @@ fn formulas_and_figures_have_a_text_and_equations_their_spoken_one() {
             of_role.map(|e| string(&e.dict, "Alt")).collect()
         };
         assert!(alternative("Figure").iter().all(|alt| !alt.is_empty()));
-        let steps = record.issue.record.pages.working.iter().flat_map(|section| &section.steps);
+        let steps = record
+            .issue
+            .record
+            .pages
+            .working
+            .iter()
+            .flat_map(|section| &section.steps);
         let spoken: Vec<String> = steps
             .filter_map(|step| match step {
                 Step::Equation { alt, .. } => Some(alt.clone()),
@@ -116,7 +178,10 @@ fn tables_have_heads_with_a_scope_and_rows_of_cells() {
                 "TH" => {
                     assert_eq!(parent(i), "TR");
                     let scope = attribute(&element.dict, "Table", "Scope").unwrap_or_default();
-                    assert!(["Column", "Row", "Both"].contains(&scope.as_str()), "{scope}");
+                    assert!(
+                        ["Column", "Row", "Both"].contains(&scope.as_str()),
+                        "{scope}"
+                    );
                     let mut above = Some(i);
                     while let Some(at) = above.filter(|at| elements[*at].role != "Table") {
                         above = elements[at].parent;
@@ -139,7 +204,10 @@ fn headings_skip_no_level() {
             .filter_map(|e| e.role.strip_prefix('H')?.parse().ok())
             .collect();
         assert_eq!(levels.first(), Some(&1));
-        assert!(levels.windows(2).all(|pair| pair[1] <= pair[0] + 1), "{levels:?}");
+        assert!(
+            levels.windows(2).all(|pair| pair[1] <= pair[0] + 1),
+            "{levels:?}"
+        );
     }
 }
 

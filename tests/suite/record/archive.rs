@@ -29,7 +29,10 @@ fn the_file_begins_as_a_pdf_and_is_not_encrypted() {
     for record in shipped() {
         let bytes = &record.issue.pdf;
         assert!(bytes.starts_with(b"%PDF-1.7\n%"), "{:?}", &bytes[..12]);
-        assert!(bytes[10..14].iter().all(|byte| *byte > 127), "a comment of high bytes");
+        assert!(
+            bytes[10..14].iter().all(|byte| *byte > 127),
+            "a comment of high bytes"
+        );
         assert!(!contains(bytes, b"/Encrypt"));
         assert!(contains(bytes, b"/ID"));
     }
@@ -40,7 +43,10 @@ fn the_metadata_claim_both_standards_and_give_the_date_of_the_record() {
     for record in shipped() {
         let head = &record.calculation.case.record;
         let text = xmp(&record.pdf());
-        let title = format!("{}, revision {}: {}", head.number.value, head.revision.value, head.title);
+        let title = format!(
+            "{}, revision {}: {}",
+            head.number.value, head.revision.value, head.title
+        );
         let date = format!("{}T00:00:00", head.date);
         for said in [
             "<pdfaid:part>3</pdfaid:part>".to_string(),
@@ -60,8 +66,10 @@ fn the_metadata_claim_both_standards_and_give_the_date_of_the_record() {
 fn the_information_dictionary_agrees_with_the_metadata() {
     for record in shipped() {
         let pdf = record.pdf();
-        let infos: Vec<Dict<'_>> =
-            all_dicts(&pdf).into_iter().filter(|d| d.contains_key("CreationDate")).collect();
+        let infos: Vec<Dict<'_>> = all_dicts(&pdf)
+            .into_iter()
+            .filter(|d| d.contains_key("CreationDate"))
+            .collect();
         assert_eq!(infos.len(), 1);
         for key in ["CreationDate", "ModDate"] {
             assert_eq!(string(&infos[0], key), pdf_date(record), "{key}");
@@ -94,8 +102,10 @@ fn an_output_intent_carries_its_profile() {
 fn fonts_are_embedded_and_say_their_text() {
     for record in shipped() {
         let pdf = record.pdf();
-        let fonts: Vec<Dict<'_>> =
-            all_dicts(&pdf).into_iter().filter(|d| name(d, "Type") == "Font").collect();
+        let fonts: Vec<Dict<'_>> = all_dicts(&pdf)
+            .into_iter()
+            .filter(|d| name(d, "Type") == "Font")
+            .collect();
         let (mut whole, mut descendants) = (0, 0);
         for font in fonts {
             if name(&font, "Subtype") == "Type0" {
@@ -105,7 +115,11 @@ fn fonts_are_embedded_and_say_their_text() {
             } else {
                 let descriptor = dict(&font, "FontDescriptor");
                 let embedded = ["FontFile2", "FontFile3"];
-                assert!(embedded.iter().any(|key| descriptor.get::<Stream<'_>>(key).is_some()));
+                assert!(
+                    embedded
+                        .iter()
+                        .any(|key| descriptor.get::<Stream<'_>>(key).is_some())
+                );
                 let full = name(&descriptor, "FontName");
                 assert_eq!(full.find('+'), Some(6), "{full} is a subset");
                 descendants += 1;
@@ -121,16 +135,34 @@ fn nothing_acts_and_nothing_lies_outside() {
     for record in shipped() {
         let pdf = record.pdf();
         for dict in all_dicts(&pdf) {
-            for key in ["JS", "AA", "OpenAction", "XFA", "Launch", "URI", "FFilter", "Ref"] {
+            for key in [
+                "JS",
+                "AA",
+                "OpenAction",
+                "XFA",
+                "Launch",
+                "URI",
+                "FFilter",
+                "Ref",
+            ] {
                 assert!(!dict.contains_key(key), "{key} in {dict:?}");
             }
             let kind = name(&dict, "Type");
-            assert!(!["Action", "ObjStm3D", "Sound", "Movie"].contains(&kind.as_str()), "{kind}");
+            assert!(
+                !["Action", "ObjStm3D", "Sound", "Movie"].contains(&kind.as_str()),
+                "{kind}"
+            );
             if name(&dict, "Subtype") == "Link" {
-                assert!(dict.contains_key("Dest") && !dict.contains_key("A"), "{dict:?}");
+                assert!(
+                    dict.contains_key("Dest") && !dict.contains_key("A"),
+                    "{dict:?}"
+                );
             }
             if kind == "Filespec" {
-                assert!(dict.contains_key("EF"), "a file that is not embedded: {dict:?}");
+                assert!(
+                    dict.contains_key("EF"),
+                    "a file that is not embedded: {dict:?}"
+                );
             }
         }
         assert!(!dict(&catalogue(&pdf), "Names").contains_key("JavaScript"));
@@ -142,8 +174,10 @@ fn every_attachment_is_declared_described_and_dated() {
     for record in shipped() {
         let pdf = record.pdf();
         let catalogue = catalogue(&pdf);
-        let associated: BTreeSet<String> =
-            array::<Dict<'_>>(&catalogue, "AF").iter().map(|file| string(file, "UF")).collect();
+        let associated: BTreeSet<String> = array::<Dict<'_>>(&catalogue, "AF")
+            .iter()
+            .map(|file| string(file, "UF"))
+            .collect();
         let names = dict(&dict(&catalogue, "Names"), "EmbeddedFiles");
         let attached = &record.issue.record.attachments;
         let listed = tree(&names, "Names");
@@ -153,16 +187,29 @@ fn every_attachment_is_declared_described_and_dated() {
                 panic!("a name tree of strings and dictionaries")
             };
             let key = decoded(key.as_bytes());
-            let ours = attached.iter().find(|a| a.name == key).expect("an attachment of ours");
+            let ours = attached
+                .iter()
+                .find(|a| a.name == key)
+                .expect("an attachment of ours");
             assert!(associated.contains(&key), "{key} is not in /AF");
-            assert_eq!((string(&file, "F"), string(&file, "UF")), (key.clone(), key.clone()));
+            assert_eq!(
+                (string(&file, "F"), string(&file, "UF")),
+                (key.clone(), key.clone())
+            );
             assert_eq!(string(&file, "Desc"), ours.description);
             let relationship = if key == "case.toml" { "Source" } else { "Data" };
             assert_eq!(name(&file, "AFRelationship"), relationship, "{key}");
-            assert_eq!(ours.relationship == Relationship::Source, key == "case.toml");
+            assert_eq!(
+                ours.relationship == Relationship::Source,
+                key == "case.toml"
+            );
             let embedded: Stream<'_> = dict(&file, "EF").get("UF").expect("an embedded file");
             assert!(stream(&embedded) == ours.bytes, "{key}");
-            let media = if key.ends_with(".json") { "application/json" } else { "application/toml" };
+            let media = if key.ends_with(".json") {
+                "application/json"
+            } else {
+                "application/toml"
+            };
             assert_eq!(name(embedded.dict(), "Subtype"), media, "{key}");
             let params = dict(embedded.dict(), "Params");
             assert_eq!(string(&params, "ModDate"), pdf_date(record), "{key}");

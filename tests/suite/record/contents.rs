@@ -72,7 +72,14 @@ fn results_are_there_as_stated() {
         let body = body(&record.pdf());
         for outcome in &record.calculation.working.outcomes {
             let value = with_minus(&outcome.stated.value_text);
-            says(&body, [outcome.id.clone(), value, outcome.direction().word().to_string()]);
+            says(
+                &body,
+                [
+                    outcome.id.clone(),
+                    value,
+                    outcome.direction().word().to_string(),
+                ],
+            );
         }
     }
 }
@@ -87,7 +94,11 @@ fn findings_inputs_assumptions_and_holds_are_there() {
             says(&body, [finding.code.word().to_string(), at]);
             // A minus is set as one, so the message is compared without hyphens and minus signs.
             let bare = |text: &str| plain(text).replace(['-', '−'], "");
-            assert!(bare(&body).contains(&bare(&finding.message)), "{}", finding.message);
+            assert!(
+                bare(&body).contains(&bare(&finding.message)),
+                "{}",
+                finding.message
+            );
         }
         for input in case.inputs.values() {
             let value = input.value.value.printed_number().replace("exact ", "");
@@ -114,20 +125,39 @@ fn cautions_references_program_and_attachments_are_there() {
         let pages = &record.issue.record.pages;
         assert!(pages.cautions.len() >= 7 && pages.attachments.len() >= 5);
         says(&body, pages.cautions.clone());
-        says(&body, pages.references.iter().map(|reference| reference.text.clone()));
+        says(
+            &body,
+            pages
+                .references
+                .iter()
+                .map(|reference| reference.text.clone()),
+        );
         for file in &record.issue.record.attachments {
-            says(&body, [file.name.clone(), file.description.clone(), file.media_type.to_string()]);
+            says(
+                &body,
+                [
+                    file.name.clone(),
+                    file.description.clone(),
+                    file.media_type.to_string(),
+                ],
+            );
         }
         says(
             &body,
             [
-                format!("hesswright {}; pages set by typst", env!("CARGO_PKG_VERSION")),
+                format!(
+                    "hesswright {}; pages set by typst",
+                    env!("CARGO_PKG_VERSION")
+                ),
                 record.issue.record.stamp().to_string(),
                 head.facility.clone().unwrap_or_default(),
                 "It is not in force.".to_string(),
             ],
         );
-        says(&body, head.history.iter().map(|revision| revision.change.clone()));
+        says(
+            &body,
+            head.history.iter().map(|revision| revision.change.clone()),
+        );
         says(&body, head.equipment.iter().chain(&head.related).cloned());
     }
 }

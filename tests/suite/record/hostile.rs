@@ -27,7 +27,7 @@ fn hostile() -> Issued {
     let scripts = literal(&format!("{HEBREW} {COMPOSED} {MARKED}"));
     let case = format!(
         "[record]\nnumber = \"T-1\"\nrevision = \"A\"\ntitle = {markup}\nfacility = {scripts}\n\
-         equipment = [{markup}]\ndate = 2026-01-02\npreparer = {markup}\nstatus = \"preliminary\"\n\
+         equipment = [{markup}]\ndate = 2026-01-02\npreparer = \"#N. *N.* $x$ <a> @b\"\nstatus = \"preliminary\"\n\
          history = [{{ revision = \"A\", date = 2026-01-02, change = {markup} }}]\n\
          [[assumptions]]\ntext = {markup}\nbasis = {word}\nconfirmed = true\n\
          [sources]\nconsult = [\"own.toml\"]\n\
@@ -39,7 +39,10 @@ fn hostile() -> Issued {
          energy-unit = \"kJ/mol\"\n[[entry]]\nsubstance = \"H2O(l)\"\nname = {markup}\n\
          locator = {markup}\nformation-enthalpy = \"-285.8\"\n"
     );
-    Issued::of(Text::new("case.toml", case), &Files::of(&[("own.toml", &source)]))
+    Issued::of(
+        Text::new("case.toml", case),
+        &Files::of(&[("own.toml", &source)]),
+    )
 }
 
 #[test]
@@ -47,9 +50,9 @@ fn what_a_case_says_stands_on_the_pages_as_it_was_written() {
     let record = hostile();
     let pdf = record.pdf();
     let body = body(&pdf);
-    // Title, equipment, preparer, change, assumption, source of the input, title and authors of
-    // the source, name and locator of its entry.
-    assert!(body.matches(&plain(MARKUP)).count() >= 10, "{body}");
+    // Title, equipment, change, assumption, source of the input, title and authors of the
+    // source, name and locator of its entry.
+    assert!(body.matches(&plain(MARKUP)).count() >= 9, "{body}");
     assert!(body.contains(&word()));
     let backwards: String = HEBREW.chars().rev().collect();
     // Text that runs to the left may be stored in the order of the page.
@@ -58,6 +61,13 @@ fn what_a_case_says_stands_on_the_pages_as_it_was_written() {
     assert!(body.contains(MARKED), "{body}");
     for sheet in pages(&pdf) {
         assert!(sheet.sheet.contains("PRELIMINARY"));
+        assert!(
+            sheet
+                .sheet
+                .contains(&plain("Prepared: #N. *N.* $x$ <a> @b")),
+            "{}",
+            sheet.sheet
+        );
     }
     assert!(reissued(&record.issue.pdf) == record.issue.pdf);
 }

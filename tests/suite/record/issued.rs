@@ -36,12 +36,23 @@ impl Issued {
 /// The records of the cases that come with the program.
 pub fn shipped() -> &'static [Issued; 2] {
     static SHIPPED: OnceLock<[Issued; 2]> = OnceLock::new();
-    SHIPPED.get_or_init(|| ["nitrobenzene-hydrogenation.toml", "acid-neutralisation.toml"].map(of_case))
+    SHIPPED.get_or_init(|| {
+        [
+            "nitrobenzene-hydrogenation.toml",
+            "acid-neutralisation.toml",
+        ]
+        .map(of_case)
+    })
 }
 
 fn of_case(name: &str) -> Issued {
-    let path = Path::new(env!("CARGO_MANIFEST_DIR")).join("cases").join(name);
-    let text = Text::new("case.toml", fs::read_to_string(&path).expect("a shipped case"));
+    let path = Path::new(env!("CARGO_MANIFEST_DIR"))
+        .join("cases")
+        .join(name);
+    let text = Text::new(
+        "case.toml",
+        fs::read_to_string(&path).expect("a shipped case"),
+    );
     let folder = CaseFolder::of(&path, &text);
     Issued::of(text, &folder)
 }
@@ -50,15 +61,22 @@ fn of_case(name: &str) -> Issued {
 pub fn reissued(pdf: &[u8]) -> Vec<u8> {
     let file = RecordFile::read(pdf.to_vec()).expect("a record");
     let text = |name: &str| {
-        let bytes = file.get(name).unwrap_or_else(|| panic!("{name} is not attached"));
+        let bytes = file
+            .get(name)
+            .unwrap_or_else(|| panic!("{name} is not attached"));
         String::from_utf8(bytes.to_vec()).expect("attachments are text")
     };
     let manifest: Manifest = serde_json::from_str(&text(MANIFEST_NAME)).expect("a manifest");
     let sources = manifest.consult.iter().map(|(name, file)| {
-        (name.clone(), text(file.as_str().expect("the name of an attachment")))
+        (
+            name.clone(),
+            text(file.as_str().expect("the name of an attachment")),
+        )
     });
     let files = Files(sources.collect());
-    Issued::of(Text::new("case.toml", text("case.toml")), &files).issue.pdf
+    Issued::of(Text::new("case.toml", text("case.toml")), &files)
+        .issue
+        .pdf
 }
 
 #[test]

@@ -9,7 +9,8 @@ pub fn catalogue(pdf: &Pdf) -> Dict<'_> {
 
 /// The dictionary of a key; a missing one is a failed test that names the key.
 pub fn dict<'a>(of: &Dict<'a>, key: &str) -> Dict<'a> {
-    of.get(key).unwrap_or_else(|| panic!("no dictionary /{key}"))
+    of.get(key)
+        .unwrap_or_else(|| panic!("no dictionary /{key}"))
 }
 
 pub fn array<'a, T>(of: &Dict<'a>, key: &str) -> Vec<T>
@@ -41,7 +42,9 @@ pub fn decoded(bytes: &[u8]) -> String {
 }
 
 pub fn utf16(bytes: &[u8]) -> String {
-    let units = bytes.chunks_exact(2).map(|pair| u16::from_be_bytes([pair[0], pair[1]]));
+    let units = bytes
+        .chunks_exact(2)
+        .map(|pair| u16::from_be_bytes([pair[0], pair[1]]));
     String::from_utf16(&units.collect::<Vec<_>>()).expect("UTF-16")
 }
 

@@ -54,7 +54,9 @@ fn fonts(page: &Dict<'_>) -> BTreeMap<String, Coding> {
     };
     let coding = |name: &str| {
         let font = fonts.get::<Dict<'_>>(name).expect("a font");
-        let map = font.get::<Stream<'_>>("ToUnicode").expect("every font says its text");
+        let map = font
+            .get::<Stream<'_>>("ToUnicode")
+            .expect("every font says its text");
         coding(&String::from_utf8_lossy(&stream(&map)))
     };
     let names = fonts.keys().map(|name| name.as_str().to_string());
@@ -150,14 +152,20 @@ impl Walk {
         let coding = fonts.get(&self.font).expect("a font that the page has");
         for code in codes.chunks_exact(2) {
             let code = u16::from_be_bytes([code[0], code[1]]);
-            let text = coding.get(&code).unwrap_or_else(|| panic!("no text for {code:04x}"));
+            let text = coding
+                .get(&code)
+                .unwrap_or_else(|| panic!("no text for {code:04x}"));
             self.push(text);
         }
     }
 
     fn push(&mut self, text: &str) {
         let artifact = self.marks.iter().any(|mark| matches!(mark, Mark::Artifact));
-        let into = if artifact { &mut self.text.sheet } else { &mut self.text.body };
+        let into = if artifact {
+            &mut self.text.sheet
+        } else {
+            &mut self.text.body
+        };
         into.push_str(&plain(text));
     }
 }
