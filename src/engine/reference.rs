@@ -142,8 +142,13 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
             two_digits(0.1)
         ),
     };
+    // A heat that is off by an unknown amount does not hold.
+    let severity = match unknown.is_empty() {
+        true => Severity::Caution,
+        false => Severity::Stop,
+    };
     Some((
-        Severity::Caution,
+        severity,
         FindingCode::ReferenceTemperature,
         format!(
             "{}: {} gives values for another reference temperature than 298.15 K. They are used \
@@ -247,7 +252,7 @@ fn mixed_state(
         FindingCode::ReferenceState,
         format!(
             "{}: {id} counts {symbol} from {state}, the others from its usual reference state. \
-             {} atoms of {symbol} do not cancel within {id}: that {cost}. Take all substances with \
+             {} mol of {symbol} does not cancel within {id}: that {cost}. Take all substances with \
              {symbol} from one source.",
             reaction.id,
             exact_text(atoms)

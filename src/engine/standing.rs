@@ -115,9 +115,9 @@ pub(super) fn fixed_decimals(problem: &Problem, outcomes: &[Outcome], text: &Tex
 /// A caution where the uncertainty of results does not cover all values used.
 pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -> Vec<Finding> {
     let short: Vec<&Outcome> = outcomes.iter().filter(|o| !o.is_complete()).collect();
-    let Some(first) = short.first() else {
+    if short.is_empty() {
         return Vec::new();
-    };
+    }
     let mut silent: Vec<usize> = Vec::new();
     for outcome in &short {
         for (index, _) in outcome.form.iter() {
@@ -134,10 +134,9 @@ pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -
         severity: Severity::Caution,
         code: FindingCode::UncertaintyIncomplete,
         message: format!(
-            "The uncertainty of {} covers {} of {} values used: {} not stated, which is not zero.",
+            "The uncertainty of {} does not cover every value used: {} not stated, which is not \
+             zero.",
             named(&short),
-            first.combined.stated,
-            first.combined.of,
             named_values(
                 problem,
                 &silent
