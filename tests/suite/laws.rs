@@ -10,4 +10,4 @@ mod order;
 mod references;
 mod rerun;
 mod sums;
-mod support;
+pub mod support;
