@@ -72,6 +72,14 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
     ))
 }
 
+/// Reads the `[source]` table of a text that holds nothing else.
+pub(super) fn read_head_alone(text: &Text) -> Option<SourceHead> {
+    let (head, _) = with_document(text, |document| {
+        read_head(&document.root.table("source")?, text)
+    });
+    head
+}
+
 /// What the entries need the head to say, so that nothing about them is guessed.
 fn require_for_entries(table: &Table<'_, '_>, head: &SourceHead, entries: &[Entry]) {
     let enthalpies = entries

@@ -1,11 +1,11 @@
 //! From a case and its sources to a problem.
 
 use std::cell::OnceCell;
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 use crate::case::{Case, DeclaredKind, Reaction};
 use crate::finding::{Fault, FaultCode, Faults, Finding, Located, Span, Text};
-use crate::notation::{Formula, Participant, Species, Term, balanced_form, imbalance};
+use crate::notation::{Element, Formula, Participant, Species, Term, balanced_form, imbalance};
 use crate::quantity::{Correlations, Exact, Quantity, to_f64};
 
 use super::builtin::ATOMIC_WEIGHTS;
@@ -103,9 +103,11 @@ impl<'a> Resolver<'a> {
 
     fn problem(self, reactions: Vec<Option<ProblemReaction>>) -> Problem {
         let correlations = self.correlations();
+        let counts = self.substances.iter().map(|s| s.species.formula.counts());
+        let elements: BTreeSet<Element> = counts.flat_map(|c| c.keys().copied()).collect();
         Problem {
             // The conventions are always the first source.
-            reference_states: ReferenceStates::of(&self.sources[0]),
+            reference_states: ReferenceStates::of(&self.sources[0], elements),
             consulted: self.consulted,
             became: self.became,
             substances: self.substances,
