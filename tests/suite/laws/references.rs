@@ -203,7 +203,7 @@ fn another_reference_state_stops_unless_its_atoms_cancel() {
         said[0]
     );
     assert!(
-        said[0].contains("2 atoms of P do not cancel within red"),
+        said[0].contains("2 mol of P does not cancel within red"),
         "{}",
         said[0]
     );
@@ -215,7 +215,7 @@ fn another_reference_state_stops_unless_its_atoms_cancel() {
     // As a reactant the other way: +17.5, to two digits, half to even, 18.
     let said = stops(&both, "PCl3(l) + 1/2 O2(g) -> POCl3(l)");
     assert!(
-        said[0].contains("-1 atoms of P") && said[0].contains("by 18 kJ/mol"),
+        said[0].contains("-1 mol of P") && said[0].contains("by 18 kJ/mol"),
         "{}",
         said[0]
     );
