@@ -139,7 +139,10 @@ fn an_incomplete_uncertainty_does_not_decide_and_is_said() {
     );
     let silent = worked(&text, &source("", "40.1", "-7.25"));
     assert_eq!(outcome(&silent, "a.heat").combined.standard, None);
-    assert!(messages(&silent, "uncertainty-incomplete")[0].contains("CH2O(l), C3H6O3(l)"));
+    assert!(
+        messages(&silent, "uncertainty-incomplete")[0]
+            .contains("CH2O(l) (digits), C3H6O3(l) (digits)")
+    );
 }
 
 #[test]
