@@ -96,10 +96,14 @@ fn check_bindings(
     ids: &Ids,
     reactions: &IndexMap<String, Reaction>,
 ) {
-    for binding in markdown_bindings(&markdown.value) {
-        let span = reader
-            .text()
-            .inside(&markdown.span, &markdown.value, &binding.span);
+    let (literal, text) = (&markdown.span, &markdown.value);
+    // The text is looked for in its literal once: a long one can hold thousands of bindings.
+    let whole = reader.text().inside(literal, text, &(0..text.len()));
+    for binding in markdown_bindings(text) {
+        let span = match whole.len() == text.len() {
+            true => whole.start + binding.span.start..whole.start + binding.span.end,
+            false => literal.clone(),
+        };
         if ids.kind(&binding.name) != Some(IdKind::Input) {
             check_result(reader, &binding.name, &span, ids, reactions);
         }
