@@ -14,11 +14,12 @@ pub enum IdKind {
 }
 
 impl IdKind {
+    /// The word with its article.
     fn word(self) -> &'static str {
         match self {
-            IdKind::Substance => "substance",
-            IdKind::Input => "input",
-            IdKind::Reaction => "reaction",
+            IdKind::Substance => "a substance",
+            IdKind::Input => "an input",
+            IdKind::Reaction => "a reaction",
         }
     }
 }
@@ -55,8 +56,8 @@ impl Ids {
             reader.fault(
                 FaultCode::DuplicateId,
                 &id.span,
-                format!("the id `{}` for a {}", id.value, kind.word()),
-                format!("an id of its own: line {line} has it for a {}", other.word()),
+                format!("the id `{}` for {}", id.value, kind.word()),
+                format!("an id of its own: line {line} has it for {}", other.word()),
                 "rename one of the two, and where it is used",
             );
             return;
@@ -70,7 +71,10 @@ impl Ids {
 
     /// Reports an id that nothing has, with the nearest one of the kind that was asked for.
     pub(super) fn unknown(&self, reader: &Reader<'_>, id: &str, span: &Span, wanted: &[IdKind]) {
-        let fitting = self.taken.iter().filter(|(_, (kind, _))| wanted.contains(kind));
+        let fitting = self
+            .taken
+            .iter()
+            .filter(|(_, (kind, _))| wanted.contains(kind));
         let advice = match nearest(id, fitting.map(|(id, _)| id.as_str()), 1).first() {
             Some(near) => format!("did you mean `{near}`?"),
             None => "define it, or use one that is defined".to_string(),
@@ -80,7 +84,7 @@ impl Ids {
             FaultCode::UnknownId,
             span,
             format!("`{id}`"),
-            format!("the id of a {} of this case", words.join(" or ")),
+            format!("the id of {} of this case", words.join(" or ")),
             advice,
         );
     }

@@ -2,7 +2,7 @@
 
 use chrono::NaiveDate;
 
-use crate::document::{Reader, Table, one_of, value_fault};
+use crate::document::{Reader, Table, filled, one_of, value_fault};
 use crate::finding::Located;
 
 use super::model::{RecordHead, Revision, Role, Status};
@@ -33,39 +33,46 @@ const ROLES: [(&str, Role); 3] = [
     ("approver", Role::Approver),
 ];
 
-pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
+/// Reads the head. What is at fault in it is reported and left empty.
+pub(super) fn read_record(table: &Table<'_, '_>) -> RecordHead {
     table.only(&KEYS);
     let reader = table.reader();
     let number = table.required_string("number", "give the record's number: number = \"C-1001\"");
     let revision = table.required_string("revision", "give the revision: revision = \"A\"");
     let title = table.required_string("title", "say what is calculated: title = \"…\"");
     let preparer = table.required_string("preparer", "name who answers for the case");
-    let status = table.required_string("status", "status = \"preliminary\", \"for-check\" or \"issued\"");
+    let status = table.required_string(
+        "status",
+        "status = \"preliminary\", \"for-check\" or \"issued\"",
+    );
     let date = required_date(table, "date");
+    let title = title.and_then(|text| filled(reader, text));
+    let preparer = preparer.and_then(|text| filled(reader, text));
     let number = number.and_then(|text| file_word(reader, text));
     let revision = revision.and_then(|text| file_word(reader, text));
-    let status = status.and_then(|text| {
-        Some(Located::new(one_of(reader, &text, &STATUSES)?, text.span))
-    });
+    let status =
+        status.and_then(|text| Some(Located::new(one_of(reader, &text, &STATUSES)?, text.span)));
     let texts = |key| table.strings(key).into_iter().map(|t| t.value).collect();
     let history = table.tables("history");
     let history: Vec<_> = history.iter().map(read_revision).collect();
     let signatures = read_signatures(table);
     let facility = table.string("facility").map(|t| t.value);
     let (equipment, related) = (texts("equipment"), texts("related"));
-    Some(RecordHead {
-        number: number?,
-        revision: revision?,
-        title: title.and_then(|title| filled(reader, title))?,
+    let empty = || Located::new(String::new(), table.span.clone());
+    let preliminary = || Located::new(Status::Preliminary, table.span.clone());
+    RecordHead {
+        number: number.unwrap_or_else(empty),
+        revision: revision.unwrap_or_else(empty),
+        title: title.unwrap_or_else(empty).value,
         facility,
         equipment,
         related,
-        date: date?,
-        preparer: preparer.and_then(|preparer| filled(reader, preparer))?,
-        status: status?,
+        date: date.unwrap_or_default(),
+        preparer: preparer.unwrap_or_else(empty).value,
+        status: status.unwrap_or_else(preliminary),
         history: history.into_iter().flatten().collect(),
         signatures,
-    })
+    }
 }
 
 fn required_date(table: &Table<'_, '_>, key: &str) -> Option<NaiveDate> {
@@ -90,17 +97,9 @@ fn file_word(reader: &Reader<'_>, text: Located<String>) -> Option<Located<Strin
         &text.span,
         format!("\"{}\"", text.value),
         "letters, digits, points, underscores and hyphens, begun by a letter or digit, at most 64",
-        "it becomes part of a file name: write it with these characters alone",
+        "write it with these characters alone: it becomes part of a file name",
     );
     None
-}
-
-fn filled(reader: &Reader<'_>, text: Located<String>) -> Option<String> {
-    if text.value.trim().is_empty() {
-        value_fault(reader, &text.span, "an empty string", "words", "fill it in");
-        return None;
-    }
-    Some(text.value)
 }
 
 fn read_revision(table: &Table<'_, '_>) -> Option<Revision> {
@@ -127,7 +126,13 @@ fn read_signatures(table: &Table<'_, '_>) -> Vec<Role> {
         };
         if roles.contains(&role) {
             let found = format!("\"{}\" a second time", text.value);
-            value_fault(table.reader(), &text.span, found, "each role once", "remove one");
+            value_fault(
+                table.reader(),
+                &text.span,
+                found,
+                "each role once",
+                "remove one",
+            );
         }
         roles.push(role);
     }
