@@ -15,7 +15,10 @@ const GLENN: &str = "nasa-glenn-2021";
 const FILES: [(&str, &str); 4] = [
     (CONVENTIONS, include_str!("data/conventions.toml")),
     ("codata-1989", include_str!("data/codata-1989.toml")),
-    (ATOMIC_WEIGHTS, include_str!("data/atomic-weights-2021.toml")),
+    (
+        ATOMIC_WEIGHTS,
+        include_str!("data/atomic-weights-2021.toml"),
+    ),
     ("constants-2022", include_str!("data/constants-2022.toml")),
 ];
 

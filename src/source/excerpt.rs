@@ -39,7 +39,10 @@ pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
 
 /// Formation equations are written from the reference states, which therefore travel as well.
 fn reference_formulas(problem: &Problem) -> BTreeSet<String> {
-    let elements = problem.substances.iter().flat_map(|s| s.species.formula.counts().keys());
+    let elements = problem
+        .substances
+        .iter()
+        .flat_map(|s| s.species.formula.counts().keys());
     let states = elements.filter_map(|e| problem.reference_states.of_element(*e));
     let mut formulas: BTreeSet<String> = states.map(|s| s.formula.hill()).collect();
     // The electron stands in the formation equations of ions.
@@ -55,10 +58,17 @@ fn entries(
     source: &Source,
     formulas: &BTreeSet<String>,
 ) -> Vec<Entry> {
-    let mut entries: Vec<Entry> = formulas.iter().flat_map(|f| source.of_composition(f)).collect();
+    let mut entries: Vec<Entry> = formulas
+        .iter()
+        .flat_map(|f| source.of_composition(f))
+        .collect();
     let weights = problem.values.iter();
     let weights = weights.filter(|v| v.source == index && v.kind == ValueKind::AtomicWeight);
-    entries.extend(weights.filter_map(|v| source.of_symbol(&v.substance)).cloned());
+    entries.extend(
+        weights
+            .filter_map(|v| source.of_symbol(&v.substance))
+            .cloned(),
+    );
     entries
 }
 
@@ -109,7 +119,10 @@ fn head(head: &SourceHead) -> toml::Table {
         Digits::FixedDecimals => "fixed-decimals",
     };
     let states = head.reference_states.iter().map(|(element, species)| {
-        (element.symbol().to_string(), toml::Value::from(species.to_string()))
+        (
+            element.symbol().to_string(),
+            toml::Value::from(species.to_string()),
+        )
     });
     let states: toml::Table = states.collect();
     Fields::default()
@@ -122,11 +135,20 @@ fn head(head: &SourceHead) -> toml::Table {
         .put("edition", head.edition.clone())
         .put("doi", head.doi.clone())
         .put("licence", head.licence.clone())
-        .put("temperature", head.temperature.as_ref().map(Quantity::to_string))
+        .put(
+            "temperature",
+            head.temperature.as_ref().map(Quantity::to_string),
+        )
         .put("pressure", head.pressure.as_ref().map(Quantity::to_string))
-        .put("energy-unit", head.energy_unit.as_ref().map(|u| u.symbol().to_string()))
+        .put(
+            "energy-unit",
+            head.energy_unit.as_ref().map(|u| u.symbol().to_string()),
+        )
         .put("coverage", head.coverage_text.clone())
-        .put("gas-constant", head.gas_constant.as_ref().map(|r| r.printed().to_string()))
+        .put(
+            "gas-constant",
+            head.gas_constant.as_ref().map(|r| r.printed().to_string()),
+        )
         .put("digits", Some(digits))
         .put("standing", Some(head.standing.word()))
         .put("extract-of", Some(head.sha256.clone()))
@@ -151,25 +173,49 @@ fn entry(entry: &Entry) -> toml::Table {
         .put("note", entry.note.clone())
         .put("standing", Some(Standing::word(entry.standing)))
         .put("reference-for", entry.reference_for.map(|e| e.symbol()))
-        .put("formation-enthalpy", entry.formation_enthalpy.as_ref().map(number_text))
-        .put("combustion-enthalpy", entry.combustion_enthalpy.as_ref().map(number_text))
-        .put("atomic-weight", entry.atomic_weight.as_ref().map(number_text))
+        .put(
+            "formation-enthalpy",
+            entry.formation_enthalpy.as_ref().map(number_text),
+        )
+        .put(
+            "combustion-enthalpy",
+            entry.combustion_enthalpy.as_ref().map(number_text),
+        )
+        .put(
+            "atomic-weight",
+            entry.atomic_weight.as_ref().map(number_text),
+        )
         .put("value", entry.value.as_ref().map(Quantity::to_string))
-        .put("heat-capacity", (!functions.is_empty()).then_some(functions))
-        .put("transitions", (!transitions.is_empty()).then_some(transitions))
+        .put(
+            "heat-capacity",
+            (!functions.is_empty()).then_some(functions),
+        )
+        .put(
+            "transitions",
+            (!transitions.is_empty()).then_some(transitions),
+        )
         .0
 }
 
 fn heat_capacity(function: &HeatCapacity) -> toml::Table {
-    let range = function.range.as_ref().map(|range| range.each_ref().map(Quantity::to_string).to_vec());
+    let range = function
+        .range
+        .as_ref()
+        .map(|range| range.each_ref().map(Quantity::to_string).to_vec());
     let printed = |decimal: &Decimal| decimal.printed().to_string();
     let coefficients: Vec<String> = function.coefficients.iter().map(printed).collect();
-    let points = function.points.iter().map(|point| point.each_ref().map(printed).to_vec());
+    let points = function
+        .points
+        .iter()
+        .map(|point| point.each_ref().map(printed).to_vec());
     let points: Vec<Vec<String>> = points.collect();
     Fields::default()
         .put("form", Some(function.form.word()))
         .put("range", range)
-        .put("coefficients", (!coefficients.is_empty()).then_some(coefficients))
+        .put(
+            "coefficients",
+            (!coefficients.is_empty()).then_some(coefficients),
+        )
         .put("points", (!points.is_empty()).then_some(points))
         .0
 }
@@ -186,7 +232,10 @@ fn correlation(stated: &super::model::StatedCorrelation) -> toml::Table {
     let between = stated.between.each_ref().map(Species::to_string).to_vec();
     Fields::default()
         .put("between", Some(between))
-        .put("coefficient", Some(stated.coefficient.printed().to_string()))
+        .put(
+            "coefficient",
+            Some(stated.coefficient.printed().to_string()),
+        )
         .0
 }
 

@@ -41,7 +41,10 @@ pub(super) fn of_composition(hill: &str) -> Vec<Entry> {
 }
 
 pub(super) fn all() -> Vec<Entry> {
-    GlennIndex::global().all().filter_map(|r| entry(&r)).collect()
+    GlennIndex::global()
+        .all()
+        .filter_map(|r| entry(&r))
+        .collect()
 }
 
 /// None where the record's own notation cannot be read, which a test excludes.
@@ -82,7 +85,9 @@ fn enthalpy(record: &GlennRecord) -> (Option<Quantity>, Option<String>) {
             printed,
         } => (
             None,
-            Some(format!("the file gives {printed} J/mol at {temperature} K, not at 298.15 K")),
+            Some(format!(
+                "the file gives {printed} J/mol at {temperature} K, not at 298.15 K"
+            )),
         ),
         GlennEnthalpy::NotAt298 { .. } => (
             None,

@@ -13,9 +13,7 @@ use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
 use super::model::Digits;
-use super::problem::{
-    Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
-};
+use super::problem::{Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed};
 use super::reference_states::ReferenceStates;
 use super::store::Source;
 use super::unbalanced::unbalanced;
@@ -30,11 +28,17 @@ pub fn resolve(
     files: &dyn SourceFiles,
 ) -> (Option<Problem>, Faults) {
     let mut resolver = Resolver::new(case, text, consultation);
-    if case.reactions.values().any(|reaction| reaction.per.is_some()) {
+    if case
+        .reactions
+        .values()
+        .any(|reaction| reaction.per.is_some())
+    {
         resolver.add_atomic_weights(files);
     }
     let reactions = case.reactions.values();
-    let reactions: Vec<_> = reactions.map(|reaction| resolver.reaction(reaction)).collect();
+    let reactions: Vec<_> = reactions
+        .map(|reaction| resolver.reaction(reaction))
+        .collect();
     resolver.check_choices();
     let faults = std::mem::take(&mut resolver.faults);
     let problem = faults.is_empty().then(|| resolver.problem(reactions));
@@ -76,13 +80,18 @@ impl<'a> Resolver<'a> {
     }
 
     fn add_atomic_weights(&mut self, files: &dyn SourceFiles) {
-        if self.sources.iter().any(|source| source.id() == ATOMIC_WEIGHTS) {
+        if self
+            .sources
+            .iter()
+            .any(|source| source.id() == ATOMIC_WEIGHTS)
+        {
             return;
         }
         let (source, faults) = load_built_in(ATOMIC_WEIGHTS, files);
         self.faults.extend(faults);
         if let Some(source) = source {
-            self.became.push((ATOMIC_WEIGHTS.to_string(), self.sources.len()));
+            self.became
+                .push((ATOMIC_WEIGHTS.to_string(), self.sources.len()));
             self.sources.push(source);
         }
     }
@@ -109,7 +118,9 @@ impl<'a> Resolver<'a> {
         let sides = [(&equation.value.left, -1), (&equation.value.right, 1)];
         let mut terms = Vec::new();
         let mut complete = true;
-        for (term, sign) in sides.iter().flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
+        for (term, sign) in sides
+            .iter()
+            .flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
         {
             let place = self.term_span(equation, term);
             let Some(substance) = self.participant(&term.participant, &place) else {
@@ -145,7 +156,11 @@ impl<'a> Resolver<'a> {
     fn term_span(&self, equation: &Located<crate::notation::Equation>, term: &Term) -> Span {
         // The literal starts with one quote, or with three.
         let literal = self.text.slice(&equation.span);
-        let quote = if literal.starts_with("\"\"\"") || literal.starts_with("'''") { 3 } else { 1 };
+        let quote = if literal.starts_with("\"\"\"") || literal.starts_with("'''") {
+            3
+        } else {
+            1
+        };
         let start = equation.span.start + quote + term.span.start;
         let end = equation.span.start + quote + term.span.end;
         match end < equation.span.end {
@@ -159,7 +174,9 @@ impl<'a> Resolver<'a> {
         if let Some(known) = self.known.get(&label) {
             return *known;
         }
-        let found = self.wanted(participant).and_then(|wanted| self.substance(&wanted, span));
+        let found = self
+            .wanted(participant)
+            .and_then(|wanted| self.substance(&wanted, span));
         self.known.insert(label, found);
         found
     }
@@ -197,7 +214,11 @@ impl<'a> Resolver<'a> {
         let value = self.value_used(&chosen, span);
         let comparisons = compare(self, wanted, &chosen, &self.values[value].clone(), span);
         // `choose` returns entries of species alone.
-        let species = chosen.entry.species().cloned().unwrap_or(wanted.species.clone());
+        let species = chosen
+            .entry
+            .species()
+            .cloned()
+            .unwrap_or(wanted.species.clone());
         self.substances.push(Substance {
             label: wanted.label.clone(),
             species,
@@ -284,14 +305,19 @@ impl<'a> Resolver<'a> {
             standing: entry.standing,
             used_at: span.clone(),
         });
-        self.atomic_weights.insert(symbol.to_string(), self.values.len() - 1);
+        self.atomic_weights
+            .insert(symbol.to_string(), self.values.len() - 1);
         Some(self.values.len() - 1)
     }
 
     fn check_balance(&mut self, reaction: &Reaction) {
         let equation = &reaction.equation;
         let sides = [&equation.value.left, &equation.value.right];
-        let [left, right] = sides.map(|side| side.iter().filter_map(|t| self.formula_of(t)).collect::<Vec<_>>());
+        let [left, right] = sides.map(|side| {
+            side.iter()
+                .filter_map(|t| self.formula_of(t))
+                .collect::<Vec<_>>()
+        });
         if left.len() != equation.value.left.len() || right.len() != equation.value.right.len() {
             return;
         }
@@ -306,10 +332,15 @@ impl<'a> Resolver<'a> {
         if off.is_empty() {
             return;
         }
-        let formulas = |side: &'_ [(Exact, Formula)]| side.iter().map(|(_, f)| f.clone()).collect::<Vec<_>>();
+        let formulas =
+            |side: &'_ [(Exact, Formula)]| side.iter().map(|(_, f)| f.clone()).collect::<Vec<_>>();
         let (left, right) = (formulas(&left), formulas(&right));
-        let form = balanced_form(&left.iter().collect::<Vec<_>>(), &right.iter().collect::<Vec<_>>());
-        self.faults.push(unbalanced(self.text, reaction, &off, form.as_deref()));
+        let form = balanced_form(
+            &left.iter().collect::<Vec<_>>(),
+            &right.iter().collect::<Vec<_>>(),
+        );
+        self.faults
+            .push(unbalanced(self.text, reaction, &off, form.as_deref()));
     }
 
     fn formula_of(&self, term: &Term) -> Option<(Exact, Formula)> {
@@ -321,7 +352,9 @@ impl<'a> Resolver<'a> {
     fn check_choices(&mut self) {
         for choice in &self.case.choices {
             let label = Species::parse(&choice.substance.value)
-                .map_or(choice.substance.value.clone(), |species| species.to_string());
+                .map_or(choice.substance.value.clone(), |species| {
+                    species.to_string()
+                });
             if !self.known.contains_key(&label) {
                 let known: Vec<&str> = self.known.keys().map(String::as_str).collect();
                 self.faults.push(Fault::new(
@@ -343,7 +376,9 @@ impl<'a> Resolver<'a> {
             for stated in &source.correlations {
                 let of = |wanted: &Species| {
                     let name = wanted.to_string();
-                    self.values.iter().position(|v| v.source == index && v.substance == name)
+                    self.values
+                        .iter()
+                        .position(|v| v.source == index && v.substance == name)
                 };
                 if let (Some(a), Some(b)) = (of(&stated.between[0]), of(&stated.between[1])) {
                     // The reader of sources has checked that the coefficient is one.

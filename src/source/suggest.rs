@@ -1,10 +1,12 @@
 //! Faults about substances, with help towards the one that was meant.
 
+use std::collections::BTreeSet;
+
 use crate::finding::{Fault, FaultCode, Span, nearest};
 use crate::notation::Species;
 
 use super::builtin::{BUILT_IN, built_in};
-use super::matching::Wanted;
+use super::matching::{Match, Wanted, pick};
 use super::model::Entry;
 use super::resolve::Resolver;
 
@@ -41,13 +43,19 @@ fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
     }
     let elsewhere = not_consulted(resolver, wanted);
     if !elsewhere.is_empty() {
-        return format!("add to `consult` a source that lists it: {}", elsewhere.join(", "));
+        return format!(
+            "add to `consult` a source that lists it: {}",
+            elsewhere.join(", ")
+        );
     }
     let near = near_names(resolver, wanted);
     if near.is_empty() {
         return "cite a value for it in a source file of your own and consult that".to_string();
     }
-    format!("did you mean {}? Otherwise cite a value in a source file of your own", near.join(", "))
+    format!(
+        "did you mean {}? Otherwise cite a value in a source file of your own",
+        near.join(", ")
+    )
 }
 
 /// Entries of the same composition in other phases or forms, or of another identity.
@@ -72,29 +80,46 @@ fn not_consulted(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<&'static str> 
     let open = BUILT_IN.into_iter().filter(|id| !consulted.contains(id));
     open.filter(|id| {
         let entries = built_in(id).map_or_else(Vec::new, |source| source.of_composition(&hill));
-        !entries.is_empty()
+        !matches!(pick(wanted, &entries), Match::None)
     })
     .collect()
 }
 
-/// Substances whose notation or name is near to what was written.
+/// Substances of the same elements and phase, and such as have a name near to what was written.
 fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
     let entries: Vec<Entry> = resolver.sources.iter().flat_map(|s| s.all()).collect();
-    let mut candidates: Vec<String> = entries.iter().filter_map(|e| Some(e.species()?.to_string())).collect();
-    candidates.extend(entries.iter().filter_map(|e| e.name.clone()));
-    let words = std::iter::once(&wanted.label).chain(&wanted.names);
-    let species = wanted.species.to_string();
     let mut near: Vec<String> = Vec::new();
-    for word in words.chain([&species]) {
-        for candidate in nearest(word, candidates.iter().map(String::as_str), 3) {
-            let candidate = format!("`{candidate}`");
-            if !near.contains(&candidate) {
-                near.push(candidate);
-            }
+    let alike = entries
+        .iter()
+        .filter(|entry| is_alike(wanted, entry))
+        .filter_map(Entry::species);
+    near.extend(alike.map(|species| format!("`{species}`")));
+    let names: Vec<&str> = entries
+        .iter()
+        .filter_map(|entry| entry.name.as_deref())
+        .collect();
+    for word in &wanted.names {
+        for name in nearest(word, names.iter().copied(), 3) {
+            let found = entries
+                .iter()
+                .filter(|entry| entry.name.as_deref() == Some(name));
+            near.extend(found.map(label));
         }
     }
+    let mut seen = BTreeSet::new();
+    near.retain(|candidate| seen.insert(candidate.clone()));
     near.truncate(MOST);
     near
+}
+
+/// Whether an entry is of the same elements, in whatever number, and in the same kind of phase.
+fn is_alike(wanted: &Wanted, entry: &Entry) -> bool {
+    let Some(species) = entry.species() else {
+        return false;
+    };
+    let elements = |species: &Species| species.formula.counts().keys().copied().collect::<Vec<_>>();
+    let label = |species: &Species| species.phase.as_ref().map(|phase| phase.label);
+    elements(species) == elements(&wanted.species) && label(species) == label(&wanted.species)
 }
 
 /// An entry with what tells it apart.
@@ -116,7 +141,9 @@ pub(super) fn ambiguous(
     entries: &[Entry],
 ) -> Fault {
     let labels: Vec<String> = entries.iter().take(MOST).map(label).collect();
-    let same_notation = entries.windows(2).all(|pair| pair[0].species() == pair[1].species());
+    let same_notation = entries
+        .windows(2)
+        .all(|pair| pair[0].species() == pair[1].species());
     let advice = match same_notation {
         true => declare(wanted, entries),
         false => "name the form: write one of them in the equation".to_string(),
@@ -141,9 +168,19 @@ fn declare(wanted: &Wanted, entries: &[Entry]) -> String {
         return "declare it under a name in [substances], with its CAS number".to_string();
     };
     let name = example.name.clone().unwrap_or_default();
-    let id: String = name.chars().map(|c| if c.is_ascii_alphanumeric() { c } else { '-' }).collect();
-    let phase = wanted.species.phase.as_ref().map_or_else(String::new, |p| p.label.symbol().to_string());
-    let cas = example.cas.as_ref().map_or_else(String::new, |cas| format!(", cas = \"{cas}\""));
+    let id: String = name
+        .chars()
+        .map(|c| if c.is_ascii_alphanumeric() { c } else { '-' })
+        .collect();
+    let phase = wanted
+        .species
+        .phase
+        .as_ref()
+        .map_or_else(String::new, |p| p.label.symbol().to_string());
+    let cas = example
+        .cas
+        .as_ref()
+        .map_or_else(String::new, |cas| format!(", cas = \"{cas}\""));
     format!(
         "declare the one that you mean and use its id, for example {} = {{ formula = \"{}\", \
          phase = \"{phase}\", name = \"{name}\"{cas} }}",
@@ -160,7 +197,10 @@ pub(super) fn no_enthalpy(
     source: usize,
     entry: &Entry,
 ) -> Fault {
-    let why = entry.note.as_ref().map_or_else(String::new, |note| format!(" ({note})"));
+    let why = entry
+        .note
+        .as_ref()
+        .map_or_else(String::new, |note| format!(" ({note})"));
     Fault::new(
         FaultCode::Source,
         resolver.text,
@@ -171,6 +211,9 @@ pub(super) fn no_enthalpy(
             resolver.sources[source].id()
         ),
         "an entry with `formation-enthalpy`",
-        format!("consult another source for `{}`, or cite a value of your own", wanted.label),
+        format!(
+            "consult another source for `{}`, or cite a value of your own",
+            wanted.label
+        ),
     )
 }
