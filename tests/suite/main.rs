@@ -1,2 +1,5 @@
 //! Whole-program tests, in one binary because each links the typesetter.
 
+mod commands;
+mod faults;
+mod program;
