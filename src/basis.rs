@@ -22,11 +22,13 @@ struct Unconfirmed<'a> {
 
 fn unconfirmed(case: &Case) -> Vec<Unconfirmed<'_>> {
     let assumptions = case.assumptions.iter().enumerate();
-    let assumptions = assumptions.filter(|(_, a)| !a.confirmed).map(|(i, a)| Unconfirmed {
-        what: format!("assumption {}", i + 1),
-        hold: a.hold.as_ref(),
-        span: a.text.span.clone(),
-    });
+    let assumptions = assumptions
+        .filter(|(_, a)| !a.confirmed)
+        .map(|(i, a)| Unconfirmed {
+            what: format!("assumption {}", i + 1),
+            hold: a.hold.as_ref(),
+            span: a.text.span.clone(),
+        });
     let inputs = case.inputs.values().filter(|input| !input.confirmed);
     let inputs = inputs.map(|input| Unconfirmed {
         what: format!("input `{}`", input.id.value),

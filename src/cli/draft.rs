@@ -57,5 +57,7 @@ fn today() -> chrono::NaiveDate {
     let since = std::time::SystemTime::now().duration_since(std::time::UNIX_EPOCH);
     let days = since.map_or(0, |since| since.as_secs() / 86_400);
     let epoch = chrono::NaiveDate::from_ymd_opt(1970, 1, 1).unwrap_or_default();
-    epoch.checked_add_days(chrono::Days::new(days)).unwrap_or(epoch)
+    epoch
+        .checked_add_days(chrono::Days::new(days))
+        .unwrap_or(epoch)
 }

@@ -17,7 +17,10 @@ pub struct FormationEquation {
 /// The formation equation of one mole of a species; none where an element has no reference state
 /// among the conventions. Ions are formed with electrons, which the convention for H+(aq) makes
 /// count nothing (IUPAC Green Book, 3rd ed. 2007, section 2.11; from memory).
-pub fn formation_equation(species: &Species, states: &ReferenceStates) -> Option<FormationEquation> {
+pub fn formation_equation(
+    species: &Species,
+    states: &ReferenceStates,
+) -> Option<FormationEquation> {
     let mut left = Vec::new();
     for (element, count) in species.formula.counts() {
         let state = states.of_element(*element)?;

@@ -3,8 +3,8 @@
 use num_traits::Signed;
 
 use crate::quantity::{
-    Combined, Dimension, Exact, LinearForm, Real, Significance, Stated, Unit, combine,
-    exact_text, order_of_magnitude, power_of_ten,
+    Combined, Dimension, Exact, LinearForm, Real, Significance, Stated, Unit, combine, exact_text,
+    order_of_magnitude, power_of_ten,
 };
 use crate::source::Problem;
 
@@ -128,10 +128,16 @@ impl Rules<'_> {
     fn decide(&self, place: Option<i64>) -> (Stated, StatedBy, Option<Stated>) {
         let by_digits = Stated::by_significance(self.value, self.significance);
         let by_digits = by_digits.unwrap_or_else(|| unrounded(self.value));
-        let by_uncertainty = self.expanded.and_then(|u| Stated::by_uncertainty(self.value, u));
+        let by_uncertainty = self
+            .expanded
+            .and_then(|u| Stated::by_uncertainty(self.value, u));
         let at_place = |place| Stated::at_place(self.value, place, self.expanded);
         if let Some(stated) = place.and_then(at_place) {
-            return (stated, StatedBy::Rounding, by_uncertainty.or(Some(by_digits)));
+            return (
+                stated,
+                StatedBy::Rounding,
+                by_uncertainty.or(Some(by_digits)),
+            );
         }
         match by_uncertainty {
             Some(stated) if self.complete => (stated, StatedBy::Uncertainty, Some(by_digits)),
@@ -143,7 +149,9 @@ impl Rules<'_> {
 
 /// A value that no rule limits, in full.
 fn unrounded(value: &Real) -> Stated {
-    let text = value.to_exact().map_or_else(|| value.to_f64().to_string(), |v| exact_text(&v));
+    let text = value
+        .to_exact()
+        .map_or_else(|| value.to_f64().to_string(), |v| exact_text(&v));
     Stated {
         value_text: text,
         uncertainty_text: None,
@@ -152,7 +160,8 @@ fn unrounded(value: &Real) -> Stated {
 }
 
 fn rests_on_fixed_decimals(form: &LinearForm, problem: &Problem) -> bool {
-    form.iter().any(|(index, _)| problem.values[index].significance == Significance::Unlimited)
+    form.iter()
+        .any(|(index, _)| problem.values[index].significance == Significance::Unlimited)
 }
 
 /// Where a table with a fixed number of decimals is among the values, its printed zeros claim

@@ -40,7 +40,10 @@ type Said = (Severity, FindingCode, String);
 /// Enthalpies of ideal gases do not depend on pressure; those of condensed substances by about
 /// V·Δp (from (∂H/∂p)_T = V − T(∂V/∂T)_p). 100 cm³/mol stands for a large molar volume.
 fn pressure(problem: &Problem, text: &Text) -> Vec<Finding> {
-    let enthalpies = problem.values.iter().filter(|v| v.kind == ValueKind::FormationEnthalpy);
+    let enthalpies = problem
+        .values
+        .iter()
+        .filter(|v| v.kind == ValueKind::FormationEnthalpy);
     let mut pressures: Vec<(Exact, &str, usize)> = Vec::new();
     for value in enthalpies.filter(|v| !v.printed.exact) {
         let head = &problem.sources[value.source].head;
@@ -80,7 +83,9 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
     for term in &reaction.terms {
         let value = &problem.values[problem.substances[term.substance].value];
         let head = &problem.sources[value.source].head;
-        let Some(reference) = head.temperature.as_ref() else { continue };
+        let Some(reference) = head.temperature.as_ref() else {
+            continue;
+        };
         let kelvin = conventional_temperature() - reference.value_in_si();
         if kelvin.is_zero() || value.printed.exact {
             continue;
@@ -98,7 +103,10 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
         return None;
     }
     let size = match unknown.is_empty() {
-        true => format!("moves the heat by about {} kJ/mol", two_digits(cost / 1000.0)),
+        true => format!(
+            "moves the heat by about {} kJ/mol",
+            two_digits(cost / 1000.0)
+        ),
         false => format!(
             "moves the heat by an amount not known here, because no consulted source gives the \
              heat capacities that the formation of {} needs (100 J/(mol K) would make {} kJ/mol \
@@ -157,7 +165,9 @@ fn states(problem: &Problem, reaction: &ProblemReaction) -> Vec<Said> {
             };
             let atoms = net_atoms(problem, reaction, index, *element);
             if usual != state && !atoms.is_zero() {
-                said.push(mixed_state(problem, reaction, index, *element, state, &atoms));
+                said.push(mixed_state(
+                    problem, reaction, index, *element, state, &atoms,
+                ));
             }
         }
     }
@@ -165,7 +175,12 @@ fn states(problem: &Problem, reaction: &ProblemReaction) -> Vec<Said> {
 }
 
 /// Σ ν·n of an element over the terms whose value comes from one source.
-fn net_atoms(problem: &Problem, reaction: &ProblemReaction, source: usize, element: Element) -> Exact {
+fn net_atoms(
+    problem: &Problem,
+    reaction: &ProblemReaction,
+    source: usize,
+    element: Element,
+) -> Exact {
     let atoms = reaction.terms.iter().map(|term| {
         let substance = &problem.substances[term.substance];
         let count = substance.species.formula.counts().get(&element);
@@ -190,11 +205,15 @@ fn mixed_state(
     let cost = match state_enthalpy(problem, state) {
         Some(kilojoule) => {
             let per_atom = state.formula.counts().get(&element).cloned();
-            let total = kilojoule * atoms / per_atom.unwrap_or_else(|| Exact::from_integer(1.into()));
+            let total =
+                kilojoule * atoms / per_atom.unwrap_or_else(|| Exact::from_integer(1.into()));
             format!("moves the heat by {} kJ/mol", two_digits(to_f64(&total)))
         }
-        None => format!("moves the heat by {} times the enthalpy of {state}, which no consulted \
-                         source gives", exact_text(atoms)),
+        None => format!(
+            "moves the heat by {} times the enthalpy of {state}, which no consulted \
+                         source gives",
+            exact_text(atoms)
+        ),
     };
     (
         Severity::Stop,
@@ -212,11 +231,13 @@ fn mixed_state(
 /// The formation enthalpy of an unusual reference state on the conventional scale, kJ/mol.
 fn state_enthalpy(problem: &Problem, state: &Species) -> Option<Exact> {
     let kilo = Exact::from_integer(1000.into());
-    problem.sources[..problem.consulted].iter().find_map(|source| {
-        let counted_from_it = source.head.reference_states.iter().any(|(_, s)| s == state);
-        let entries = source.of_composition(&state.formula.hill());
-        let entry = entries.iter().find(|e| e.notations().any(|s| s == state))?;
-        let value = entry.formation_enthalpy.as_ref()?;
-        (!counted_from_it).then(|| value.value_in_si() / &kilo)
-    })
+    problem.sources[..problem.consulted]
+        .iter()
+        .find_map(|source| {
+            let counted_from_it = source.head.reference_states.iter().any(|(_, s)| s == state);
+            let entries = source.of_composition(&state.formula.hill());
+            let entry = entries.iter().find(|e| e.notations().any(|s| s == state))?;
+            let value = entry.formation_enthalpy.as_ref()?;
+            (!counted_from_it).then(|| value.value_in_si() / &kilo)
+        })
 }

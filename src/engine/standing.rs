@@ -15,7 +15,10 @@ const MOST: usize = 8;
 pub(super) fn not_compared(problem: &Problem, text: &Text) -> Vec<Finding> {
     let mut groups: BTreeMap<(usize, Standing), Vec<&ValueUsed>> = BTreeMap::new();
     for value in problem.values.iter().filter(|v| !v.standing.is_compared()) {
-        groups.entry((value.source, value.standing)).or_default().push(value);
+        groups
+            .entry((value.source, value.standing))
+            .or_default()
+            .push(value);
     }
     let finding = |((source, standing), values): (&(usize, Standing), &Vec<&ValueUsed>)| Finding {
         severity: Severity::Caution,
@@ -37,7 +40,10 @@ pub(super) fn fixed_decimals(problem: &Problem, outcomes: &[Outcome], text: &Tex
         .iter()
         .filter(|outcome| outcome.stated_by == StatedBy::FixedDecimals)
         .collect();
-    let first = problem.values.iter().find(|v| v.significance == Significance::Unlimited);
+    let first = problem
+        .values
+        .iter()
+        .find(|v| v.significance == Significance::Unlimited);
     let (Some(first), false) = (first, decided.is_empty()) else {
         return Vec::new();
     };
@@ -70,7 +76,9 @@ pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -
             }
         }
     }
-    let at = silent.first().map_or(0, |index| problem.values[*index].used_at.start);
+    let at = silent
+        .first()
+        .map_or(0, |index| problem.values[*index].used_at.start);
     vec![Finding {
         severity: Severity::Caution,
         code: FindingCode::UncertaintyIncomplete,
@@ -81,7 +89,11 @@ pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -
             first.combined.of,
             list(silent.iter().map(|index| {
                 let value = &problem.values[*index];
-                format!("{} ({})", value.substance, problem.sources[value.source].id())
+                format!(
+                    "{} ({})",
+                    value.substance,
+                    problem.sources[value.source].id()
+                )
             })),
         ),
         at: text.place(at),
@@ -89,10 +101,16 @@ pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -
 }
 
 /// A note where the case asks for a finer place than the values carry.
-pub(super) fn rounding_finer(outcomes: &[Outcome], at: impl Fn(&str) -> crate::finding::Place) -> Vec<Finding> {
+pub(super) fn rounding_finer(
+    outcomes: &[Outcome],
+    at: impl Fn(&str) -> crate::finding::Place,
+) -> Vec<Finding> {
     let finer = |outcome: &&Outcome| {
         outcome.stated_by == StatedBy::Rounding
-            && outcome.remark.as_ref().is_some_and(|remark| outcome.stated.place < remark.place)
+            && outcome
+                .remark
+                .as_ref()
+                .is_some_and(|remark| outcome.stated.place < remark.place)
     };
     let finding = |outcome: &Outcome| Finding {
         severity: Severity::Caution,
@@ -102,7 +120,10 @@ pub(super) fn rounding_finer(outcomes: &[Outcome], at: impl Fn(&str) -> crate::f
             outcome.id,
             outcome.stated.value_text,
             outcome.unit.symbol(),
-            outcome.remark.as_ref().map_or("less", |r| r.value_text.as_str()),
+            outcome
+                .remark
+                .as_ref()
+                .map_or("less", |r| r.value_text.as_str()),
         ),
         at: at(&outcome.id),
     };
@@ -116,7 +137,12 @@ fn named(outcomes: &[&Outcome]) -> String {
 /// The first few items of a list, with the number of those left out.
 pub(super) fn list(items: impl Iterator<Item = String>) -> String {
     let items: Vec<String> = items.collect();
-    let shown = items.iter().take(MOST).cloned().collect::<Vec<_>>().join(", ");
+    let shown = items
+        .iter()
+        .take(MOST)
+        .cloned()
+        .collect::<Vec<_>>()
+        .join(", ");
     match items.len().saturating_sub(MOST) {
         0 => shown,
         more => format!("{shown} and {more} more"),

@@ -10,9 +10,11 @@ use crate::case::Status;
 use crate::finding::Fault;
 use crate::record::{AttachedFile, Record, Typesetting, assemble};
 use crate::source::SourceFiles;
-use crate::typeset::{Attachment, Relationship, TYPESETTER, TypesetError, fonts, template_sha256, typeset};
+use crate::typeset::{
+    Attachment, Relationship, TYPESETTER, TypesetError, fonts, template_sha256, typeset,
+};
 
-pub use place::{Placed, PlaceError, place};
+pub use place::{PlaceError, Placed, place};
 
 /// A record that is typeset and not yet written.
 #[derive(Debug)]
@@ -55,7 +57,9 @@ pub fn issue(calculation: &Calculation, files: &dyn SourceFiles) -> Result<Issue
 }
 
 fn typesetting() -> Typesetting {
-    let fonts = fonts().into_iter().map(|font| (font.name.to_string(), font.sha256.to_string()));
+    let fonts = fonts()
+        .into_iter()
+        .map(|font| (font.name.to_string(), font.sha256.to_string()));
     Typesetting {
         version: TYPESETTER.to_string(),
         template_sha256: template_sha256(),

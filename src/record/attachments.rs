@@ -56,7 +56,10 @@ fn source_files(calculation: &Calculation) -> Vec<AttachedFile> {
         media_type: "application/toml",
         description: "Entries of a source that decided something".to_string(),
     };
-    excerpts(&calculation.problem).into_iter().map(named).collect()
+    excerpts(&calculation.problem)
+        .into_iter()
+        .map(named)
+        .collect()
 }
 
 fn data_file(name: &str, text: String, description: &str) -> AttachedFile {
@@ -76,9 +79,10 @@ fn manifest(
 ) -> Manifest {
     let head = &calculation.case.record;
     let problem = &calculation.problem;
-    let became = problem.became.iter().map(|(name, index)| {
-        (name.clone(), attachment_name(problem.sources[*index].id()))
-    });
+    let became = problem
+        .became
+        .iter()
+        .map(|(name, index)| (name.clone(), attachment_name(problem.sources[*index].id())));
     Manifest::of(&ManifestInput {
         identity: Identity {
             number: head.number.value.clone(),
@@ -87,6 +91,9 @@ fn manifest(
         engine: format!("{} {}", env!("CARGO_PKG_NAME"), env!("CARGO_PKG_VERSION")),
         typesetting,
         consult: became.collect(),
-        attachments: files.iter().map(|f| (f.name.as_str(), f.bytes.as_slice())).collect(),
+        attachments: files
+            .iter()
+            .map(|f| (f.name.as_str(), f.bytes.as_slice()))
+            .collect(),
     })
 }

@@ -14,18 +14,21 @@ use super::value_rows::substance;
 pub(super) fn budgets(calculation: &Calculation) -> Vec<Budget> {
     let outcomes = calculation.working.outcomes.iter();
     let outcomes = outcomes.filter(|outcome| !outcome.form.is_empty());
-    outcomes.map(|outcome| budget(&calculation.problem, outcome)).collect()
+    outcomes
+        .map(|outcome| budget(&calculation.problem, outcome))
+        .collect()
 }
 
 fn budget(problem: &Problem, outcome: &Outcome) -> Budget {
-    let counted = |(index, _): &(usize, &Real)| {
-        problem.values[*index].uncertainty != InputUncertainty::Exact
-    };
+    let counted =
+        |(index, _): &(usize, &Real)| problem.values[*index].uncertainty != InputUncertainty::Exact;
     let rows = outcome.form.iter().filter(counted);
     Budget {
         result: outcome.id.clone(),
         unit: unit(&outcome.unit),
-        rows: rows.map(|(index, s)| budget_row(problem, outcome, index, s)).collect(),
+        rows: rows
+            .map(|(index, s)| budget_row(problem, outcome, index, s))
+            .collect(),
         standard: outcome.combined.standard.map(two_digits),
         expanded: outcome.expanded.map(two_digits),
         coverage: coverage(outcome),
@@ -57,7 +60,9 @@ fn budget_row(problem: &Problem, outcome: &Outcome, index: usize, sensitivity: &
 
 /// An exact sensitivity as it is, another to three digits.
 fn short(sensitivity: &Real) -> String {
-    let exact = sensitivity.exact().and_then(crate::quantity::terminating_decimal);
+    let exact = sensitivity
+        .exact()
+        .and_then(crate::quantity::terminating_decimal);
     match exact {
         Some(text) if text.len() <= 7 => text,
         _ => {
@@ -71,13 +76,16 @@ fn short(sensitivity: &Real) -> String {
 /// A share as thousandths for a bar; correlated values can have a negative one, without a bar.
 fn permille(share: f64) -> Option<u32> {
     let permille = libm::round(share * 1000.0);
-    (0.0..=1000.0).contains(&permille).then_some(permille as u32)
+    (0.0..=1000.0)
+        .contains(&permille)
+        .then_some(permille as u32)
 }
 
 fn remark(problem: &Problem, outcome: &Outcome) -> Option<String> {
-    let correlated = problem.correlations.pairs().any(|(a, b)| {
-        outcome.form.get(a).is_some() && outcome.form.get(b).is_some()
-    });
+    let correlated = problem
+        .correlations
+        .pairs()
+        .any(|(a, b)| outcome.form.get(a).is_some() && outcome.form.get(b).is_some());
     let mut remarks = Vec::new();
     if !outcome.is_complete() {
         remarks.push(format!(

@@ -12,7 +12,10 @@ pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
     let numbers = numbers(problem);
     let row = |(index, value): (usize, &ValueUsed)| {
         let head = &problem.sources[value.source].head;
-        let note = value.note.as_ref().map_or(String::new(), |note| format!(". {note}"));
+        let note = value
+            .note
+            .as_ref()
+            .map_or(String::new(), |note| format!(". {note}"));
         ValueRow {
             number: index + 1,
             substance: substance(value),
@@ -77,7 +80,10 @@ fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) ->
             unit(&comparison.printed.unit)
         ),
         unit: unit(&value.printed.unit),
-        reference: numbers(problem).get(&comparison.source).copied().unwrap_or(0),
+        reference: numbers(problem)
+            .get(&comparison.source)
+            .copied()
+            .unwrap_or(0),
         locator: comparison.locator.clone(),
         difference: minus(&text),
         judgement: judgement(comparison.judgement),
@@ -91,7 +97,10 @@ fn judgement(judgement: Judgement) -> String {
         }
         Judgement::Beyond { combined, complete } => {
             let stated = if complete { "combined" } else { "one stated" };
-            format!("beyond the {stated} expanded uncertainty, {}", two_digits(combined))
+            format!(
+                "beyond the {stated} expanded uncertainty, {}",
+                two_digits(combined)
+            )
         }
         Judgement::NotJudged { equal: true } => "equal as printed".to_string(),
         Judgement::NotJudged { equal: false } => "not judged: none states one".to_string(),
