@@ -37,7 +37,7 @@ fn read_unit(table: Option<&Table<'_, '_>>, key: &str, default: &str) -> Unit {
         return default;
     };
     if given.dimension() == default.dimension() {
-        return given;
+        return simple(table.reader(), &text, given).unwrap_or(default);
     }
     table.reader().fault(
         FaultCode::Quantity,
@@ -47,6 +47,22 @@ fn read_unit(table: Option<&Table<'_, '_>>, key: &str, default: &str) -> Unit {
         format!("write it as \"{}\"", default.symbol()),
     );
     default
+}
+
+/// Results are given in quotients of these units, so each has to be one symbol.
+fn simple(reader: &Reader<'_>, text: &Located<String>, given: Unit) -> Option<Unit> {
+    let compound = |c: char| matches!(c, '/' | ' ' | '(' | '·' | '^') || c.is_ascii_digit();
+    if !given.symbol().contains(compound) {
+        return Some(given);
+    }
+    reader.fault(
+        FaultCode::Quantity,
+        &text.span,
+        format!("\"{}\", a unit made of several", text.value),
+        "one symbol, such as kJ, kcal_th, Btu_IT, mol, kg",
+        "results are given in quotients of it: choose a unit with a symbol of its own",
+    );
+    None
 }
 
 pub(super) fn read_rounding(

@@ -46,8 +46,8 @@ pub(super) fn read_record(table: &Table<'_, '_>) -> RecordHead {
         "status = \"preliminary\", \"for-check\" or \"issued\"",
     );
     let date = required_date(table, "date");
-    let title = title.and_then(|text| filled(reader, text));
-    let preparer = preparer.and_then(|text| filled(reader, text));
+    let title = title.and_then(|text| fitting(reader, text, LONGEST_TITLE));
+    let preparer = preparer.and_then(|text| fitting(reader, text, LONGEST_NAME));
     let number = number.and_then(|text| file_word(reader, text));
     let revision = revision.and_then(|text| file_word(reader, text));
     let status =
@@ -100,6 +100,26 @@ fn file_word(reader: &Reader<'_>, text: Located<String>) -> Option<Located<Strin
         "write it with these characters alone: it becomes part of a file name",
     );
     None
+}
+
+/// The front sheet has places of fixed size for a title and a name.
+const LONGEST_TITLE: usize = 200;
+const LONGEST_NAME: usize = 80;
+
+fn fitting(reader: &Reader<'_>, text: Located<String>, longest: usize) -> Option<Located<String>> {
+    let text = filled(reader, text)?;
+    let count = text.value.chars().count();
+    if count > longest {
+        value_fault(
+            reader,
+            &text.span,
+            format!("{count} characters"),
+            format!("at most {longest} characters"),
+            "shorten it; what is longer belongs into the prose",
+        );
+        return None;
+    }
+    Some(text)
 }
 
 fn read_revision(table: &Table<'_, '_>) -> Option<Revision> {

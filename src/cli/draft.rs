@@ -31,7 +31,11 @@ impl Draft {
         let path = self.output.out.join(format!("{}.toml", self.number));
         let text = draft_text(&self.number, today());
         if let Err(error) = write_new(&path, text.as_bytes()) {
-            return self.refused(format!("{}: not written: {error}", path.display()));
+            let why = match error.kind() {
+                std::io::ErrorKind::AlreadyExists => "it is there already".to_string(),
+                _ => error.to_string(),
+            };
+            return self.refused(format!("{}: not written: {why}", path.display()));
         }
         let shown = path.display();
         tell(&format!(

@@ -6,7 +6,7 @@ use super::findings;
 use super::terminal::{Style, Tone, plain, wrap};
 use crate::calculation::Calculation;
 use crate::engine::{Outcome, ReactionWorking};
-use crate::quantity::{exact_text, two_digits};
+use crate::quantity::{exact_text, full_text, two_digits};
 use crate::source::Problem;
 
 /// The working of a case as text.
@@ -96,13 +96,20 @@ fn reaction(calculation: &Calculation, working: &ReactionWorking) -> String {
             [
                 exact_text(&term.nu),
                 problem.substances[term.substance].label.clone(),
-                format!("[{}] {}", term.value + 1, exact_text(&term.molar)),
-                exact_text(&term.contribution),
+                format!(
+                    "[{}] {}",
+                    term.value + 1,
+                    full_text(&term.molar, term.molar_significance)
+                ),
+                full_text(&term.contribution, term.contribution_significance),
             ]
         })
         .collect();
     text += &table(&rows);
-    text + &wrap("  sum ", &format!("{} {unit}", exact_text(&hess.sum)))
+    text + &wrap(
+        "  sum ",
+        &format!("{} {unit}", full_text(&hess.sum, hess.significance)),
+    )
 }
 
 /// Four columns, numbers flush right; a long cell takes its row with it.

@@ -131,8 +131,8 @@ impl Rules<'_> {
         let by_uncertainty = self
             .expanded
             .and_then(|u| Stated::by_uncertainty(self.value, u));
-        let at_place = |place| Stated::at_place(self.value, place, self.expanded);
-        if let Some(stated) = place.and_then(at_place) {
+        if let Some(stated) = place.and_then(|place| self.at_place(place, by_uncertainty.as_ref()))
+        {
             return (
                 stated,
                 StatedBy::Rounding,
@@ -144,6 +144,20 @@ impl Rules<'_> {
             _ if self.fixed => (by_digits, StatedBy::FixedDecimals, None),
             _ => (by_digits, StatedBy::Significance, by_uncertainty),
         }
+    }
+}
+
+impl Rules<'_> {
+    /// At a place that the case names; the uncertainty keeps at most two digits there too
+    /// (JCGM 100:2008, 7.2.6).
+    fn at_place(&self, place: i64, by_uncertainty: Option<&Stated>) -> Option<Stated> {
+        let mut stated = Stated::at_place(self.value, place, self.expanded)?;
+        if let Some(other) = by_uncertainty
+            && other.place > Some(place)
+        {
+            stated.uncertainty_text = other.uncertainty_text.clone();
+        }
+        Some(stated)
     }
 }
 
@@ -183,11 +197,20 @@ fn limited(
 fn house_place(unit: &Unit) -> i64 {
     let per_mole = Dimension::ENERGY.over(Dimension::AMOUNT) == unit.dimension();
     let coherent = Exact::from_integer(if per_mole { 100 } else { 1000 }.into());
-    order_of_magnitude(&(coherent / unit.factor())).unwrap_or(0)
+    place_of(&(coherent / unit.factor())).unwrap_or(0)
 }
 
-/// A place in the unit of a result, given in another unit of the same kind.
+/// A place in the unit of a result, given in another unit of the same kind; never a finer one.
 pub fn place_in(place: i64, from: &Unit, to: &Unit) -> Option<i64> {
-    let size = power_of_ten(place) * from.factor() / to.factor();
-    order_of_magnitude(&size)
+    place_of(&(power_of_ten(place) * from.factor() / to.factor()))
+}
+
+/// The finest place that is not finer than a size.
+fn place_of(size: &Exact) -> Option<i64> {
+    let order = order_of_magnitude(size)?;
+    Some(if *size > power_of_ten(order) {
+        order + 1
+    } else {
+        order
+    })
 }

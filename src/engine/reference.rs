@@ -1,11 +1,13 @@
 //! What it costs to mix sources of different reference temperature, pressure or reference state.
 
-use num_traits::{Signed, Zero};
+use std::collections::BTreeSet;
+
+use num_traits::Zero;
 
 use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::notation::{Element, Species};
-use crate::quantity::{Exact, Quantity, exact_text, to_f64, two_digits};
-use crate::source::{Problem, ProblemReaction, ValueKind};
+use crate::quantity::{Exact, exact_text, to_f64, two_digits};
+use crate::source::{Problem, ProblemReaction, ValueKind, ValueUsed};
 
 use super::work::Working;
 
@@ -40,24 +42,21 @@ type Said = (Severity, FindingCode, String);
 /// Enthalpies of ideal gases do not depend on pressure; those of condensed substances by about
 /// V·Δp (from (∂H/∂p)_T = V − T(∂V/∂T)_p). 100 cm³/mol stands for a large molar volume.
 fn pressure(problem: &Problem, text: &Text) -> Vec<Finding> {
-    let enthalpies = problem
-        .values
-        .iter()
-        .filter(|v| v.kind == ValueKind::FormationEnthalpy);
-    let mut pressures: Vec<(Exact, &str, usize)> = Vec::new();
-    for value in enthalpies.filter(|v| !v.printed.exact) {
-        let head = &problem.sources[value.source].head;
-        let Some(pressure) = head.pressure.as_ref().map(Quantity::value_in_si) else {
-            continue;
-        };
-        if !pressures.iter().any(|(p, _, _)| *p == pressure) {
-            pressures.push((pressure, &head.id, value.used_at.start));
-        }
-    }
-    let [first, .., last] = &pressures[..] else {
+    let pressures = standard_pressures(problem);
+    let by_pressure = |a: &&Standard<'_>, b: &&Standard<'_>| a.pressure.cmp(&b.pressure);
+    let lowest = pressures.iter().min_by(by_pressure);
+    let highest = pressures.iter().max_by(by_pressure);
+    let (Some(lowest), Some(highest)) = (lowest, highest) else {
         return Vec::new();
     };
-    let pascal = (&last.0 - &first.0).abs();
+    let pascal = &highest.pressure - &lowest.pressure;
+    if pascal.is_zero() {
+        return Vec::new();
+    }
+    let (first, second) = match lowest.used_at <= highest.used_at {
+        true => (lowest, highest),
+        false => (highest, lowest),
+    };
     let cost = to_f64(&pascal) * 1e-4 / 1000.0;
     vec![Finding {
         severity: Severity::Note,
@@ -65,13 +64,41 @@ fn pressure(problem: &Problem, text: &Text) -> Vec<Finding> {
         message: format!(
             "{} and {} have standard pressures {} Pa apart. That moves no enthalpy of an ideal \
              gas, and one of a condensed substance of 100 cm³/mol by about {} kJ/mol.",
-            first.1,
-            last.1,
+            first.source,
+            second.source,
             exact_text(&pascal),
             two_digits(cost),
         ),
-        at: text.place(last.2),
+        at: text.place(second.used_at),
     }]
+}
+
+/// A standard pressure in Pa, with the source that states it and the first use of a value of it.
+struct Standard<'a> {
+    pressure: Exact,
+    source: &'a str,
+    used_at: usize,
+}
+
+fn standard_pressures(problem: &Problem) -> Vec<Standard<'_>> {
+    let enthalpies = problem
+        .values
+        .iter()
+        .filter(|v| v.kind == ValueKind::FormationEnthalpy);
+    let mut seen = BTreeSet::new();
+    let of_source = |value: &ValueUsed| {
+        let head = &problem.sources[value.source].head;
+        let pressure = head.pressure.as_ref()?.value_in_si();
+        seen.insert(value.source).then(|| Standard {
+            pressure,
+            source: problem.sources[value.source].id(),
+            used_at: value.used_at.start,
+        })
+    };
+    enthalpies
+        .filter(|v| !v.printed.exact)
+        .filter_map(of_source)
+        .collect()
 }
 
 /// A formation enthalpy at another temperature is off by ΔCp of the formation reaction times the
@@ -115,8 +142,13 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
             two_digits(0.1)
         ),
     };
+    // A heat that is off by an unknown amount does not hold.
+    let severity = match unknown.is_empty() {
+        true => Severity::Caution,
+        false => Severity::Stop,
+    };
     Some((
-        Severity::Caution,
+        severity,
         FindingCode::ReferenceTemperature,
         format!(
             "{}: {} gives values for another reference temperature than 298.15 K. They are used \
@@ -220,7 +252,7 @@ fn mixed_state(
         FindingCode::ReferenceState,
         format!(
             "{}: {id} counts {symbol} from {state}, the others from its usual reference state. \
-             {} atoms of {symbol} do not cancel within {id}: that {cost}. Take all substances with \
+             {} mol of {symbol} does not cancel within {id}: that {cost}. Take all substances with \
              {symbol} from one source.",
             reaction.id,
             exact_text(atoms)

@@ -22,10 +22,7 @@ impl WorkOptions<'_> {
     /// The place that the case states a result to, in the result's own unit.
     pub(super) fn place_for(&self, id: &str, unit: &Unit) -> Option<i64> {
         let rule = self.rounding.iter().find(|rule| rule.result.value == id)?;
-        match rule.unit.dimension() == unit.dimension() {
-            true => place_in(rule.place, &rule.unit, unit),
-            false => None,
-        }
+        place_in(rule.place, &rule.unit, unit)
     }
 
     fn unit(&self, over: &Unit) -> Unit {
@@ -84,6 +81,12 @@ pub fn work(problem: &Problem, options: &WorkOptions<'_>) -> Working {
     working
         .findings
         .extend(standing::not_compared(problem, text));
+    working
+        .findings
+        .extend(standing::not_located(problem, text));
+    working
+        .findings
+        .extend(standing::uncounted_zeros(problem, text));
     working
         .findings
         .extend(standing::fixed_decimals(problem, &working.outcomes, text));

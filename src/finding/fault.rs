@@ -165,6 +165,10 @@ impl Faults {
         self.list.is_empty()
     }
 
+    pub fn len(&self) -> usize {
+        self.list.len()
+    }
+
     pub fn extend(&mut self, other: Faults) {
         self.list.extend(other.list);
     }

@@ -29,8 +29,8 @@ fn budget(problem: &Problem, outcome: &Outcome) -> Budget {
         rows: rows
             .map(|(index, s)| budget_row(problem, outcome, index, s))
             .collect(),
-        standard: outcome.combined.standard.map(two_digits),
-        expanded: outcome.expanded.map(two_digits),
+        standard: outcome.combined.standard.map(|u| minus(&two_digits(u))),
+        expanded: outcome.expanded.map(|u| minus(&two_digits(u))),
         coverage: coverage(outcome),
         remark: remark(problem, outcome),
     }
@@ -49,11 +49,18 @@ fn budget_row(problem: &Problem, outcome: &Outcome, index: usize, sensitivity: &
         value_used: index + 1,
         substance: substance(value),
         standard: standard.map_or("not stated".into(), |u| {
-            format!("{} {}", two_digits(u), unit(&value.printed.unit))
+            let text = format!(
+                "{}\u{a0}{}",
+                minus(&two_digits(u)),
+                unit(&value.printed.unit)
+            );
+            text.trim_end().to_string()
         }),
         sensitivity: minus(&short(sensitivity)),
-        contribution: standard.map_or("–".into(), |u| two_digits(f64::abs(size) * u)),
-        share: share.map_or("–".into(), |share| format!("{:.1} %", share * 100.0)),
+        contribution: standard.map_or("–".into(), |u| minus(&two_digits(f64::abs(size) * u))),
+        share: share.map_or("–".into(), |share| {
+            minus(&format!("{:.1} %", share * 100.0))
+        }),
         share_permille: share.and_then(permille),
     }
 }

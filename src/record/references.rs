@@ -34,7 +34,10 @@ fn reference(head: &SourceHead, number: usize) -> Reference {
     Reference {
         number,
         id: head.id.clone(),
-        text: head.citation(),
+        text: match &head.note {
+            Some(note) => format!("{} {note}", head.citation()),
+            None => head.citation(),
+        },
         temperature: stated(&head.temperature),
         pressure: stated(&head.pressure),
         licence: head.licence.clone(),

@@ -91,18 +91,21 @@ fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) ->
 }
 
 fn judgement(judgement: Judgement) -> String {
+    let size = |combined: f64| minus(&two_digits(combined));
+    let stated = |complete: bool| match complete {
+        true => "the combined expanded uncertainty",
+        false => "the one expanded uncertainty that is stated",
+    };
     match judgement {
-        Judgement::Within { combined } => {
-            format!("within the expanded uncertainty, {}", two_digits(combined))
+        Judgement::Within { combined, complete } => {
+            format!("within {}, {}", stated(complete), size(combined))
         }
         Judgement::Beyond { combined, complete } => {
-            let stated = if complete { "combined" } else { "one stated" };
-            format!(
-                "beyond the {stated} expanded uncertainty, {}",
-                two_digits(combined)
-            )
+            format!("beyond {}, {}", stated(complete), size(combined))
         }
         Judgement::NotJudged { equal: true } => "equal as printed".to_string(),
-        Judgement::NotJudged { equal: false } => "not judged: none states one".to_string(),
+        Judgement::NotJudged { equal: false } => {
+            "not judged: neither states an uncertainty".to_string()
+        }
     }
 }

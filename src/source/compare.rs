@@ -75,12 +75,10 @@ fn judgement(
         .sum::<f64>();
     let combined = COVERAGE * libm::sqrt(squares);
     let apart = to_f64(&difference.abs());
+    let complete = ours.is_some() && theirs.is_some();
     match (ours.is_some() || theirs.is_some(), apart > combined) {
-        (true, true) => Judgement::Beyond {
-            combined,
-            complete: ours.is_some() && theirs.is_some(),
-        },
-        (true, false) => Judgement::Within { combined },
+        (true, true) => Judgement::Beyond { combined, complete },
+        (true, false) => Judgement::Within { combined, complete },
         (false, _) => Judgement::NotJudged {
             equal: difference.abs() <= half_places(used, other),
         },

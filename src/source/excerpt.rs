@@ -5,7 +5,7 @@ use std::collections::BTreeSet;
 use serde::Serialize;
 
 use crate::notation::Species;
-use crate::quantity::{Decimal, Quantity};
+use crate::quantity::{Decimal, Exact, Quantity};
 
 use super::heat_capacity::HeatCapacity;
 use super::model::{Digits, Entry, SourceHead, Subject};
@@ -19,22 +19,43 @@ pub fn attachment_name(id: &str) -> String {
 }
 
 /// For each source of a problem, its excerpt as TOML: all forms of the formulas that the case
-/// names, and the atomic weights used. The head names the SHA-256 of the whole file.
+/// names, what the checks of mixed references look up, and the atomic weights used. The head
+/// names the SHA-256 of the whole file.
 pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
-    let mut formulas: BTreeSet<String> = BTreeSet::new();
-    for substance in &problem.substances {
-        formulas.insert(substance.species.formula.hill());
-    }
+    let mut formulas = unusual_states(problem);
+    formulas.extend(problem.substances.iter().map(|s| s.species.formula.hill()));
     let states = reference_formulas(problem);
+    let capacities = mixes_temperatures(problem);
     let excerpt = |(index, source): (usize, &Source)| {
         let mut wanted = formulas.clone();
-        if index == 0 {
+        if index == 0 || capacities {
             wanted.extend(states.iter().cloned());
         }
         let entries = entries(problem, index, source, &wanted);
         (attachment_name(source.id()), text(source, &entries))
     };
     problem.sources.iter().enumerate().map(excerpt).collect()
+}
+
+/// What a source counts from another reference state costs the enthalpy of that state, which
+/// any source consulted may give.
+fn unusual_states(problem: &Problem) -> BTreeSet<String> {
+    let states = problem
+        .sources
+        .iter()
+        .flat_map(|source| &source.head.reference_states);
+    states.map(|(_, state)| state.formula.hill()).collect()
+}
+
+/// Where a source has another reference temperature than the conventions, the heat capacities of
+/// the elements decide what that costs.
+fn mixes_temperatures(problem: &Problem) -> bool {
+    let temperatures = problem
+        .sources
+        .iter()
+        .filter_map(|source| source.head.temperature.as_ref());
+    let kelvin: BTreeSet<Exact> = temperatures.map(Quantity::value_in_si).collect();
+    kelvin.len() > 1
 }
 
 /// Formation equations are written from the reference states, which therefore travel as well.
@@ -135,6 +156,7 @@ fn head(head: &SourceHead) -> toml::Table {
         .put("edition", head.edition.clone())
         .put("doi", head.doi.clone())
         .put("licence", head.licence.clone())
+        .put("note", head.note.clone())
         .put(
             "temperature",
             head.temperature.as_ref().map(Quantity::to_string),

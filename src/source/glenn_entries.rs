@@ -22,6 +22,7 @@ pub(super) fn head(id: &str) -> SourceHead {
         edition: Some(format!("{} ({})", glenn::EDITION, glenn::DISTRIBUTION)),
         doi: None,
         licence: Some(glenn::LICENCE.to_string()),
+        note: None,
         temperature: Quantity::parse(glenn::TEMPERATURE).ok(),
         pressure: Quantity::parse(glenn::PRESSURE).ok(),
         energy_unit: Unit::parse("J/mol").ok(),

@@ -150,6 +150,7 @@ fn read_head(table: &Table<'_, '_>, text: &Text) -> SourceHead {
         edition: owned("edition"),
         doi: owned("doi"),
         licence: owned("licence"),
+        note: owned("note"),
         temperature: temperature.and_then(|text| read_temperature(reader, &text)),
         pressure: pressure.and_then(|text| measured(reader, &text, Dimension::PRESSURE)),
         energy_unit: energy.and_then(|text| read_energy_unit(reader, &text)),

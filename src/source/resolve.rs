@@ -1,5 +1,6 @@
 //! From a case and its sources to a problem.
 
+use std::cell::OnceCell;
 use std::collections::BTreeMap;
 
 use crate::case::{Case, DeclaredKind, Reaction};
@@ -12,7 +13,7 @@ use super::choose::{Chosen, choose};
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
-use super::model::Digits;
+use super::model::{Digits, Entry};
 use super::problem::{Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed};
 use super::reference_states::ReferenceStates;
 use super::store::Source;
@@ -40,6 +41,7 @@ pub fn resolve(
         .map(|reaction| resolver.reaction(reaction))
         .collect();
     resolver.check_choices();
+    resolver.check_correlations();
     let faults = std::mem::take(&mut resolver.faults);
     let problem = faults.is_empty().then(|| resolver.problem(reactions));
     (problem, faults)
@@ -60,6 +62,8 @@ pub(super) struct Resolver<'a> {
     atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
+    /// All entries of the sources, gathered at the first unknown substance.
+    listed: OnceCell<Vec<Entry>>,
 }
 
 impl<'a> Resolver<'a> {
@@ -76,7 +80,14 @@ impl<'a> Resolver<'a> {
             atomic_weights: BTreeMap::new(),
             findings: Vec::new(),
             faults: Faults::default(),
+            listed: OnceCell::new(),
         }
+    }
+
+    /// All entries of the sources.
+    pub(super) fn listed(&self) -> &[Entry] {
+        let gathered = || self.sources.iter().flat_map(Source::all).collect();
+        self.listed.get_or_init(gathered)
     }
 
     fn add_atomic_weights(&mut self, files: &dyn SourceFiles) {
@@ -244,7 +255,7 @@ impl<'a> Resolver<'a> {
         let significance = match (printed.exact, head.digits) {
             (true, _) => Significance::Exact,
             (false, Digits::FixedDecimals) => Significance::Unlimited,
-            (false, Digits::Significant) => Significance::Place(printed.decimal.place()),
+            (false, Digits::Significant) => printed.significance(),
         };
         let value = ValueUsed {
             source: chosen.source,
@@ -297,7 +308,7 @@ impl<'a> Resolver<'a> {
             substance: symbol.to_string(),
             species: None,
             name: entry.name.clone(),
-            significance: Significance::Place(printed.decimal.place()),
+            significance: printed.significance(),
             uncertainty: input_uncertainty(&printed, head),
             printed,
             locator: entry.locator.clone(),
@@ -367,6 +378,35 @@ impl<'a> Resolver<'a> {
                 ));
             }
         }
+    }
+
+    /// Correlations that cannot all be true would make a variance negative.
+    fn check_correlations(&mut self) {
+        let used: Vec<usize> = (0..self.values.len()).collect();
+        if self.correlations().is_consistent(&used) == Ok(true) {
+            return;
+        }
+        let with_any = self
+            .sources
+            .iter()
+            .filter(|source| !source.correlations.is_empty());
+        let ids: Vec<&str> = with_any.map(Source::id).collect();
+        let span = self
+            .case
+            .consult
+            .first()
+            .map_or(0..0, |name| name.span.clone());
+        self.faults.push(Fault::new(
+            FaultCode::Source,
+            self.text,
+            &span,
+            format!(
+                "correlations of {} that contradict each other",
+                ids.join(", ")
+            ),
+            "correlation coefficients that can all be true together (JCGM 100:2008, 5.2)",
+            "compare the coefficients with the source",
+        ));
     }
 
     /// Correlations that the sources state, between values used.

@@ -13,6 +13,11 @@ use super::resolve::Resolver;
 /// How many candidates a message names.
 const MOST: usize = 6;
 
+/// How many faults are helped by a search through all names, which takes milliseconds each.
+const MOST_SEARCHED: usize = 20;
+
+const OWN_VALUE: &str = "cite a value for it in a source file of your own and consult that";
+
 /// No consulted source lists the substance.
 pub(super) fn unknown_substance(resolver: &Resolver<'_>, wanted: &Wanted, span: &Span) -> Fault {
     Fault::new(
@@ -41,6 +46,9 @@ fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
     if !forms.is_empty() {
         return format!("the sources list: {}", forms.join(", "));
     }
+    if resolver.faults.len() >= MOST_SEARCHED {
+        return OWN_VALUE.to_string();
+    }
     let elsewhere = not_consulted(resolver, wanted);
     if !elsewhere.is_empty() {
         return format!(
@@ -50,7 +58,7 @@ fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
     }
     let near = near_names(resolver, wanted);
     if near.is_empty() {
-        return "cite a value for it in a source file of your own and consult that".to_string();
+        return OWN_VALUE.to_string();
     }
     format!(
         "did you mean {}? Otherwise cite a value in a source file of your own",
@@ -87,7 +95,7 @@ fn not_consulted(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<&'static str> 
 
 /// Substances of the same elements and phase, and such as have a name near to what was written.
 fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
-    let entries: Vec<Entry> = resolver.sources.iter().flat_map(|s| s.all()).collect();
+    let entries = resolver.listed();
     let mut near: Vec<String> = Vec::new();
     let alike = entries
         .iter()

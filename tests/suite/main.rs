@@ -2,4 +2,6 @@
 
 mod commands;
 mod faults;
+mod laws;
 mod program;
+mod record;
