@@ -16,11 +16,12 @@ pub enum IdKind {
 }
 
 impl IdKind {
+    /// The word with its article.
     fn word(self) -> &'static str {
         match self {
-            IdKind::Substance => "substance",
-            IdKind::Input => "input",
-            IdKind::Reaction => "reaction",
+            IdKind::Substance => "a substance",
+            IdKind::Input => "an input",
+            IdKind::Reaction => "a reaction",
         }
     }
 }
@@ -63,11 +64,8 @@ impl Ids {
             reader.fault(
                 FaultCode::DuplicateId,
                 &id.span,
-                format!("the id `{}` for a {}", id.value, kind.word()),
-                format!(
-                    "an id of its own: line {line} has it for a {}",
-                    other.word()
-                ),
+                format!("the id `{}` for {}", id.value, kind.word()),
+                format!("an id of its own: line {line} has it for {}", other.word()),
                 "rename one of the two, and where it is used",
             );
             return;
@@ -90,7 +88,7 @@ impl Ids {
             FaultCode::UnknownId,
             span,
             format!("`{id}`"),
-            format!("the id of a {} of this case", words.join(" or ")),
+            format!("the id of {} of this case", words.join(" or ")),
             advice,
         );
     }

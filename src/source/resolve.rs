@@ -13,7 +13,7 @@ use super::choose::{Chosen, choose};
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
-use super::model::Digits;
+use super::model::{Digits, Entry};
 use super::problem::{Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed};
 use super::reference_states::ReferenceStates;
 use super::store::Source;
@@ -62,8 +62,8 @@ pub(super) struct Resolver<'a> {
     atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
-    /// All notations and names of the sources, gathered at the first unknown substance.
-    pub(super) names: OnceCell<Vec<String>>,
+    /// All entries of the sources, gathered at the first unknown substance.
+    listed: OnceCell<Vec<Entry>>,
 }
 
 impl<'a> Resolver<'a> {
@@ -80,8 +80,14 @@ impl<'a> Resolver<'a> {
             atomic_weights: BTreeMap::new(),
             findings: Vec::new(),
             faults: Faults::default(),
-            names: OnceCell::new(),
+            listed: OnceCell::new(),
         }
+    }
+
+    /// All entries of the sources.
+    pub(super) fn listed(&self) -> &[Entry] {
+        let gathered = || self.sources.iter().flat_map(Source::all).collect();
+        self.listed.get_or_init(gathered)
     }
 
     fn add_atomic_weights(&mut self, files: &dyn SourceFiles) {

@@ -1,4 +1,7 @@
 //! Whole-program tests, in one binary because each links the typesetter.
 
+mod commands;
+mod faults;
 mod laws;
+mod program;
 mod record;
