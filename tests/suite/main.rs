@@ -1,2 +1,3 @@
 //! Whole-program tests, in one binary because each links the typesetter.
 
+mod outside;
