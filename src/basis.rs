@@ -22,14 +22,16 @@ struct Unconfirmed<'a> {
 
 fn unconfirmed(case: &Case) -> Vec<Unconfirmed<'_>> {
     let assumptions = case.assumptions.iter().enumerate();
-    let assumptions = assumptions.filter(|(_, a)| !a.confirmed).map(|(i, a)| Unconfirmed {
-        what: format!("assumption {}", i + 1),
-        hold: a.hold.as_ref(),
-        span: a.text.span.clone(),
-    });
+    let assumptions = assumptions
+        .filter(|(_, a)| !a.confirmed)
+        .map(|(i, a)| Unconfirmed {
+            what: format!("Assumption {}", i + 1),
+            hold: a.hold.as_ref(),
+            span: a.text.span.clone(),
+        });
     let inputs = case.inputs.values().filter(|input| !input.confirmed);
     let inputs = inputs.map(|input| Unconfirmed {
-        what: format!("input `{}`", input.id.value),
+        what: format!("Input `{}`", input.id.value),
         hold: input.hold.as_ref(),
         span: input.id.span.clone(),
     });
@@ -43,7 +45,7 @@ impl Unconfirmed<'_> {
                 self.blocking(status, Severity::Caution),
                 FindingCode::Unconfirmed,
                 format!(
-                    "The {} is not confirmed and no hold says who will close it: add hold = {{ \
+                    "{} is not confirmed and no hold says who will close it: add hold = {{ \
                      owner, closed-by }}, or confirmed = true.",
                     self.what
                 ),
@@ -69,7 +71,7 @@ impl Unconfirmed<'_> {
 
     fn open_hold(&self, hold: &Hold) -> (Severity, FindingCode, String) {
         let open = format!(
-            "The hold on {} is open (owner: {}; closed by: {})",
+            "{}: the hold is open (owner: {}; closed by: {})",
             self.what, hold.owner, hold.closed_by
         );
         match &hold.accepted_by {

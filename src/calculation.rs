@@ -39,7 +39,9 @@ impl Calculation {
         };
         let mut working = work(&problem, &options);
         working.findings.extend(basis::check(&case, &text));
-        working.findings.sort_by(|a, b| (a.severity, &a.at, a.code).cmp(&(b.severity, &b.at, b.code)));
+        working
+            .findings
+            .sort_by(|a, b| (a.severity, &a.at, a.code).cmp(&(b.severity, &b.at, b.code)));
         Ok(Calculation {
             text,
             case,

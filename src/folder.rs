@@ -60,7 +60,11 @@ fn stays_inside(name: &str) -> bool {
 
 /// A link can leave the folder although its name does not.
 fn leads_outside(root: &Path, name: &str) -> bool {
-    let root = if root.as_os_str().is_empty() { Path::new(".") } else { root };
+    let root = if root.as_os_str().is_empty() {
+        Path::new(".")
+    } else {
+        root
+    };
     match (root.canonicalize(), root.join(name).canonicalize()) {
         (Ok(root), Ok(file)) => !file.starts_with(root),
         _ => false,

@@ -56,7 +56,10 @@ impl Ids {
                 FaultCode::DuplicateId,
                 &id.span,
                 format!("the id `{}` for a {}", id.value, kind.word()),
-                format!("an id of its own: line {line} has it for a {}", other.word()),
+                format!(
+                    "an id of its own: line {line} has it for a {}",
+                    other.word()
+                ),
                 "rename one of the two, and where it is used",
             );
             return;
@@ -70,7 +73,10 @@ impl Ids {
 
     /// Reports an id that nothing has, with the nearest one of the kind that was asked for.
     pub(super) fn unknown(&self, reader: &Reader<'_>, id: &str, span: &Span, wanted: &[IdKind]) {
-        let fitting = self.taken.iter().filter(|(_, (kind, _))| wanted.contains(kind));
+        let fitting = self
+            .taken
+            .iter()
+            .filter(|(_, (kind, _))| wanted.contains(kind));
         let advice = match nearest(id, fitting.map(|(id, _)| id.as_str()), 1).first() {
             Some(near) => format!("did you mean `{near}`?"),
             None => "define it, or use one that is defined".to_string(),

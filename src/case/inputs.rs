@@ -25,7 +25,9 @@ fn read_input(table: &Table<'_, '_>, id: Located<String>) -> Option<Input> {
     let reader = table.reader();
     let value = table.required_string("value", "give the value with its unit");
     let value = value.and_then(|text| quantity(reader, &text));
-    let tolerance = table.string("tolerance").and_then(|text| quantity(reader, &text));
+    let tolerance = table
+        .string("tolerance")
+        .and_then(|text| quantity(reader, &text));
     let source = table.string("source").map(|t| t.value);
     let (confirmed, hold) = read_standing(table);
     let value = value?;
@@ -49,13 +51,22 @@ fn check_tolerance(table: &Table<'_, '_>, value: &Quantity, tolerance: &Located<
             FaultCode::Quantity,
             &tolerance.span,
             format!("a tolerance in {}", tolerance.value.unit.symbol()),
-            format!("a tolerance of the same kind as the value, in {}", value.unit.symbol()),
+            format!(
+                "a tolerance of the same kind as the value, in {}",
+                value.unit.symbol()
+            ),
             "write the tolerance in the unit of the value",
         );
     }
     if tolerance.value.value_in_si() < num_traits::Zero::zero() {
         let found = table.reader().text().slice(&tolerance.span).to_string();
         let expected = "a half-width of zero or more";
-        value_fault(reader, &tolerance.span, found, expected, "write it without a sign");
+        value_fault(
+            reader,
+            &tolerance.span,
+            found,
+            expected,
+            "write it without a sign",
+        );
     }
 }

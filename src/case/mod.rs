@@ -17,8 +17,8 @@ mod substances;
 
 pub use ids::IdKind;
 pub use model::{
-    Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText, Reaction,
-    RecordHead, ResultUnits, Revision, Role, RoundingRule, Status,
+    Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText,
+    Reaction, RecordHead, ResultUnits, Revision, Role, RoundingRule, Status,
 };
 pub use prose::{Binding, MARKDOWN, bindings, is_escaped};
 pub use reactions::RESULT_QUANTITIES;

@@ -134,7 +134,10 @@ pub struct DeclaredSubstance {
 /// What a declared substance is made of.
 #[derive(Clone, Debug)]
 pub enum DeclaredKind {
-    Compound { formula: Formula, phase: Phase },
+    Compound {
+        formula: Formula,
+        phase: Phase,
+    },
     /// Known by its heat capacity alone; takes no part in reactions.
     Inert,
 }

@@ -5,7 +5,7 @@ use num_traits::One;
 
 use crate::document::{Reader, Table, quantity, unit, value_fault};
 use crate::finding::{FaultCode, Located};
-use crate::quantity::{Exact, Unit, order_of_magnitude, power_of_ten};
+use crate::quantity::{Dimension, Exact, Unit, order_of_magnitude, power_of_ten};
 
 use super::ids::Ids;
 use super::model::{Reaction, ResultUnits, RoundingRule};
@@ -36,7 +36,7 @@ fn read_unit(table: Option<&Table<'_, '_>>, key: &str, default: &str) -> Unit {
         return default;
     };
     if given.dimension() == default.dimension() {
-        return given;
+        return simple(table.reader(), &text, given).unwrap_or(default);
     }
     table.reader().fault(
         FaultCode::Quantity,
@@ -46,6 +46,22 @@ fn read_unit(table: Option<&Table<'_, '_>>, key: &str, default: &str) -> Unit {
         format!("write it as \"{}\"", default.symbol()),
     );
     default
+}
+
+/// Results are given in quotients of these units, so each has to be one symbol.
+fn simple(reader: &Reader<'_>, text: &Located<String>, given: Unit) -> Option<Unit> {
+    let compound = |c: char| matches!(c, '/' | ' ' | '(' | '·' | '^') || c.is_ascii_digit();
+    if !given.symbol().contains(compound) {
+        return Some(given);
+    }
+    reader.fault(
+        FaultCode::Quantity,
+        &text.span,
+        format!("\"{}\", a unit made of several", text.value),
+        "one symbol, such as kJ, kcal_th, Btu_IT, mol, kg",
+        "results are given in quotients of it: choose a unit with a symbol of its own",
+    );
+    None
 }
 
 pub(super) fn read_rounding(
@@ -82,6 +98,20 @@ fn read_rule(
         );
         return None;
     };
+    let over = match result.value.ends_with("-mass") {
+        true => Dimension::MASS,
+        false => Dimension::AMOUNT,
+    };
+    if place.unit.dimension() != Dimension::ENERGY.over(over) {
+        reader.fault(
+            FaultCode::Quantity,
+            &text.span,
+            format!("\"{}\", a place in {}", text.value, place.unit.dimension()),
+            format!("a place in {}", Dimension::ENERGY.over(over)),
+            format!("write it in the unit of {}", result.value),
+        );
+        return None;
+    }
     Some(RoundingRule {
         result,
         place: power,

@@ -97,7 +97,9 @@ fn check_bindings(
     reactions: &IndexMap<String, Reaction>,
 ) {
     for binding in markdown_bindings(&markdown.value) {
-        let span = reader.text().inside(&markdown.span, &markdown.value, &binding.span);
+        let span = reader
+            .text()
+            .inside(&markdown.span, &markdown.value, &binding.span);
         if ids.kind(&binding.name) != Some(IdKind::Input) {
             check_result(reader, &binding.name, &span, ids, reactions);
         }

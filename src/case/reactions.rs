@@ -71,7 +71,8 @@ impl Context<'_, '_, '_> {
         let text = self.table.string("temperature")?;
         let found = if is_id(&text.value) {
             let Some(input) = self.inputs.get(&text.value) else {
-                self.ids.unknown(reader, &text.value, &text.span, &[IdKind::Input]);
+                self.ids
+                    .unknown(reader, &text.value, &text.span, &[IdKind::Input]);
                 return None;
             };
             Located::new(input.value.value.clone(), text.span.clone())

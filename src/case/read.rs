@@ -63,7 +63,10 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
 
     let record = root.table("record");
     if record.is_none() {
-        root.missing("record", "begin the case with a [record] table: number, revision, title, …");
+        root.missing(
+            "record",
+            "begin the case with a [record] table: number, revision, title, …",
+        );
     }
     let record = record.and_then(|table| read_record(&table));
     let substances = substances.map_or_else(IndexMap::new, |t| read_substances(&t));
@@ -71,14 +74,20 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     let reactions = match reactions {
         Some(table) => read_reactions(&table, &ids, &inputs, &substances),
         None => {
-            root.missing("reactions", "add a reaction: [reactions.NAME] with its equation");
+            root.missing(
+                "reactions",
+                "add a reaction: [reactions.NAME] with its equation",
+            );
             IndexMap::new()
         }
     };
     let units = read_units(root.table("units").as_ref());
     let sources = root.table("sources");
     if sources.is_none() {
-        root.missing("sources", "add [sources] with consult = [\"codata-1989\", \"nasa-glenn-2021\"]");
+        root.missing(
+            "sources",
+            "add [sources] with consult = [\"codata-1989\", \"nasa-glenn-2021\"]",
+        );
     }
     Some(Case {
         prose: read_prose(root.table("prose").as_ref(), &ids, &reactions),

@@ -40,13 +40,15 @@ pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
     let revision = table.required_string("revision", "give the revision: revision = \"A\"");
     let title = table.required_string("title", "say what is calculated: title = \"…\"");
     let preparer = table.required_string("preparer", "name who answers for the case");
-    let status = table.required_string("status", "status = \"preliminary\", \"for-check\" or \"issued\"");
+    let status = table.required_string(
+        "status",
+        "status = \"preliminary\", \"for-check\" or \"issued\"",
+    );
     let date = required_date(table, "date");
     let number = number.and_then(|text| file_word(reader, text));
     let revision = revision.and_then(|text| file_word(reader, text));
-    let status = status.and_then(|text| {
-        Some(Located::new(one_of(reader, &text, &STATUSES)?, text.span))
-    });
+    let status =
+        status.and_then(|text| Some(Located::new(one_of(reader, &text, &STATUSES)?, text.span)));
     let texts = |key| table.strings(key).into_iter().map(|t| t.value).collect();
     let history = table.tables("history");
     let history: Vec<_> = history.iter().map(read_revision).collect();
@@ -56,12 +58,12 @@ pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
     Some(RecordHead {
         number: number?,
         revision: revision?,
-        title: title.and_then(|title| filled(reader, title))?,
+        title: title.and_then(|title| filled(reader, title, LONGEST_TITLE))?,
         facility,
         equipment,
         related,
         date: date?,
-        preparer: preparer.and_then(|preparer| filled(reader, preparer))?,
+        preparer: preparer.and_then(|preparer| filled(reader, preparer, LONGEST_NAME))?,
         status: status?,
         history: history.into_iter().flatten().collect(),
         signatures,
@@ -95,7 +97,22 @@ fn file_word(reader: &Reader<'_>, text: Located<String>) -> Option<Located<Strin
     None
 }
 
-fn filled(reader: &Reader<'_>, text: Located<String>) -> Option<String> {
+/// The front sheet has places of fixed size for a title and a name.
+const LONGEST_TITLE: usize = 200;
+const LONGEST_NAME: usize = 80;
+
+fn filled(reader: &Reader<'_>, text: Located<String>, longest: usize) -> Option<String> {
+    let count = text.value.chars().count();
+    if count > longest {
+        value_fault(
+            reader,
+            &text.span,
+            format!("{count} characters"),
+            format!("at most {longest} characters"),
+            "shorten it; what is longer belongs into the prose",
+        );
+        return None;
+    }
     if text.value.trim().is_empty() {
         value_fault(reader, &text.span, "an empty string", "words", "fill it in");
         return None;
@@ -127,7 +144,13 @@ fn read_signatures(table: &Table<'_, '_>) -> Vec<Role> {
         };
         if roles.contains(&role) {
             let found = format!("\"{}\" a second time", text.value);
-            value_fault(table.reader(), &text.span, found, "each role once", "remove one");
+            value_fault(
+                table.reader(),
+                &text.span,
+                found,
+                "each role once",
+                "remove one",
+            );
         }
         roles.push(role);
     }

@@ -11,11 +11,17 @@ pub(super) fn read_consult(table: Option<&Table<'_, '_>>) -> Vec<Located<String>
     };
     table.only(&["consult", "choose"]);
     if table.get("consult").is_none() {
-        table.missing("consult", "list the sources in order: consult = [\"codata-1989\"]");
+        table.missing(
+            "consult",
+            "list the sources in order: consult = [\"codata-1989\"]",
+        );
     }
     let consult = table.strings("consult");
     for (index, text) in consult.iter().enumerate() {
-        if consult[..index].iter().any(|earlier| earlier.value == text.value) {
+        if consult[..index]
+            .iter()
+            .any(|earlier| earlier.value == text.value)
+        {
             value_fault(
                 table.reader(),
                 &text.span,

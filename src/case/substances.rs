@@ -101,9 +101,16 @@ fn is_cas(text: &str) -> bool {
     if !all_digits || !lengths {
         return false;
     }
-    let digits = first.bytes().chain(second.bytes()).map(|b| u32::from(b - b'0'));
+    let digits = first
+        .bytes()
+        .chain(second.bytes())
+        .map(|b| u32::from(b - b'0'));
     let digits: Vec<u32> = digits.collect();
-    let weighted = digits.iter().rev().zip(1..).map(|(digit, weight)| digit * weight);
+    let weighted = digits
+        .iter()
+        .rev()
+        .zip(1..)
+        .map(|(digit, weight)| digit * weight);
     weighted.sum::<u32>() % 10 == u32::from(check.as_bytes()[0] - b'0')
 }
 

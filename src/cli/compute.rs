@@ -29,7 +29,11 @@ impl Compute {
         if self.json {
             print(&results_json(calculation));
         } else {
-            print(&working_text::shown(&self.case, calculation, Style::stdout()));
+            print(&working_text::shown(
+                &self.case,
+                calculation,
+                Style::stdout(),
+            ));
         }
         match calculation.is_stopped() {
             true => Exit::DoesNotHold,

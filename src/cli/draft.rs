@@ -31,7 +31,11 @@ impl Draft {
         let path = self.output.out.join(format!("{}.toml", self.number));
         let text = draft_text(&self.number, today());
         if let Err(error) = write_new(&path, text.as_bytes()) {
-            return self.refused(format!("{}: not written: {error}", path.display()));
+            let why = match error.kind() {
+                std::io::ErrorKind::AlreadyExists => "it is there already".to_string(),
+                _ => error.to_string(),
+            };
+            return self.refused(format!("{}: not written: {why}", path.display()));
         }
         let shown = path.display();
         tell(&format!(
@@ -57,5 +61,7 @@ fn today() -> chrono::NaiveDate {
     let since = std::time::SystemTime::now().duration_since(std::time::UNIX_EPOCH);
     let days = since.map_or(0, |since| since.as_secs() / 86_400);
     let epoch = chrono::NaiveDate::from_ymd_opt(1970, 1, 1).unwrap_or_default();
-    epoch.checked_add_days(chrono::Days::new(days)).unwrap_or(epoch)
+    epoch
+        .checked_add_days(chrono::Days::new(days))
+        .unwrap_or(epoch)
 }

@@ -33,6 +33,10 @@ mod tests {
         assert!(text.contains("date = 2026-02-03"));
         let calculation = Calculation::of(Text::new("case.toml", text), &NoFiles);
         let calculation = calculation.unwrap_or_else(|faults| panic!("{faults:#?}"));
-        assert!(!calculation.is_stopped(), "{:#?}", calculation.working.findings);
+        assert!(
+            !calculation.is_stopped(),
+            "{:#?}",
+            calculation.working.findings
+        );
     }
 }

@@ -26,10 +26,15 @@ impl Extract {
         match self.extract() {
             Ok(names) => {
                 if self.json {
-                    let document = json!({ "record": self.record, "folder": self.dir, "files": names });
+                    let document =
+                        json!({ "record": self.record, "folder": self.dir, "files": names });
                     print(&format!("{document}\n"));
                 }
-                tell(&format!("{} files in {}\n", names.len(), self.dir.display()));
+                tell(&format!(
+                    "{} files in {}\n",
+                    names.len(),
+                    self.dir.display()
+                ));
                 Exit::Well
             }
             Err(message) => {
@@ -57,7 +62,10 @@ impl Extract {
 
     /// Nothing is written where something would be in the way.
     fn refuse_existing(&self, file: &RecordFile) -> Result<(), String> {
-        let mut there = file.attachments.iter().map(|embedded| self.dir.join(&embedded.name));
+        let mut there = file
+            .attachments
+            .iter()
+            .map(|embedded| self.dir.join(&embedded.name));
         match there.find(|path| path.symlink_metadata().is_ok()) {
             Some(path) => Err(format!(
                 "{} is there already; extract to a folder of its own",

@@ -41,7 +41,11 @@ fn shown(case: &Path, fault: &Fault, style: Style) -> String {
     if !fault.line.is_empty() {
         let (start, length) = fault.mark;
         let mark = format!("{}{}", " ".repeat(start), "^".repeat(length));
-        text += &format!("    {}\n    {}\n", fault.line, style.paint(Tone::Stop, &mark));
+        text += &format!(
+            "    {}\n    {}\n",
+            fault.line,
+            style.paint(Tone::Stop, &mark)
+        );
     }
     text += &wrap("  found     ", &plain(&fault.found));
     text += &wrap("  expected  ", &plain(&fault.expected));

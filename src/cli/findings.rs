@@ -8,7 +8,10 @@ use crate::finding::{Finding, Severity};
 
 /// All findings, the weightiest first, each with its place.
 pub fn shown(case: &Path, findings: &[Finding], style: Style) -> String {
-    findings.iter().map(|finding| one(case, finding, style)).collect()
+    findings
+        .iter()
+        .map(|finding| one(case, finding, style))
+        .collect()
 }
 
 fn one(case: &Path, finding: &Finding, style: Style) -> String {

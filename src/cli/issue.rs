@@ -54,7 +54,11 @@ impl Issue {
                 return Exit::NotDone;
             }
         };
-        tell(&format!("{}\n  stamp {stamp}\n{}", path.display(), said(&placed)));
+        tell(&format!(
+            "{}\n  stamp {stamp}\n{}",
+            path.display(),
+            said(&placed)
+        ));
         self.json(json!({
             "file": path,
             "number": worked.calculation.case.record.number.value,
@@ -99,7 +103,9 @@ fn said(placed: &Placed) -> String {
         Placed::New => String::new(),
         Placed::Unchanged => "  the same record was there already\n".to_string(),
         Placed::Replaced { stamp } => format!("  replaces the unsigned record {stamp}\n"),
-        Placed::SignedKept => "  the signed record there has this content; left alone\n".to_string(),
+        Placed::SignedKept => {
+            "  the signed record there has this content; left alone\n".to_string()
+        }
     }
 }
 

@@ -10,9 +10,9 @@ mod extract;
 mod faults;
 mod findings;
 mod issue;
-mod worked;
 mod source;
 mod terminal;
+mod worked;
 mod working_text;
 
 use std::path::PathBuf;

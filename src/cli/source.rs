@@ -64,7 +64,10 @@ impl SourceCommand {
         }
         let width = BUILT_IN.iter().map(|id| id.len()).max().unwrap_or(0);
         for source in &sources {
-            print(&wrap(&format!("{:<width$}  ", source.id()), &source.head.citation()));
+            print(&wrap(
+                &format!("{:<width$}  ", source.id()),
+                &source.head.citation(),
+            ));
         }
         Exit::Well
     }
@@ -82,7 +85,11 @@ impl SourceCommand {
             return Exit::Well;
         }
         print(&wrap("", &source.head.citation()));
-        print(&format!("SHA-256 {}\n{} entries\n", source.head.sha256, entries.len()));
+        print(&format!(
+            "SHA-256 {}\n{} entries\n",
+            source.head.sha256,
+            entries.len()
+        ));
         for entry in &entries {
             print(&entry_text(None, entry));
         }
@@ -176,16 +183,30 @@ fn subject(entry: &Entry) -> String {
 
 /// One entry on a line or two.
 fn entry_text(source: Option<&str>, entry: &Entry) -> String {
-    let values = [&entry.formation_enthalpy, &entry.atomic_weight, &entry.value];
+    let values = [
+        &entry.formation_enthalpy,
+        &entry.atomic_weight,
+        &entry.value,
+    ];
     let value = values.into_iter().flatten().next();
     let value = value.map_or_else(|| no_value(entry), |q| q.to_string());
-    let name = [&entry.name, &entry.cas].into_iter().flatten().cloned().collect::<Vec<_>>();
+    let name = [&entry.name, &entry.cas]
+        .into_iter()
+        .flatten()
+        .cloned()
+        .collect::<Vec<_>>();
     let place = match source {
         Some(source) => format!("{source}: {}", entry.locator),
         None => entry.locator.clone(),
     };
-    let mut text = wrap("  ", &format!("{}  {value}  {}", subject(entry), name.join(", ")));
-    text += &wrap("      ", &format!("{} ({})", plain(&place), entry.standing.word()));
+    let mut text = wrap(
+        "  ",
+        &format!("{}  {value}  {}", subject(entry), name.join(", ")),
+    );
+    text += &wrap(
+        "      ",
+        &format!("{} ({})", plain(&place), entry.standing.word()),
+    );
     text
 }
 

@@ -86,12 +86,21 @@ pub fn wrap(first: &str, text: &str) -> String {
         width += length;
         empty = false;
     }
-    lines.iter().map(|line| format!("{}\n", line.trim_end())).collect()
+    lines
+        .iter()
+        .map(|line| format!("{}\n", line.trim_end()))
+        .collect()
 }
 
 /// Text from a file without what would move the cursor.
 pub fn plain(text: &str) -> String {
-    let shown = |c: char| if c.is_control() && c != '\n' { '\u{fffd}' } else { c };
+    let shown = |c: char| {
+        if c.is_control() && c != '\n' {
+            '\u{fffd}'
+        } else {
+            c
+        }
+    };
     text.chars().map(shown).collect()
 }
 
@@ -105,6 +114,10 @@ mod tests {
         for line in text.lines() {
             assert!(line.chars().count() <= WIDTH);
         }
-        assert!(text.lines().nth(1).is_some_and(|line| line.starts_with("      word")));
+        assert!(
+            text.lines()
+                .nth(1)
+                .is_some_and(|line| line.starts_with("      word"))
+        );
     }
 }

@@ -6,7 +6,7 @@ use super::findings;
 use super::terminal::{Style, Tone, plain, wrap};
 use crate::calculation::Calculation;
 use crate::engine::{Outcome, ReactionWorking};
-use crate::quantity::{exact_text, two_digits};
+use crate::quantity::{exact_text, full_text, two_digits};
 use crate::source::Problem;
 
 /// The working of a case as text.
@@ -35,7 +35,11 @@ pub fn shown(case: &Path, calculation: &Calculation, style: Style) -> String {
 
 fn results(calculation: &Calculation, style: Style) -> String {
     let outcomes = &calculation.working.outcomes;
-    let width = outcomes.iter().map(|o| o.id.chars().count()).max().unwrap_or(0);
+    let width = outcomes
+        .iter()
+        .map(|o| o.id.chars().count())
+        .max()
+        .unwrap_or(0);
     let mut text = style.paint(Tone::Strong, "Results") + "\n";
     for outcome in outcomes {
         let line = format!("{} {}", stated(outcome), outcome.direction().word());
@@ -53,7 +57,11 @@ fn stated(outcome: &Outcome) -> String {
         (Some(text), true) => format!(" ± {text}"),
         _ => String::new(),
     };
-    format!("{}{uncertainty} {}", outcome.stated.value_text, outcome.unit.symbol())
+    format!(
+        "{}{uncertainty} {}",
+        outcome.stated.value_text,
+        outcome.unit.symbol()
+    )
 }
 
 fn coverage(outcome: &Outcome) -> String {
@@ -70,23 +78,38 @@ fn coverage(outcome: &Outcome) -> String {
 fn reaction(calculation: &Calculation, working: &ReactionWorking) -> String {
     let problem = &calculation.problem;
     let reaction = &problem.reactions[working.reaction];
-    let mut text = wrap(&format!("{}: ", reaction.id), &reaction.equation.to_string());
+    let mut text = wrap(
+        &format!("{}: ", reaction.id),
+        &reaction.equation.to_string(),
+    );
     let Some(hess) = &working.hess else {
         return text + "  not worked, see the findings\n";
     };
-    let unit = calculation.working.outcome(&format!("{}.heat", reaction.id));
+    let unit = calculation
+        .working
+        .outcome(&format!("{}.heat", reaction.id));
     let unit = unit.map_or("", |outcome| outcome.unit.symbol());
-    let rows: Vec<[String; 4]> = hess.terms.iter().map(|term| {
-        [
-            exact_text(&term.nu),
-            problem.substances[term.substance].label.clone(),
-            format!("[{}] {}", term.value + 1, exact_text(&term.molar)),
-            exact_text(&term.contribution),
-        ]
-    })
-    .collect();
+    let rows: Vec<[String; 4]> = hess
+        .terms
+        .iter()
+        .map(|term| {
+            [
+                exact_text(&term.nu),
+                problem.substances[term.substance].label.clone(),
+                format!(
+                    "[{}] {}",
+                    term.value + 1,
+                    full_text(&term.molar, term.molar_significance)
+                ),
+                full_text(&term.contribution, term.contribution_significance),
+            ]
+        })
+        .collect();
     text += &table(&rows);
-    text + &wrap("  sum ", &format!("{} {unit}", exact_text(&hess.sum)))
+    text + &wrap(
+        "  sum ",
+        &format!("{} {unit}", full_text(&hess.sum, hess.significance)),
+    )
 }
 
 /// Four columns, numbers flush right; a long cell takes its row with it.
@@ -97,7 +120,10 @@ fn table(rows: &[[String; 4]]) -> String {
     };
     let (a, b, c, d) = (width(0, 8), width(1, 28), width(2, 22), width(3, 16));
     let line = |row: &[String; 4]| {
-        let line = format!("  {:>a$}  {:<b$}  {:>c$}  {:>d$}", row[0], row[1], row[2], row[3]);
+        let line = format!(
+            "  {:>a$}  {:<b$}  {:>c$}  {:>d$}",
+            row[0], row[1], row[2], row[3]
+        );
         format!("{}\n", line.trim_end())
     };
     rows.iter().map(line).collect()

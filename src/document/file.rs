@@ -17,7 +17,10 @@ pub fn read_text(path: &Path, name: &str) -> Result<Text, Fault> {
         return Err(too_large(path, name));
     }
     match String::from_utf8(bytes) {
-        Ok(text) => Ok(Text::new(name, text.strip_prefix('\u{feff}').unwrap_or(&text))),
+        Ok(text) => Ok(Text::new(
+            name,
+            text.strip_prefix('\u{feff}').unwrap_or(&text),
+        )),
         Err(error) => Err(not_utf8(name, &error)),
     }
 }
@@ -25,7 +28,9 @@ pub fn read_text(path: &Path, name: &str) -> Result<Text, Fault> {
 /// One byte more than the limit is enough to know that a file is too large.
 fn read_bytes(path: &Path) -> io::Result<Vec<u8>> {
     let mut bytes = Vec::new();
-    File::open(path)?.take(LARGEST + 1).read_to_end(&mut bytes)?;
+    File::open(path)?
+        .take(LARGEST + 1)
+        .read_to_end(&mut bytes)?;
     Ok(bytes)
 }
 

@@ -136,7 +136,10 @@ impl<'r, 'd> Value<'r, 'd> {
                 self.table_span(),
                 self.path.clone(),
             )),
-            _ => self.wrong_type("a table", "write it as { key = \"value\" } or under a [header]"),
+            _ => self.wrong_type(
+                "a table",
+                "write it as { key = \"value\" } or under a [header]",
+            ),
         }
     }
 
@@ -153,7 +156,11 @@ impl<'r, 'd> Value<'r, 'd> {
         self.reader.fault(
             FaultCode::WrongType,
             &self.span(),
-            format!("{}: {}", self.value.get_ref().type_str(), self.reader.text().slice(&self.span())),
+            format!(
+                "{}: {}",
+                self.value.get_ref().type_str(),
+                self.reader.text().slice(&self.span())
+            ),
             format!("`{}` is {expected}", self.path),
             advice,
         );

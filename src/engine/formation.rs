@@ -15,11 +15,18 @@ pub struct FormationEquation {
 }
 
 /// The formation equation of one mole of a species; none where an element has no reference state
-/// among the conventions. Ions are formed with electrons, which the convention for H+(aq) makes
+/// among the conventions. The elements stand in Hill order. Ions are formed with electrons, which the convention for H+(aq) makes
 /// count nothing (IUPAC Green Book, 3rd ed. 2007, section 2.11; from memory).
-pub fn formation_equation(species: &Species, states: &ReferenceStates) -> Option<FormationEquation> {
+pub fn formation_equation(
+    species: &Species,
+    states: &ReferenceStates,
+) -> Option<FormationEquation> {
     let mut left = Vec::new();
-    for (element, count) in species.formula.counts() {
+    let counts = species.formula.counts();
+    let with_carbon = counts.keys().any(|element| element.symbol() == "C");
+    let mut elements: Vec<_> = counts.iter().collect();
+    elements.sort_by(|(a, _), (b, _)| a.hill_cmp(**b, with_carbon));
+    for (element, count) in elements {
         let state = states.of_element(*element)?;
         let atoms = state.formula.counts().get(element)?;
         left.push((count / atoms, state.clone()));

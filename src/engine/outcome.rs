@@ -3,8 +3,8 @@
 use num_traits::Signed;
 
 use crate::quantity::{
-    Combined, Dimension, Exact, LinearForm, Real, Significance, Stated, Unit, combine,
-    exact_text, order_of_magnitude, power_of_ten,
+    Combined, Dimension, Exact, LinearForm, Real, Significance, Stated, Unit, combine, exact_text,
+    order_of_magnitude, power_of_ten,
 };
 use crate::source::Problem;
 
@@ -128,10 +128,16 @@ impl Rules<'_> {
     fn decide(&self, place: Option<i64>) -> (Stated, StatedBy, Option<Stated>) {
         let by_digits = Stated::by_significance(self.value, self.significance);
         let by_digits = by_digits.unwrap_or_else(|| unrounded(self.value));
-        let by_uncertainty = self.expanded.and_then(|u| Stated::by_uncertainty(self.value, u));
-        let at_place = |place| Stated::at_place(self.value, place, self.expanded);
-        if let Some(stated) = place.and_then(at_place) {
-            return (stated, StatedBy::Rounding, by_uncertainty.or(Some(by_digits)));
+        let by_uncertainty = self
+            .expanded
+            .and_then(|u| Stated::by_uncertainty(self.value, u));
+        if let Some(stated) = place.and_then(|place| self.at_place(place, by_uncertainty.as_ref()))
+        {
+            return (
+                stated,
+                StatedBy::Rounding,
+                by_uncertainty.or(Some(by_digits)),
+            );
         }
         match by_uncertainty {
             Some(stated) if self.complete => (stated, StatedBy::Uncertainty, Some(by_digits)),
@@ -141,9 +147,25 @@ impl Rules<'_> {
     }
 }
 
+impl Rules<'_> {
+    /// At a place that the case names; the uncertainty keeps at most two digits there too
+    /// (JCGM 100:2008, 7.2.6).
+    fn at_place(&self, place: i64, by_uncertainty: Option<&Stated>) -> Option<Stated> {
+        let mut stated = Stated::at_place(self.value, place, self.expanded)?;
+        if let Some(other) = by_uncertainty
+            && other.place > Some(place)
+        {
+            stated.uncertainty_text = other.uncertainty_text.clone();
+        }
+        Some(stated)
+    }
+}
+
 /// A value that no rule limits, in full.
 fn unrounded(value: &Real) -> Stated {
-    let text = value.to_exact().map_or_else(|| value.to_f64().to_string(), |v| exact_text(&v));
+    let text = value
+        .to_exact()
+        .map_or_else(|| value.to_f64().to_string(), |v| exact_text(&v));
     Stated {
         value_text: text,
         uncertainty_text: None,
@@ -152,7 +174,8 @@ fn unrounded(value: &Real) -> Stated {
 }
 
 fn rests_on_fixed_decimals(form: &LinearForm, problem: &Problem) -> bool {
-    form.iter().any(|(index, _)| problem.values[index].significance == Significance::Unlimited)
+    form.iter()
+        .any(|(index, _)| problem.values[index].significance == Significance::Unlimited)
 }
 
 /// Where a table with a fixed number of decimals is among the values, its printed zeros claim
@@ -174,11 +197,20 @@ fn limited(
 fn house_place(unit: &Unit) -> i64 {
     let per_mole = Dimension::ENERGY.over(Dimension::AMOUNT) == unit.dimension();
     let coherent = Exact::from_integer(if per_mole { 100 } else { 1000 }.into());
-    order_of_magnitude(&(coherent / unit.factor())).unwrap_or(0)
+    place_of(&(coherent / unit.factor())).unwrap_or(0)
 }
 
-/// A place in the unit of a result, given in another unit of the same kind.
+/// A place in the unit of a result, given in another unit of the same kind; never a finer one.
 pub fn place_in(place: i64, from: &Unit, to: &Unit) -> Option<i64> {
-    let size = power_of_ten(place) * from.factor() / to.factor();
-    order_of_magnitude(&size)
+    place_of(&(power_of_ten(place) * from.factor() / to.factor()))
+}
+
+/// The finest place that is not finer than a size.
+fn place_of(size: &Exact) -> Option<i64> {
+    let order = order_of_magnitude(size)?;
+    Some(if *size > power_of_ten(order) {
+        order + 1
+    } else {
+        order
+    })
 }

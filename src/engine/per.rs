@@ -35,7 +35,8 @@ pub(super) fn molar_mass(problem: &Problem, reaction: &ProblemReaction) -> Optio
     let value: Exact = parts.iter().map(|(index, n)| weight(*index) * n).sum();
     let places = parts.iter().map(|(index, n)| {
         let used = &problem.values[*index];
-        used.significance.times_exact(&used.printed.decimal.value(), n)
+        used.significance
+            .times_exact(&used.printed.decimal.value(), n)
     });
     Some(MolarMass {
         significance: Significance::sum(places),

@@ -1,11 +1,13 @@
 //! What it costs to mix sources of different reference temperature, pressure or reference state.
 
-use num_traits::{Signed, Zero};
+use std::collections::BTreeSet;
+
+use num_traits::Zero;
 
 use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::notation::{Element, Species};
-use crate::quantity::{Exact, Quantity, exact_text, to_f64, two_digits};
-use crate::source::{Problem, ProblemReaction, ValueKind};
+use crate::quantity::{Exact, exact_text, to_f64, two_digits};
+use crate::source::{Problem, ProblemReaction, ValueKind, ValueUsed};
 
 use super::work::Working;
 
@@ -40,21 +42,21 @@ type Said = (Severity, FindingCode, String);
 /// Enthalpies of ideal gases do not depend on pressure; those of condensed substances by about
 /// V·Δp (from (∂H/∂p)_T = V − T(∂V/∂T)_p). 100 cm³/mol stands for a large molar volume.
 fn pressure(problem: &Problem, text: &Text) -> Vec<Finding> {
-    let enthalpies = problem.values.iter().filter(|v| v.kind == ValueKind::FormationEnthalpy);
-    let mut pressures: Vec<(Exact, &str, usize)> = Vec::new();
-    for value in enthalpies.filter(|v| !v.printed.exact) {
-        let head = &problem.sources[value.source].head;
-        let Some(pressure) = head.pressure.as_ref().map(Quantity::value_in_si) else {
-            continue;
-        };
-        if !pressures.iter().any(|(p, _, _)| *p == pressure) {
-            pressures.push((pressure, &head.id, value.used_at.start));
-        }
-    }
-    let [first, .., last] = &pressures[..] else {
+    let pressures = standard_pressures(problem);
+    let by_pressure = |a: &&Standard<'_>, b: &&Standard<'_>| a.pressure.cmp(&b.pressure);
+    let lowest = pressures.iter().min_by(by_pressure);
+    let highest = pressures.iter().max_by(by_pressure);
+    let (Some(lowest), Some(highest)) = (lowest, highest) else {
         return Vec::new();
     };
-    let pascal = (&last.0 - &first.0).abs();
+    let pascal = &highest.pressure - &lowest.pressure;
+    if pascal.is_zero() {
+        return Vec::new();
+    }
+    let (first, second) = match lowest.used_at <= highest.used_at {
+        true => (lowest, highest),
+        false => (highest, lowest),
+    };
     let cost = to_f64(&pascal) * 1e-4 / 1000.0;
     vec![Finding {
         severity: Severity::Note,
@@ -62,13 +64,41 @@ fn pressure(problem: &Problem, text: &Text) -> Vec<Finding> {
         message: format!(
             "{} and {} have standard pressures {} Pa apart. That moves no enthalpy of an ideal \
              gas, and one of a condensed substance of 100 cm³/mol by about {} kJ/mol.",
-            first.1,
-            last.1,
+            first.source,
+            second.source,
             exact_text(&pascal),
             two_digits(cost),
         ),
-        at: text.place(last.2),
+        at: text.place(second.used_at),
     }]
+}
+
+/// A standard pressure in Pa, with the source that states it and the first use of a value of it.
+struct Standard<'a> {
+    pressure: Exact,
+    source: &'a str,
+    used_at: usize,
+}
+
+fn standard_pressures(problem: &Problem) -> Vec<Standard<'_>> {
+    let enthalpies = problem
+        .values
+        .iter()
+        .filter(|v| v.kind == ValueKind::FormationEnthalpy);
+    let mut seen = BTreeSet::new();
+    let of_source = |value: &ValueUsed| {
+        let head = &problem.sources[value.source].head;
+        let pressure = head.pressure.as_ref()?.value_in_si();
+        seen.insert(value.source).then(|| Standard {
+            pressure,
+            source: problem.sources[value.source].id(),
+            used_at: value.used_at.start,
+        })
+    };
+    enthalpies
+        .filter(|v| !v.printed.exact)
+        .filter_map(of_source)
+        .collect()
 }
 
 /// A formation enthalpy at another temperature is off by ΔCp of the formation reaction times the
@@ -80,7 +110,9 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
     for term in &reaction.terms {
         let value = &problem.values[problem.substances[term.substance].value];
         let head = &problem.sources[value.source].head;
-        let Some(reference) = head.temperature.as_ref() else { continue };
+        let Some(reference) = head.temperature.as_ref() else {
+            continue;
+        };
         let kelvin = conventional_temperature() - reference.value_in_si();
         if kelvin.is_zero() || value.printed.exact {
             continue;
@@ -98,7 +130,10 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
         return None;
     }
     let size = match unknown.is_empty() {
-        true => format!("moves the heat by about {} kJ/mol", two_digits(cost / 1000.0)),
+        true => format!(
+            "moves the heat by about {} kJ/mol",
+            two_digits(cost / 1000.0)
+        ),
         false => format!(
             "moves the heat by an amount not known here, because no consulted source gives the \
              heat capacities that the formation of {} needs (100 J/(mol K) would make {} kJ/mol \
@@ -107,8 +142,13 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
             two_digits(0.1)
         ),
     };
+    // A heat that is off by an unknown amount does not hold.
+    let severity = match unknown.is_empty() {
+        true => Severity::Caution,
+        false => Severity::Stop,
+    };
     Some((
-        Severity::Caution,
+        severity,
         FindingCode::ReferenceTemperature,
         format!(
             "{}: {} gives values for another reference temperature than 298.15 K. They are used \
@@ -157,7 +197,9 @@ fn states(problem: &Problem, reaction: &ProblemReaction) -> Vec<Said> {
             };
             let atoms = net_atoms(problem, reaction, index, *element);
             if usual != state && !atoms.is_zero() {
-                said.push(mixed_state(problem, reaction, index, *element, state, &atoms));
+                said.push(mixed_state(
+                    problem, reaction, index, *element, state, &atoms,
+                ));
             }
         }
     }
@@ -165,7 +207,12 @@ fn states(problem: &Problem, reaction: &ProblemReaction) -> Vec<Said> {
 }
 
 /// Σ ν·n of an element over the terms whose value comes from one source.
-fn net_atoms(problem: &Problem, reaction: &ProblemReaction, source: usize, element: Element) -> Exact {
+fn net_atoms(
+    problem: &Problem,
+    reaction: &ProblemReaction,
+    source: usize,
+    element: Element,
+) -> Exact {
     let atoms = reaction.terms.iter().map(|term| {
         let substance = &problem.substances[term.substance];
         let count = substance.species.formula.counts().get(&element);
@@ -190,18 +237,22 @@ fn mixed_state(
     let cost = match state_enthalpy(problem, state) {
         Some(kilojoule) => {
             let per_atom = state.formula.counts().get(&element).cloned();
-            let total = kilojoule * atoms / per_atom.unwrap_or_else(|| Exact::from_integer(1.into()));
+            let total =
+                kilojoule * atoms / per_atom.unwrap_or_else(|| Exact::from_integer(1.into()));
             format!("moves the heat by {} kJ/mol", two_digits(to_f64(&total)))
         }
-        None => format!("moves the heat by {} times the enthalpy of {state}, which no consulted \
-                         source gives", exact_text(atoms)),
+        None => format!(
+            "moves the heat by {} times the enthalpy of {state}, which no consulted \
+                         source gives",
+            exact_text(atoms)
+        ),
     };
     (
         Severity::Stop,
         FindingCode::ReferenceState,
         format!(
             "{}: {id} counts {symbol} from {state}, the others from its usual reference state. \
-             {} atoms of {symbol} do not cancel within {id}: that {cost}. Take all substances with \
+             {} mol of {symbol} does not cancel within {id}: that {cost}. Take all substances with \
              {symbol} from one source.",
             reaction.id,
             exact_text(atoms)
@@ -212,11 +263,13 @@ fn mixed_state(
 /// The formation enthalpy of an unusual reference state on the conventional scale, kJ/mol.
 fn state_enthalpy(problem: &Problem, state: &Species) -> Option<Exact> {
     let kilo = Exact::from_integer(1000.into());
-    problem.sources[..problem.consulted].iter().find_map(|source| {
-        let counted_from_it = source.head.reference_states.iter().any(|(_, s)| s == state);
-        let entries = source.of_composition(&state.formula.hill());
-        let entry = entries.iter().find(|e| e.notations().any(|s| s == state))?;
-        let value = entry.formation_enthalpy.as_ref()?;
-        (!counted_from_it).then(|| value.value_in_si() / &kilo)
-    })
+    problem.sources[..problem.consulted]
+        .iter()
+        .find_map(|source| {
+            let counted_from_it = source.head.reference_states.iter().any(|(_, s)| s == state);
+            let entries = source.of_composition(&state.formula.hill());
+            let entry = entries.iter().find(|e| e.notations().any(|s| s == state))?;
+            let value = entry.formation_enthalpy.as_ref()?;
+            (!counted_from_it).then(|| value.value_in_si() / &kilo)
+        })
 }

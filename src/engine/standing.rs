@@ -15,7 +15,10 @@ const MOST: usize = 8;
 pub(super) fn not_compared(problem: &Problem, text: &Text) -> Vec<Finding> {
     let mut groups: BTreeMap<(usize, Standing), Vec<&ValueUsed>> = BTreeMap::new();
     for value in problem.values.iter().filter(|v| !v.standing.is_compared()) {
-        groups.entry((value.source, value.standing)).or_default().push(value);
+        groups
+            .entry((value.source, value.standing))
+            .or_default()
+            .push(value);
     }
     let finding = |((source, standing), values): (&(usize, Standing), &Vec<&ValueUsed>)| Finding {
         severity: Severity::Caution,
@@ -31,13 +34,67 @@ pub(super) fn not_compared(problem: &Problem, text: &Text) -> Vec<Finding> {
     groups.iter().map(finding).collect()
 }
 
+/// A caution for values whose entries do not say where in the source they stand.
+pub(super) fn not_located(problem: &Problem, text: &Text) -> Vec<Finding> {
+    let silent = problem
+        .values
+        .iter()
+        .filter(|v| v.locator.trim().is_empty());
+    let silent: Vec<&ValueUsed> = silent.collect();
+    let Some(first) = silent.first() else {
+        return Vec::new();
+    };
+    vec![Finding {
+        severity: Severity::Caution,
+        code: FindingCode::NotLocated,
+        message: format!(
+            "{} without a locator: a checker cannot find the value. Give each entry its table and \
+             page.",
+            named_values(problem, &silent)
+        ),
+        at: text.place(first.used_at.start),
+    }]
+}
+
+/// ASTM E29: an integer with trailing zeros has digits that nobody can count.
+pub(super) fn uncounted_zeros(problem: &Problem, text: &Text) -> Vec<Finding> {
+    let unclear = problem.values.iter().filter(|v| v.printed.ambiguous_zeros);
+    let unclear: Vec<&ValueUsed> = unclear.collect();
+    let Some(first) = unclear.first() else {
+        return Vec::new();
+    };
+    vec![Finding {
+        severity: Severity::Note,
+        code: FindingCode::UncountedZeros,
+        message: format!(
+            "The zeros at the end of the values of {} may or may not be significant; they are \
+             taken at the coarsest reading. Write them as 1.200e3, or give the stated uncertainty.",
+            named_values(problem, &unclear)
+        ),
+        at: text.place(first.used_at.start),
+    }]
+}
+
+fn named_values(problem: &Problem, values: &[&ValueUsed]) -> String {
+    list(values.iter().map(|value| {
+        format!(
+            "{} ({})",
+            value.substance,
+            problem.sources[value.source].id()
+        )
+    }))
+}
+
 /// A note where results rest on a table whose trailing zeros claim nothing.
 pub(super) fn fixed_decimals(problem: &Problem, outcomes: &[Outcome], text: &Text) -> Vec<Finding> {
     let decided: Vec<&Outcome> = outcomes
         .iter()
         .filter(|outcome| outcome.stated_by == StatedBy::FixedDecimals)
         .collect();
-    let first = problem.values.iter().find(|v| v.significance == Significance::Unlimited);
+    let first = problem
+        .values
+        .iter()
+        .find(|v| v.significance == Significance::Unlimited);
     let (Some(first), false) = (first, decided.is_empty()) else {
         return Vec::new();
     };
@@ -58,9 +115,9 @@ pub(super) fn fixed_decimals(problem: &Problem, outcomes: &[Outcome], text: &Tex
 /// A caution where the uncertainty of results does not cover all values used.
 pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -> Vec<Finding> {
     let short: Vec<&Outcome> = outcomes.iter().filter(|o| !o.is_complete()).collect();
-    let Some(first) = short.first() else {
+    if short.is_empty() {
         return Vec::new();
-    };
+    }
     let mut silent: Vec<usize> = Vec::new();
     for outcome in &short {
         for (index, _) in outcome.form.iter() {
@@ -70,29 +127,39 @@ pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -
             }
         }
     }
-    let at = silent.first().map_or(0, |index| problem.values[*index].used_at.start);
+    let at = silent
+        .first()
+        .map_or(0, |index| problem.values[*index].used_at.start);
     vec![Finding {
         severity: Severity::Caution,
         code: FindingCode::UncertaintyIncomplete,
         message: format!(
-            "The uncertainty of {} covers {} of {} values used: {} not stated, which is not zero.",
+            "The uncertainty of {} does not cover every value used: {} not stated, which is not \
+             zero.",
             named(&short),
-            first.combined.stated,
-            first.combined.of,
-            list(silent.iter().map(|index| {
-                let value = &problem.values[*index];
-                format!("{} ({})", value.substance, problem.sources[value.source].id())
-            })),
+            named_values(
+                problem,
+                &silent
+                    .iter()
+                    .map(|i| &problem.values[*i])
+                    .collect::<Vec<_>>()
+            ),
         ),
         at: text.place(at),
     }]
 }
 
 /// A note where the case asks for a finer place than the values carry.
-pub(super) fn rounding_finer(outcomes: &[Outcome], at: impl Fn(&str) -> crate::finding::Place) -> Vec<Finding> {
+pub(super) fn rounding_finer(
+    outcomes: &[Outcome],
+    at: impl Fn(&str) -> crate::finding::Place,
+) -> Vec<Finding> {
     let finer = |outcome: &&Outcome| {
         outcome.stated_by == StatedBy::Rounding
-            && outcome.remark.as_ref().is_some_and(|remark| outcome.stated.place < remark.place)
+            && outcome
+                .remark
+                .as_ref()
+                .is_some_and(|remark| outcome.stated.place < remark.place)
     };
     let finding = |outcome: &Outcome| Finding {
         severity: Severity::Caution,
@@ -102,7 +169,10 @@ pub(super) fn rounding_finer(outcomes: &[Outcome], at: impl Fn(&str) -> crate::f
             outcome.id,
             outcome.stated.value_text,
             outcome.unit.symbol(),
-            outcome.remark.as_ref().map_or("less", |r| r.value_text.as_str()),
+            outcome
+                .remark
+                .as_ref()
+                .map_or("less", |r| r.value_text.as_str()),
         ),
         at: at(&outcome.id),
     };
@@ -116,7 +186,12 @@ fn named(outcomes: &[&Outcome]) -> String {
 /// The first few items of a list, with the number of those left out.
 pub(super) fn list(items: impl Iterator<Item = String>) -> String {
     let items: Vec<String> = items.collect();
-    let shown = items.iter().take(MOST).cloned().collect::<Vec<_>>().join(", ");
+    let shown = items
+        .iter()
+        .take(MOST)
+        .cloned()
+        .collect::<Vec<_>>()
+        .join(", ");
     match items.len().saturating_sub(MOST) {
         0 => shown,
         more => format!("{shown} and {more} more"),

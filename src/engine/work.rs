@@ -22,10 +22,7 @@ impl WorkOptions<'_> {
     /// The place that the case states a result to, in the result's own unit.
     pub(super) fn place_for(&self, id: &str, unit: &Unit) -> Option<i64> {
         let rule = self.rounding.iter().find(|rule| rule.result.value == id)?;
-        match rule.unit.dimension() == unit.dimension() {
-            true => place_in(rule.place, &rule.unit, unit),
-            false => None,
-        }
+        place_in(rule.place, &rule.unit, unit)
     }
 
     fn unit(&self, over: &Unit) -> Unit {
@@ -51,7 +48,9 @@ impl Working {
 
     /// Whether a finding says that the working does not hold.
     pub fn is_stopped(&self) -> bool {
-        self.findings.iter().any(|finding| finding.severity == Severity::Stop)
+        self.findings
+            .iter()
+            .any(|finding| finding.severity == Severity::Stop)
     }
 }
 
@@ -76,15 +75,31 @@ pub fn work(problem: &Problem, options: &WorkOptions<'_>) -> Working {
         work_reaction(problem, options, index, reaction, &mut working);
     }
     let text = options.text;
-    working.findings.extend(reference::check(problem, &working, text));
-    working.findings.extend(standing::not_compared(problem, text));
-    working.findings.extend(standing::fixed_decimals(problem, &working.outcomes, text));
-    working.findings.extend(standing::incomplete(problem, &working.outcomes, text));
+    working
+        .findings
+        .extend(reference::check(problem, &working, text));
+    working
+        .findings
+        .extend(standing::not_compared(problem, text));
+    working
+        .findings
+        .extend(standing::not_located(problem, text));
+    working
+        .findings
+        .extend(standing::uncounted_zeros(problem, text));
+    working
+        .findings
+        .extend(standing::fixed_decimals(problem, &working.outcomes, text));
+    working
+        .findings
+        .extend(standing::incomplete(problem, &working.outcomes, text));
     let at = |id: &str| {
         let rule = options.rounding.iter().find(|rule| rule.result.value == id);
         text.place(rule.map_or(0, |rule| rule.span.start))
     };
-    working.findings.extend(standing::rounding_finer(&working.outcomes, at));
+    working
+        .findings
+        .extend(standing::rounding_finer(&working.outcomes, at));
     working
 }
 
@@ -116,7 +131,15 @@ fn work_reaction(
         hess.form.clone(),
     ));
     let mass = molar_mass(problem, reaction);
-    work_per(problem, options, reaction, &hess, mass.as_ref(), &unit, working);
+    work_per(
+        problem,
+        options,
+        reaction,
+        &hess,
+        mass.as_ref(),
+        &unit,
+        working,
+    );
     working.reactions.push(ReactionWorking {
         reaction: index,
         hess: Some(hess),

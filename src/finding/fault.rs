@@ -100,7 +100,14 @@ impl Fault {
         advice: impl Into<String>,
     ) -> Fault {
         let text = Text::new(file, "");
-        Fault::new(FaultCode::File, &text, &(0..0), found.into(), expected, advice)
+        Fault::new(
+            FaultCode::File,
+            &text,
+            &(0..0),
+            found.into(),
+            expected,
+            advice,
+        )
     }
 }
 
@@ -108,7 +115,10 @@ fn excerpt(text: &Text, place: &Place, span: &Span) -> (String, (usize, usize)) 
     let line: Vec<char> = text.line(place.line).chars().collect();
     let start = (place.column - 1).min(line.len());
     let marked = text.slice(span).lines().next().unwrap_or("");
-    let length = marked.chars().count().clamp(1, line.len().max(start + 1) - start);
+    let length = marked
+        .chars()
+        .count()
+        .clamp(1, line.len().max(start + 1) - start);
     let from = start.saturating_sub(CONTEXT);
     let to = (start + length.min(CONTEXT) + CONTEXT).min(line.len());
     let head = if from > 0 { "…" } else { "" };
@@ -141,6 +151,10 @@ impl Faults {
 
     pub fn is_empty(&self) -> bool {
         self.list.is_empty()
+    }
+
+    pub fn len(&self) -> usize {
+        self.list.len()
     }
 
     pub fn extend(&mut self, other: Faults) {

@@ -28,12 +28,12 @@ impl fmt::Display for Severity {
 /// Which check speaks; the word is stable and stands in records and JSON.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
 pub enum FindingCode {
-    AtomicWeightUncertainty,
     ChoiceOverrides,
     FixedDecimals,
     HoldOpen,
     IdentityByFormula,
     NotCompared,
+    NotLocated,
     ReferencePressure,
     ReferenceState,
     ReferenceTemperature,
@@ -48,12 +48,12 @@ pub enum FindingCode {
 impl FindingCode {
     pub fn word(self) -> &'static str {
         match self {
-            FindingCode::AtomicWeightUncertainty => "atomic-weight-uncertainty",
             FindingCode::ChoiceOverrides => "choice-overrides",
             FindingCode::FixedDecimals => "fixed-decimals",
             FindingCode::HoldOpen => "hold-open",
             FindingCode::IdentityByFormula => "identity-by-formula",
             FindingCode::NotCompared => "not-compared",
+            FindingCode::NotLocated => "not-located",
             FindingCode::ReferencePressure => "reference-pressure",
             FindingCode::ReferenceState => "reference-state",
             FindingCode::ReferenceTemperature => "reference-temperature",

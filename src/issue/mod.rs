@@ -8,11 +8,11 @@ use std::path::PathBuf;
 use crate::calculation::Calculation;
 use crate::case::Status;
 use crate::finding::Fault;
-use crate::record::{AttachedFile, Record, Typesetting, assemble};
+use crate::record::{Record, Typesetting, assemble};
 use crate::source::SourceFiles;
-use crate::typeset::{Attachment, Relationship, TYPESETTER, TypesetError, fonts, template_sha256, typeset};
+use crate::typeset::{TYPESETTER, TypesetError, fonts, template_sha256, typeset};
 
-pub use place::{Placed, PlaceError, place};
+pub use place::{PlaceError, Placed, place};
 
 /// A record that is typeset and not yet written.
 #[derive(Debug)]
@@ -44,8 +44,7 @@ pub fn issue(calculation: &Calculation, files: &dyn SourceFiles) -> Result<Issue
     if !faults.is_empty() {
         return Err(IssueError::Characters(faults));
     }
-    let attachments: Vec<Attachment> = record.attachments.iter().map(attachment).collect();
-    let pdf = typeset(&record.pages, &attachments).map_err(IssueError::Typeset)?;
+    let pdf = typeset(&record.pages, &record.attachments).map_err(IssueError::Typeset)?;
     let file_name = format!("{}-{}.pdf", head.number.value, head.revision.value);
     Ok(Issue {
         record,
@@ -54,24 +53,14 @@ pub fn issue(calculation: &Calculation, files: &dyn SourceFiles) -> Result<Issue
     })
 }
 
-fn typesetting() -> Typesetting {
-    let fonts = fonts().into_iter().map(|font| (font.name.to_string(), font.sha256.to_string()));
+/// What the typesetter brings to a record: its version, the template and the fonts.
+pub fn typesetting() -> Typesetting {
+    let fonts = fonts()
+        .into_iter()
+        .map(|font| (font.name.to_string(), font.sha256.to_string()));
     Typesetting {
         version: TYPESETTER.to_string(),
         template_sha256: template_sha256(),
         fonts: fonts.collect(),
-    }
-}
-
-fn attachment(file: &AttachedFile) -> Attachment {
-    Attachment {
-        name: file.name.clone(),
-        bytes: file.bytes.clone(),
-        relationship: match file.is_source {
-            true => Relationship::Source,
-            false => Relationship::Data,
-        },
-        media_type: file.media_type,
-        description: file.description.clone(),
     }
 }

@@ -19,7 +19,9 @@ pub enum Placed {
     /// The very same bytes were there.
     Unchanged,
     /// An unsigned record with this stamp was replaced.
-    Replaced { stamp: String },
+    Replaced {
+        stamp: String,
+    },
     /// A signed record of the same content was left alone.
     SignedKept,
 }
@@ -28,7 +30,9 @@ pub enum Placed {
 #[derive(Debug)]
 pub enum PlaceError {
     /// A signed record with another stamp is there.
-    Signed { stamp: String },
+    Signed {
+        stamp: String,
+    },
     /// Something is there that is not a record.
     Foreign(String),
     Io(io::Error),

@@ -84,7 +84,9 @@ fn is_signature(dict: &Dict<'_>) -> bool {
 
 /// A file specification with its embedded file (ISO 32000-2, 7.11).
 fn embedded(dict: &Dict<'_>) -> Result<Option<Embedded>, PdfError> {
-    let is_specification = dict.get::<Name<'_>>("Type").is_some_and(|t| t.as_str() == "Filespec");
+    let is_specification = dict
+        .get::<Name<'_>>("Type")
+        .is_some_and(|t| t.as_str() == "Filespec");
     let files = dict.get::<Dict<'_>>("EF");
     let (true, Some(files)) = (is_specification, files) else {
         return Ok(None);
@@ -106,7 +108,9 @@ fn embedded(dict: &Dict<'_>) -> Result<Option<Embedded>, PdfError> {
 fn text(bytes: &[u8]) -> String {
     match bytes {
         [0xFE, 0xFF, rest @ ..] => {
-            let units = rest.chunks_exact(2).map(|pair| u16::from_be_bytes([pair[0], pair[1]]));
+            let units = rest
+                .chunks_exact(2)
+                .map(|pair| u16::from_be_bytes([pair[0], pair[1]]));
             String::from_utf16_lossy(&units.collect::<Vec<_>>())
         }
         [0xEF, 0xBB, 0xBF, rest @ ..] => String::from_utf8_lossy(rest).into_owned(),
@@ -126,7 +130,10 @@ mod tests {
 
     #[test]
     fn what_is_no_pdf_is_said_to_be_none() {
-        assert_eq!(RecordFile::read(b"hello".to_vec()).err(), Some(PdfError::NotPdf));
+        assert_eq!(
+            RecordFile::read(b"hello".to_vec()).err(),
+            Some(PdfError::NotPdf)
+        );
     }
 
     #[test]

@@ -12,6 +12,7 @@
 //! | `decimal` | [`Decimal`]: a number as printed |
 //! | `exact` | [`Exact`]: rational numbers, their text and their one rounding |
 //! | `nearest_float` | [`to_f64`]: the floating-point number nearest to an exact one |
+//! | `full_text` | numbers of a working, before anything is rounded |
 //! | `real` | [`Real`]: exact while it can be, floating point after that |
 //! | `dimension`, `unit`, `unit_table`, `unit_lookup`, `unit_tokens`, `unit_parse` | [`Unit`] |
 //! | `printed_quantity`, `quantity_parse` | [`Quantity`]: value, unit, stated uncertainty |
@@ -26,6 +27,7 @@ mod decimal;
 mod decimal_error;
 mod dimension;
 mod exact;
+mod full_text;
 mod linear_form;
 mod message;
 mod nearest_float;
@@ -54,6 +56,7 @@ pub use exact::{
     Exact, Rounded, exact_text, order_of_magnitude, power_of_ten, round_to_place,
     terminating_decimal,
 };
+pub use full_text::full_text;
 pub use linear_form::LinearForm;
 pub use nearest_float::to_f64;
 pub use printed_quantity::Quantity;

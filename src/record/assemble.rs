@@ -3,7 +3,7 @@
 use crate::calculation::Calculation;
 use crate::source::sha256_hex;
 
-use super::attachments::{AttachedFile, attached_files};
+use super::attachments::{Attachment, attached_files};
 use super::manifest::Typesetting;
 use super::pages::{AttachmentRow, CONTRACT, Pages, Program, Stamp};
 use super::working::working_sections;
@@ -13,7 +13,7 @@ use super::{basis_rows, budget, cautions, front, prose, references, result_rows,
 #[derive(Clone, Debug)]
 pub struct Record {
     pub pages: Pages,
-    pub attachments: Vec<AttachedFile>,
+    pub attachments: Vec<Attachment>,
 }
 
 impl Record {
@@ -53,11 +53,11 @@ pub fn assemble(calculation: &Calculation, typesetting: &Typesetting) -> Record 
     Record { pages, attachments }
 }
 
-fn attachment_row(file: &AttachedFile) -> AttachmentRow {
+fn attachment_row(file: &Attachment) -> AttachmentRow {
     AttachmentRow {
         name: file.name.clone(),
         description: file.description.clone(),
-        relationship: if file.is_source { "Source" } else { "Data" }.to_string(),
+        relationship: file.relationship.word().to_string(),
         media_type: file.media_type.to_string(),
     }
 }

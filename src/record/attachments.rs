@@ -6,13 +6,31 @@ use crate::source::{attachment_name, excerpts};
 use super::manifest::{Identity, MANIFEST_NAME, Manifest, ManifestInput, Typesetting};
 use super::results_json::results_json;
 
+/// How an attached file relates to the pages (AFRelationship, ISO 19005-3, 6.8).
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Relationship {
+    /// The pages were made from it.
+    Source,
+    /// It holds the data that the pages show.
+    Data,
+}
+
+impl Relationship {
+    pub fn word(self) -> &'static str {
+        match self {
+            Relationship::Source => "Source",
+            Relationship::Data => "Data",
+        }
+    }
+}
+
 /// A file attached to a record.
 #[derive(Clone, Debug, PartialEq, Eq)]
-pub struct AttachedFile {
+pub struct Attachment {
+    /// Flat name: no folder, no separator.
     pub name: String,
     pub bytes: Vec<u8>,
-    /// Whether the record was made from it (AFRelationship Source) or it holds data (Data).
-    pub is_source: bool,
+    pub relationship: Relationship,
     pub media_type: &'static str,
     pub description: String,
 }
@@ -21,7 +39,7 @@ pub struct AttachedFile {
 pub(super) fn attached_files(
     calculation: &Calculation,
     typesetting: &Typesetting,
-) -> Vec<AttachedFile> {
+) -> Vec<Attachment> {
     let mut files = vec![case_file(calculation)];
     files.extend(source_files(calculation));
     files.push(data_file(
@@ -38,32 +56,35 @@ pub(super) fn attached_files(
     files
 }
 
-fn case_file(calculation: &Calculation) -> AttachedFile {
-    AttachedFile {
+fn case_file(calculation: &Calculation) -> Attachment {
+    Attachment {
         name: crate::case::CASE_NAME.to_string(),
         bytes: calculation.text.as_str().as_bytes().to_vec(),
-        is_source: true,
+        relationship: Relationship::Source,
         media_type: "application/toml",
         description: "The case as the preparer wrote it".to_string(),
     }
 }
 
-fn source_files(calculation: &Calculation) -> Vec<AttachedFile> {
-    let named = |(name, text): (String, String)| AttachedFile {
+fn source_files(calculation: &Calculation) -> Vec<Attachment> {
+    let named = |(name, text): (String, String)| Attachment {
         name,
         bytes: text.into_bytes(),
-        is_source: false,
+        relationship: Relationship::Data,
         media_type: "application/toml",
         description: "Entries of a source that decided something".to_string(),
     };
-    excerpts(&calculation.problem).into_iter().map(named).collect()
+    excerpts(&calculation.problem)
+        .into_iter()
+        .map(named)
+        .collect()
 }
 
-fn data_file(name: &str, text: String, description: &str) -> AttachedFile {
-    AttachedFile {
+fn data_file(name: &str, text: String, description: &str) -> Attachment {
+    Attachment {
         name: name.to_string(),
         bytes: text.into_bytes(),
-        is_source: false,
+        relationship: Relationship::Data,
         media_type: "application/json",
         description: description.to_string(),
     }
@@ -72,13 +93,14 @@ fn data_file(name: &str, text: String, description: &str) -> AttachedFile {
 fn manifest(
     calculation: &Calculation,
     typesetting: &Typesetting,
-    files: &[AttachedFile],
+    files: &[Attachment],
 ) -> Manifest {
     let head = &calculation.case.record;
     let problem = &calculation.problem;
-    let became = problem.became.iter().map(|(name, index)| {
-        (name.clone(), attachment_name(problem.sources[*index].id()))
-    });
+    let became = problem
+        .became
+        .iter()
+        .map(|(name, index)| (name.clone(), attachment_name(problem.sources[*index].id())));
     Manifest::of(&ManifestInput {
         identity: Identity {
             number: head.number.value.clone(),
@@ -87,6 +109,9 @@ fn manifest(
         engine: format!("{} {}", env!("CARGO_PKG_NAME"), env!("CARGO_PKG_VERSION")),
         typesetting,
         consult: became.collect(),
-        attachments: files.iter().map(|f| (f.name.as_str(), f.bytes.as_slice())).collect(),
+        attachments: files
+            .iter()
+            .map(|f| (f.name.as_str(), f.bytes.as_slice()))
+            .collect(),
     })
 }

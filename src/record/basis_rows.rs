@@ -8,8 +8,14 @@ use super::pages::{AssumptionRow, Basis, HoldRow, InputRow};
 pub(super) fn basis(case: &Case) -> Basis {
     let mut holds = Holds::default();
     let assumptions = case.assumptions.iter().enumerate();
-    let assumptions = assumptions.map(|(i, a)| assumption_row(i + 1, a, &mut holds)).collect();
-    let inputs = case.inputs.values().map(|input| input_row(input, &mut holds)).collect();
+    let assumptions = assumptions
+        .map(|(i, a)| assumption_row(i + 1, a, &mut holds))
+        .collect();
+    let inputs = case
+        .inputs
+        .values()
+        .map(|input| input_row(input, &mut holds))
+        .collect();
     Basis {
         inputs,
         assumptions,
@@ -28,7 +34,9 @@ impl Holds {
         let hold = hold?;
         let number = self.rows.len() + 1;
         let accepted = hold.accepted_by.as_ref();
-        let accepted = accepted.map_or(String::new(), |n| format!(" (open at issue: accepted by {n})"));
+        let accepted = accepted.map_or(String::new(), |n| {
+            format!(" (open at issue: accepted by {n})")
+        });
         self.rows.push(HoldRow {
             number,
             what: format!("{what}{accepted}"),
@@ -55,7 +63,10 @@ fn input_row(input: &Input, holds: &mut Holds) -> InputRow {
         id: input.id.value.clone(),
         value: printed(&input.value.value),
         tolerance: input.tolerance.as_ref().map(|t| format!("±{}", printed(t))),
-        source: input.source.clone().unwrap_or_else(|| "none stated".to_string()),
+        source: input
+            .source
+            .clone()
+            .unwrap_or_else(|| "none stated".to_string()),
         confirmed: input.confirmed,
         hold: holds.number(what, input.hold.as_ref()),
     }

@@ -14,20 +14,23 @@ use super::value_rows::substance;
 pub(super) fn budgets(calculation: &Calculation) -> Vec<Budget> {
     let outcomes = calculation.working.outcomes.iter();
     let outcomes = outcomes.filter(|outcome| !outcome.form.is_empty());
-    outcomes.map(|outcome| budget(&calculation.problem, outcome)).collect()
+    outcomes
+        .map(|outcome| budget(&calculation.problem, outcome))
+        .collect()
 }
 
 fn budget(problem: &Problem, outcome: &Outcome) -> Budget {
-    let counted = |(index, _): &(usize, &Real)| {
-        problem.values[*index].uncertainty != InputUncertainty::Exact
-    };
+    let counted =
+        |(index, _): &(usize, &Real)| problem.values[*index].uncertainty != InputUncertainty::Exact;
     let rows = outcome.form.iter().filter(counted);
     Budget {
         result: outcome.id.clone(),
         unit: unit(&outcome.unit),
-        rows: rows.map(|(index, s)| budget_row(problem, outcome, index, s)).collect(),
-        standard: outcome.combined.standard.map(two_digits),
-        expanded: outcome.expanded.map(two_digits),
+        rows: rows
+            .map(|(index, s)| budget_row(problem, outcome, index, s))
+            .collect(),
+        standard: outcome.combined.standard.map(|u| minus(&two_digits(u))),
+        expanded: outcome.expanded.map(|u| minus(&two_digits(u))),
         coverage: coverage(outcome),
         remark: remark(problem, outcome),
     }
@@ -46,18 +49,27 @@ fn budget_row(problem: &Problem, outcome: &Outcome, index: usize, sensitivity: &
         value_used: index + 1,
         substance: substance(value),
         standard: standard.map_or("not stated".into(), |u| {
-            format!("{} {}", two_digits(u), unit(&value.printed.unit))
+            let text = format!(
+                "{}\u{a0}{}",
+                minus(&two_digits(u)),
+                unit(&value.printed.unit)
+            );
+            text.trim_end().to_string()
         }),
         sensitivity: minus(&short(sensitivity)),
-        contribution: standard.map_or("–".into(), |u| two_digits(f64::abs(size) * u)),
-        share: share.map_or("–".into(), |share| format!("{:.1} %", share * 100.0)),
+        contribution: standard.map_or("–".into(), |u| minus(&two_digits(f64::abs(size) * u))),
+        share: share.map_or("–".into(), |share| {
+            minus(&format!("{:.1} %", share * 100.0))
+        }),
         share_permille: share.and_then(permille),
     }
 }
 
 /// An exact sensitivity as it is, another to three digits.
 fn short(sensitivity: &Real) -> String {
-    let exact = sensitivity.exact().and_then(crate::quantity::terminating_decimal);
+    let exact = sensitivity
+        .exact()
+        .and_then(crate::quantity::terminating_decimal);
     match exact {
         Some(text) if text.len() <= 7 => text,
         _ => {
@@ -71,13 +83,16 @@ fn short(sensitivity: &Real) -> String {
 /// A share as thousandths for a bar; correlated values can have a negative one, without a bar.
 fn permille(share: f64) -> Option<u32> {
     let permille = libm::round(share * 1000.0);
-    (0.0..=1000.0).contains(&permille).then_some(permille as u32)
+    (0.0..=1000.0)
+        .contains(&permille)
+        .then_some(permille as u32)
 }
 
 fn remark(problem: &Problem, outcome: &Outcome) -> Option<String> {
-    let correlated = problem.correlations.pairs().any(|(a, b)| {
-        outcome.form.get(a).is_some() && outcome.form.get(b).is_some()
-    });
+    let correlated = problem
+        .correlations
+        .pairs()
+        .any(|(a, b)| outcome.form.get(a).is_some() && outcome.form.get(b).is_some());
     let mut remarks = Vec::new();
     if !outcome.is_complete() {
         remarks.push(format!(

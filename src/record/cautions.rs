@@ -32,5 +32,5 @@ pub(super) const VERIFICATION: [&str; 3] = [
 
 /// What it takes to run the record again.
 pub(super) const RERUN: &str = "The attachments hold the case, every source entry that decided \
-    something, the results and the manifest. `hesswright extract` writes them out; `hesswright \
-    compute case.toml` there works them again.";
+    something, the results and the manifest. The command “hesswright extract” writes them out; \
+    “hesswright compute case.toml” works them again there.";

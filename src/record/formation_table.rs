@@ -74,15 +74,22 @@ fn written(equation: &FormationEquation, turned: bool) -> Rich {
 }
 
 fn side(terms: &[(Exact, Species)]) -> Rich {
-    terms.iter().enumerate().fold(Rich::default(), |text, (i, (count, species))| {
-        let plus = if i == 0 { "" } else { " + " };
-        text.and(format!("{plus}{}", coefficient(count))).with(Rich::from(species.pieces()))
-    })
+    terms
+        .iter()
+        .enumerate()
+        .fold(Rich::default(), |text, (i, (count, species))| {
+            let plus = if i == 0 { "" } else { " + " };
+            text.and(format!("{plus}{}", coefficient(count)))
+                .with(Rich::from(species.pieces()))
+        })
 }
 
 fn target(problem: &Problem, reaction: &ProblemReaction) -> Rich {
     let part = |negative: bool| -> Vec<(Exact, Species)> {
-        let terms = reaction.terms.iter().filter(|t| t.nu.is_negative() == negative);
+        let terms = reaction
+            .terms
+            .iter()
+            .filter(|t| t.nu.is_negative() == negative);
         let species = |index: usize| problem.substances[index].species.clone();
         terms.map(|t| (t.nu.abs(), species(t.substance))).collect()
     };
@@ -117,7 +124,10 @@ pub(super) fn cancelled(problem: &Problem, reaction: &ProblemReaction) -> Rich {
 
 /// For each reference state: how much the formations of the products use, and how much the
 /// turned formations of the reactants give back.
-fn reference_amounts(problem: &Problem, reaction: &ProblemReaction) -> Vec<(Exact, Exact, Species)> {
+fn reference_amounts(
+    problem: &Problem,
+    reaction: &ProblemReaction,
+) -> Vec<(Exact, Exact, Species)> {
     let mut amounts: Vec<(Exact, Exact, Species)> = Vec::new();
     for term in &reaction.terms {
         let species = &problem.substances[term.substance].species;
@@ -126,7 +136,11 @@ fn reference_amounts(problem: &Problem, reaction: &ProblemReaction) -> Vec<(Exac
         };
         let of_elements = equation.left.iter().map(|part| (part, false));
         // The electron of a cation's formation stands on the other side.
-        let others = equation.right.iter().filter(|(_, s)| s != species).map(|part| (part, true));
+        let others = equation
+            .right
+            .iter()
+            .filter(|(_, s)| s != species)
+            .map(|part| (part, true));
         for ((count, state), other_side) in of_elements.chain(others) {
             let amount = count * term.nu.abs();
             let given = term.nu.is_negative() != other_side;
@@ -137,10 +151,13 @@ fn reference_amounts(problem: &Problem, reaction: &ProblemReaction) -> Vec<(Exac
 }
 
 fn add(amounts: &mut Vec<(Exact, Exact, Species)>, state: &Species, amount: &Exact, given: bool) {
-    let index = amounts.iter().position(|(_, _, s)| s == state).unwrap_or_else(|| {
-        amounts.push((Exact::zero(), Exact::zero(), state.clone()));
-        amounts.len() - 1
-    });
+    let index = amounts
+        .iter()
+        .position(|(_, _, s)| s == state)
+        .unwrap_or_else(|| {
+            amounts.push((Exact::zero(), Exact::zero(), state.clone()));
+            amounts.len() - 1
+        });
     match given {
         true => amounts[index].1 += amount,
         false => amounts[index].0 += amount,

@@ -54,7 +54,8 @@ pub struct ManifestInput<'a> {
 impl Manifest {
     pub fn of(input: &ManifestInput<'_>) -> Manifest {
         let text = |(name, value): &(String, String)| (name.clone(), Value::from(value.clone()));
-        let hash = |(name, bytes): &(&str, &[u8])| (name.to_string(), Value::from(sha256_hex(bytes)));
+        let hash =
+            |(name, bytes): &(&str, &[u8])| (name.to_string(), Value::from(sha256_hex(bytes)));
         Manifest {
             record: input.identity.clone(),
             engine: input.engine.clone(),

@@ -3,10 +3,10 @@
 //! The typesetter builds the equation from the tree; the alternative text that a reader who does
 //! not see it needs is spoken from the same tree, so the two cannot drift apart.
 
-use serde::Serialize;
+use serde::{Deserialize, Serialize};
 
 /// A node of a displayed equation.
-#[derive(Clone, Debug, PartialEq, Eq, Serialize)]
+#[derive(Clone, Debug, PartialEq, Eq, Serialize, Deserialize)]
 #[serde(tag = "node", rename_all = "kebab-case")]
 pub enum Math {
     /// A quantity symbol, set in italics.

@@ -2,44 +2,44 @@
 
 use num_traits::Signed;
 
-use crate::quantity::{
-    Exact, Quantity, Significance, Unit, exact_text, round_to_place, terminating_decimal,
-};
+use crate::quantity::{Exact, Quantity, Significance, Unit, exact_text, full_text};
 
-/// Digits shown of a number whose decimals do not end, beyond its last significant place.
-const GUARD_DIGITS: i64 = 3;
-
-/// The same text with true minus signs in front of numbers.
+/// The same number with a true minus, and powers of ten as they are typeset: 1.200e3 becomes
+/// 1.200 × 10³.
 pub fn minus(text: &str) -> String {
-    text.replace('-', "\u{2212}")
-}
-
-/// A number of the working in full, with the zeros that are significant: −571.660. Where its
-/// decimals do not end, some digits beyond its last place and an ellipsis.
-pub(super) fn in_full(value: &Exact, significance: Significance) -> String {
-    let place = match significance {
-        Significance::Place(place) => place.min(0),
-        Significance::Exact | Significance::Unlimited => 0,
-    };
-    let text = match terminating_decimal(value) {
-        Some(decimal) => pad(decimal, place),
-        None => {
-            let digits = place.min(-1) - GUARD_DIGITS;
-            format!("{}…", round_to_place(value, digits).text)
+    let text = text.replace('-', "\u{2212}");
+    match text.split_once(['e', 'E']) {
+        Some((mantissa, rest)) if mantissa.ends_with(|c: char| c.is_ascii_digit()) => {
+            power_of_ten(mantissa, rest)
         }
-    };
-    minus(&text)
+        _ => text,
+    }
 }
 
-/// Zeros up to a decimal place.
-fn pad(decimal: String, place: i64) -> String {
-    let wanted = usize::try_from(-place).unwrap_or(0);
-    let have = decimal.split_once('.').map_or(0, |(_, part)| part.len());
-    if have >= wanted {
-        return decimal;
+/// `rest` begins with the exponent; what follows it stays.
+fn power_of_ten(mantissa: &str, rest: &str) -> String {
+    let digits = |c: char| c.is_ascii_digit() || c == '+' || c == '\u{2212}';
+    let end = rest.find(|c| !digits(c)).unwrap_or(rest.len());
+    let (exponent, after) = rest.split_at(end);
+    match exponent.is_empty() {
+        true => format!("{mantissa}e{after}"),
+        false => format!("{mantissa}\u{a0}×\u{a0}10{}{after}", superscript(exponent)),
     }
-    let point = if have == 0 { "." } else { "" };
-    format!("{decimal}{point}{}", "0".repeat(wanted - have))
+}
+
+/// A whole number in superscript digits, without a plus sign.
+pub(super) fn superscript(number: &str) -> String {
+    const DIGITS: [char; 10] = ['⁰', '¹', '²', '³', '⁴', '⁵', '⁶', '⁷', '⁸', '⁹'];
+    let set = |c: char| match c.to_digit(10) {
+        Some(digit) => Some(DIGITS[digit as usize]),
+        None => (c != '+').then_some('⁻'),
+    };
+    number.chars().filter_map(set).collect()
+}
+
+/// A number of the working in full, with the zeros that are significant: −571.660.
+pub(super) fn in_full(value: &Exact, significance: Significance) -> String {
+    minus(&full_text(value, significance))
 }
 
 /// A stoichiometric number with its sign: −1, +3/2.
@@ -79,7 +79,24 @@ fn spaced(text: &str) -> String {
     text.replace(' ', "\u{a0}")
 }
 
-/// A unit for people: `kJ/mol`.
+/// A unit for people: `kJ/mol`; nothing for a plain number.
 pub(super) fn unit(unit: &Unit) -> String {
-    spaced(unit.symbol())
+    match unit.symbol() {
+        "1" => String::new(),
+        symbol => spaced(symbol),
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn numbers_are_set_with_a_true_minus_and_powers_of_ten() {
+        assert_eq!(minus("-285.830"), "−285.830");
+        assert_eq!(minus("1.200e3 kg"), "1.200\u{a0}×\u{a0}10³ kg");
+        assert_eq!(minus("-1.5E-12"), "−1.5\u{a0}×\u{a0}10⁻¹²");
+        assert_eq!(minus("exact 0"), "exact 0");
+        assert_eq!(minus("2.1 kJ/(kg K)"), "2.1 kJ/(kg K)");
+    }
 }

@@ -4,7 +4,7 @@
 //! nothing but layout. Numbers arrive as the text that is to be printed. The version of the
 //! contract is [`CONTRACT`]; it rises when a field changes its meaning or disappears.
 
-use serde::Serialize;
+use serde::{Deserialize, Serialize};
 
 use super::math::Math;
 use super::rich::Rich;
@@ -13,7 +13,7 @@ use super::rich::Rich;
 pub const CONTRACT: u32 = 1;
 
 /// Everything that a record's pages say.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Pages {
     pub contract: u32,
@@ -39,7 +39,7 @@ pub struct Pages {
 }
 
 /// Identification of the record; stands on the front sheet and, in short, on every page.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct TitleBlock {
     pub number: String,
@@ -59,7 +59,7 @@ pub struct TitleBlock {
     pub signatures: Vec<SignaturePlace>,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct SignaturePlace {
     /// `preparer`, `checker` or `approver`.
@@ -69,7 +69,7 @@ pub struct SignaturePlace {
 }
 
 /// The SHA-256 that stands for everything the record was computed from.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Stamp {
     /// 64 hexadecimal digits.
@@ -78,7 +78,7 @@ pub struct Stamp {
     pub short: String,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Revision {
     pub revision: String,
@@ -87,7 +87,7 @@ pub struct Revision {
 }
 
 /// A section of the case's prose.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct ProseSection {
     pub heading: String,
@@ -95,7 +95,7 @@ pub struct ProseSection {
 }
 
 /// A block of prose.
-#[derive(Clone, Debug, PartialEq, Eq, Serialize)]
+#[derive(Clone, Debug, PartialEq, Eq, Serialize, Deserialize)]
 #[serde(tag = "block", rename_all = "kebab-case")]
 pub enum Block {
     Paragraph {
@@ -125,7 +125,7 @@ pub enum Block {
 }
 
 /// A result, as stated.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct ResultRow {
     /// `hydrogenation.heat`
@@ -146,7 +146,7 @@ pub struct ResultRow {
 }
 
 /// What the calculation rests on.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Basis {
     pub inputs: Vec<InputRow>,
@@ -154,7 +154,7 @@ pub struct Basis {
     pub holds: Vec<HoldRow>,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct InputRow {
     pub id: String,
@@ -166,7 +166,7 @@ pub struct InputRow {
     pub hold: Option<usize>,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct AssumptionRow {
     pub number: usize,
@@ -176,7 +176,7 @@ pub struct AssumptionRow {
     pub hold: Option<usize>,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct HoldRow {
     pub number: usize,
@@ -187,7 +187,7 @@ pub struct HoldRow {
 }
 
 /// A row of the table of values used.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct ValueRow {
     pub number: usize,
@@ -209,7 +209,7 @@ pub struct ValueRow {
 }
 
 /// The same value in another source that the case consults.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct ComparisonRow {
     pub substance: Rich,
@@ -227,7 +227,7 @@ pub struct ComparisonRow {
 }
 
 /// One part of the working: usually one reaction.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct WorkingSection {
     pub id: String,
@@ -236,7 +236,7 @@ pub struct WorkingSection {
 }
 
 /// One step of a working.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(tag = "step", rename_all = "kebab-case")]
 pub enum Step {
     /// A small heading inside the section.
@@ -263,7 +263,7 @@ pub enum Step {
 }
 
 /// A table of the working.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Table {
     pub caption: String,
@@ -273,7 +273,7 @@ pub struct Table {
     pub total: Option<Vec<Rich>>,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Column {
     pub head: Rich,
@@ -281,7 +281,7 @@ pub struct Column {
     pub kind: ColumnKind,
 }
 
-#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub enum ColumnKind {
     Text,
@@ -290,7 +290,7 @@ pub enum ColumnKind {
 }
 
 /// Which values carry the uncertainty of a result.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Budget {
     pub result: String,
@@ -304,7 +304,7 @@ pub struct Budget {
     pub remark: Option<String>,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct BudgetRow {
     pub value_used: usize,
@@ -320,7 +320,7 @@ pub struct BudgetRow {
     pub share_permille: Option<u32>,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct FindingRow {
     /// `stop`, `caution` or `note`
@@ -332,7 +332,7 @@ pub struct FindingRow {
 }
 
 /// A source in the reference list.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Reference {
     pub number: usize,
@@ -348,7 +348,7 @@ pub struct Reference {
     pub attachment: String,
 }
 
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct AttachmentRow {
     pub name: String,
@@ -359,7 +359,7 @@ pub struct AttachmentRow {
 }
 
 /// The program's identity and the evidence that it is verified.
-#[derive(Clone, Debug, Serialize)]
+#[derive(Clone, Debug, Serialize, Deserialize)]
 #[serde(rename_all = "kebab-case")]
 pub struct Program {
     pub name: String,

@@ -75,11 +75,18 @@ enum Kind {
     Root,
     Paragraph,
     Heading(u8),
-    List { ordered: bool, start: u64, items: Vec<Vec<Block>> },
+    List {
+        ordered: bool,
+        start: u64,
+        items: Vec<Vec<Block>>,
+    },
     Item,
     Quote,
     Code,
-    Table { head: Vec<Rich>, rows: Vec<Vec<Rich>> },
+    Table {
+        head: Vec<Rich>,
+        rows: Vec<Vec<Rich>>,
+    },
     Row,
     Cell,
     /// An element whose content goes to the one around it.
@@ -199,7 +206,15 @@ impl Builder<'_> {
                 let text = text(&mut done);
                 self.block(Block::Heading { level, text });
             }
-            Kind::List { ordered, start, items } => self.block(Block::List { ordered, start, items }),
+            Kind::List {
+                ordered,
+                start,
+                items,
+            } => self.block(Block::List {
+                ordered,
+                start,
+                items,
+            }),
             Kind::Item => {
                 done.settle();
                 if let Kind::List { items, .. } = &mut self.last().kind {
@@ -208,9 +223,13 @@ impl Builder<'_> {
             }
             Kind::Quote => {
                 done.settle();
-                self.block(Block::Quote { blocks: done.blocks });
+                self.block(Block::Quote {
+                    blocks: done.blocks,
+                });
             }
-            Kind::Code => self.block(Block::Code { text: plain(&done.runs) }),
+            Kind::Code => self.block(Block::Code {
+                text: plain(&done.runs),
+            }),
             Kind::Cell => {
                 let text = text(&mut done);
                 self.last().cells.push(text);
@@ -231,7 +250,9 @@ impl Builder<'_> {
     }
 
     fn in_code(&self) -> bool {
-        self.open.last().is_some_and(|open| matches!(open.kind, Kind::Code))
+        self.open
+            .last()
+            .is_some_and(|open| matches!(open.kind, Kind::Code))
     }
 
     fn last(&mut self) -> &mut Open {
@@ -357,7 +378,8 @@ mod tests {
 
     #[test]
     fn lists_tables_and_code_keep_their_structure() {
-        let blocks = read("1. one\n2. **two**\n\n| a | b |\n|---|---|\n| c | d |\n\n```\nx {y}\n```\n");
+        let blocks =
+            read("1. one\n2. **two**\n\n| a | b |\n|---|---|\n| c | d |\n\n```\nx {y}\n```\n");
         assert_eq!(
             blocks[0],
             Block::List {
@@ -377,7 +399,12 @@ mod tests {
                 rows: vec![vec![cell("c"), cell("d")]],
             }
         );
-        assert_eq!(blocks[2], Block::Code { text: "x {y}\n".into() });
+        assert_eq!(
+            blocks[2],
+            Block::Code {
+                text: "x {y}\n".into()
+            }
+        );
     }
 
     #[test]

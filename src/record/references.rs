@@ -10,7 +10,10 @@ use super::pages::Reference;
 /// The number of each source in the reference list, by its index among the problem's sources.
 pub(super) fn numbers(problem: &Problem) -> BTreeMap<usize, usize> {
     let used = problem.values.iter().map(|value| value.source);
-    let compared = problem.substances.iter().flat_map(|s| s.comparisons.iter().map(|c| c.source));
+    let compared = problem
+        .substances
+        .iter()
+        .flat_map(|s| s.comparisons.iter().map(|c| c.source));
     let mut cited: Vec<usize> = used.chain(compared).collect();
     cited.sort_unstable();
     cited.dedup();
@@ -24,12 +27,17 @@ pub(super) fn references(problem: &Problem) -> Vec<Reference> {
 
 fn reference(head: &SourceHead, number: usize) -> Reference {
     let stated = |quantity: &Option<Quantity>| {
-        quantity.as_ref().map_or_else(|| "not stated".to_string(), Quantity::to_string)
+        quantity
+            .as_ref()
+            .map_or_else(|| "not stated".to_string(), Quantity::to_string)
     };
     Reference {
         number,
         id: head.id.clone(),
-        text: head.citation(),
+        text: match &head.note {
+            Some(note) => format!("{} {note}", head.citation()),
+            None => head.citation(),
+        },
         temperature: stated(&head.temperature),
         pressure: stated(&head.pressure),
         licence: head.licence.clone(),

@@ -12,7 +12,11 @@ pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
     for (section, reaction) in calculation.working.reactions.iter().enumerate() {
         let id = &calculation.problem.reactions[reaction.reaction].id;
         let prefix = format!("{id}.");
-        let own = calculation.working.outcomes.iter().filter(|o| o.id.starts_with(&prefix));
+        let own = calculation
+            .working
+            .outcomes
+            .iter()
+            .filter(|o| o.id.starts_with(&prefix));
         rows.extend(own.map(|outcome| result_row(calculation, outcome, section)));
         if reaction.hess.is_none() {
             rows.push(not_worked(id, section));
@@ -52,7 +56,9 @@ fn not_worked(id: &str, section: usize) -> ResultRow {
 pub(super) fn what(calculation: &Calculation, outcome: &Outcome) -> String {
     let (id, quantity) = outcome.id.split_once('.').unwrap_or((&outcome.id, ""));
     let reaction = calculation.case.reactions.get(id);
-    let per = reaction.and_then(|r| r.per.as_ref()).map_or("", |per| per.value.as_str());
+    let per = reaction
+        .and_then(|r| r.per.as_ref())
+        .map_or("", |per| per.value.as_str());
     match quantity {
         "heat" => "Heat of reaction at 298.15 K, per mole of reaction as written".to_string(),
         "heat-per" => format!("Heat of reaction at 298.15 K, per mole of {per}"),
@@ -62,7 +68,9 @@ pub(super) fn what(calculation: &Calculation, outcome: &Outcome) -> String {
 
 /// The expanded uncertainty where it covers every value used, otherwise none.
 pub(super) fn stated_uncertainty(outcome: &Outcome) -> Option<String> {
-    outcome.is_complete().then(|| outcome.stated.uncertainty_text.clone())?
+    outcome
+        .is_complete()
+        .then(|| outcome.stated.uncertainty_text.clone())?
 }
 
 /// What the uncertainty covers, in words.

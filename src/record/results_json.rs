@@ -51,7 +51,10 @@ fn record(calculation: &Calculation) -> Value {
 }
 
 fn results(outcomes: &[Outcome]) -> Map<String, Value> {
-    outcomes.iter().map(|outcome| (outcome.id.clone(), result(outcome))).collect()
+    outcomes
+        .iter()
+        .map(|outcome| (outcome.id.clone(), result(outcome)))
+        .collect()
 }
 
 fn result(outcome: &Outcome) -> Value {
@@ -62,7 +65,10 @@ fn result(outcome: &Outcome) -> Value {
     }
     map.insert("unit".into(), json!(outcome.unit.symbol()));
     map.insert("stated".into(), json!(outcome.stated.value_text));
-    map.insert("standard-uncertainty".into(), json!(outcome.combined.standard));
+    map.insert(
+        "standard-uncertainty".into(),
+        json!(outcome.combined.standard),
+    );
     map.insert("expanded".into(), json!(outcome.expanded));
     map.insert("coverage".into(), json!(COVERAGE));
     map.insert(
@@ -76,7 +82,10 @@ fn result(outcome: &Outcome) -> Value {
 fn budget(outcome: &Outcome) -> Vec<Value> {
     let shares = &outcome.combined.shares;
     let row = |(index, sensitivity): (usize, &Real)| {
-        let share = shares.iter().find(|(of, _)| *of == index).and_then(|(_, share)| *share);
+        let share = shares
+            .iter()
+            .find(|(of, _)| *of == index)
+            .and_then(|(_, share)| *share);
         json!({
             "value-used": index + 1,
             "sensitivity": sensitivity.to_f64(),
@@ -87,7 +96,12 @@ fn budget(outcome: &Outcome) -> Vec<Value> {
 }
 
 fn values_used(problem: &Problem) -> Vec<Value> {
-    problem.values.iter().enumerate().map(|(i, v)| value_used(problem, i, v)).collect()
+    problem
+        .values
+        .iter()
+        .enumerate()
+        .map(|(i, v)| value_used(problem, i, v))
+        .collect()
 }
 
 fn value_used(problem: &Problem, index: usize, value: &ValueUsed) -> Value {

@@ -3,12 +3,12 @@
 //! A [`Rich`] text is a list of runs, each with one of a few roles. Formulas, symbols and plain
 //! words travel this way, so that nothing that a case says can become markup or code.
 
-use serde::Serialize;
+use serde::{Deserialize, Serialize};
 
 use crate::notation::Piece;
 
 /// One run of characters and the role in which it is set.
-#[derive(Clone, Debug, PartialEq, Eq, Serialize)]
+#[derive(Clone, Debug, PartialEq, Eq, Serialize, Deserialize)]
 #[serde(tag = "as", content = "text", rename_all = "kebab-case")]
 pub enum Run {
     Plain(String),
@@ -23,7 +23,7 @@ pub enum Run {
 }
 
 /// A line of text as runs.
-#[derive(Clone, Debug, Default, PartialEq, Eq, Serialize)]
+#[derive(Clone, Debug, Default, PartialEq, Eq, Serialize, Deserialize)]
 pub struct Rich(pub Vec<Run>);
 
 impl Rich {

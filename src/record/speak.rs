@@ -12,12 +12,18 @@ fn said(math: &Math) -> String {
     match math {
         Math::Symbol { text } | Math::Upright { text } => word(text),
         Math::Attach { base, sub, sup } => {
-            let sub = sub.as_ref().map_or(String::new(), |s| format!(" sub {}", said(s)));
+            let sub = sub
+                .as_ref()
+                .map_or(String::new(), |s| format!(" sub {}", said(s)));
             let sup = sup.as_ref().map_or(String::new(), |s| power(s));
             format!("{}{sub}{sup}", said(base))
         }
         Math::Fraction { over, under } => {
-            format!("the fraction {} over {}, end of fraction", said(over), said(under))
+            format!(
+                "the fraction {} over {}, end of fraction",
+                said(over),
+                said(under)
+            )
         }
         Math::Sum { index } => format!("the sum over {} of", said(index)),
         Math::Root { of } => format!("the square root of {}, end of root", said(of)),
@@ -70,6 +76,9 @@ mod tests {
                 },
             ],
         };
-        assert_eq!(speak(&math), "U equals the square root of u sub i squared, end of root");
+        assert_eq!(
+            speak(&math),
+            "U equals the square root of u sub i squared, end of root"
+        );
     }
 }

@@ -3,7 +3,7 @@
 use crate::engine::{COVERAGE, Outcome, StatedBy};
 use crate::quantity::{Significance, Stated, two_digits};
 
-use super::numerals::{minus, unit};
+use super::numerals::{minus, superscript, unit};
 use super::rich::{Rich, Run};
 
 /// The combined uncertainty in numbers, the rule that decides the digits, and what the other
@@ -59,19 +59,12 @@ fn last_place(significance: Significance) -> String {
         Significance::Exact => "none is limited".to_string(),
         Significance::Unlimited => "none limits them".to_string(),
         Significance::Place(place) => {
-            let place = i32::try_from(place).unwrap_or(0);
-            format!("the coarsest last place is 10{}", superscript(place))
+            format!(
+                "the coarsest last place is 10{}",
+                superscript(&place.to_string())
+            )
         }
     }
-}
-
-fn superscript(power: i32) -> String {
-    const DIGITS: [char; 10] = ['⁰', '¹', '²', '³', '⁴', '⁵', '⁶', '⁷', '⁸', '⁹'];
-    let set = |c: char| match c.to_digit(10) {
-        Some(digit) => DIGITS[digit as usize],
-        None => '⁻',
-    };
-    power.to_string().chars().map(set).collect()
 }
 
 fn other_rule(outcome: &Outcome, remark: &Stated) -> String {

@@ -12,7 +12,10 @@ pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
     let numbers = numbers(problem);
     let row = |(index, value): (usize, &ValueUsed)| {
         let head = &problem.sources[value.source].head;
-        let note = value.note.as_ref().map_or(String::new(), |note| format!(". {note}"));
+        let note = value
+            .note
+            .as_ref()
+            .map_or(String::new(), |note| format!(". {note}"));
         ValueRow {
             number: index + 1,
             substance: substance(value),
@@ -77,7 +80,10 @@ fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) ->
             unit(&comparison.printed.unit)
         ),
         unit: unit(&value.printed.unit),
-        reference: numbers(problem).get(&comparison.source).copied().unwrap_or(0),
+        reference: numbers(problem)
+            .get(&comparison.source)
+            .copied()
+            .unwrap_or(0),
         locator: comparison.locator.clone(),
         difference: minus(&text),
         judgement: judgement(comparison.judgement),
@@ -85,15 +91,21 @@ fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) ->
 }
 
 fn judgement(judgement: Judgement) -> String {
+    let size = |combined: f64| minus(&two_digits(combined));
+    let stated = |complete: bool| match complete {
+        true => "the combined expanded uncertainty",
+        false => "the one expanded uncertainty that is stated",
+    };
     match judgement {
-        Judgement::Within { combined } => {
-            format!("within the expanded uncertainty, {}", two_digits(combined))
+        Judgement::Within { combined, complete } => {
+            format!("within {}, {}", stated(complete), size(combined))
         }
         Judgement::Beyond { combined, complete } => {
-            let stated = if complete { "combined" } else { "one stated" };
-            format!("beyond the {stated} expanded uncertainty, {}", two_digits(combined))
+            format!("beyond {}, {}", stated(complete), size(combined))
         }
         Judgement::NotJudged { equal: true } => "equal as printed".to_string(),
-        Judgement::NotJudged { equal: false } => "not judged: none states one".to_string(),
+        Judgement::NotJudged { equal: false } => {
+            "not judged: neither states an uncertainty".to_string()
+        }
     }
 }

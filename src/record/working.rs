@@ -17,7 +17,9 @@ use super::tables::{enthalpy, mark, number, text};
 
 pub(super) fn working_sections(calculation: &Calculation) -> Vec<WorkingSection> {
     let reactions = calculation.working.reactions.iter();
-    reactions.map(|reaction| section(calculation, reaction)).collect()
+    reactions
+        .map(|reaction| section(calculation, reaction))
+        .collect()
 }
 
 fn section(calculation: &Calculation, working: &ReactionWorking) -> WorkingSection {
@@ -50,7 +52,8 @@ fn equation(problem: &Problem, reaction: &ProblemReaction) -> Rich {
             let plus = if i == 0 { "" } else { " + " };
             let nu = super::numerals::coefficient(&num_traits::Signed::abs(&term.nu));
             let species = &problem.substances[term.substance].species;
-            text.and(format!("{plus}{nu}")).with(Rich::from(species.pieces()))
+            text.and(format!("{plus}{nu}"))
+                .with(Rich::from(species.pieces()))
         })
     };
     side(true).and(" → ").with(side(false))
@@ -63,7 +66,10 @@ fn heat_steps(
     steps: &mut Vec<Step>,
 ) {
     let problem = &calculation.problem;
-    let Some(outcome) = calculation.working.outcome(&format!("{}.heat", reaction.id)) else {
+    let Some(outcome) = calculation
+        .working
+        .outcome(&format!("{}.heat", reaction.id))
+    else {
         return;
     };
     let unit = unit(&outcome.unit);
@@ -150,7 +156,13 @@ fn substitution(hess: &Hess, unit: &str) -> Rich {
     let terms: Vec<String> = hess
         .terms
         .iter()
-        .map(|term| format!("({})·({})", signed(&term.nu), in_full(&term.molar, term.molar_significance)))
+        .map(|term| {
+            format!(
+                "({})·({})",
+                signed(&term.nu),
+                in_full(&term.molar, term.molar_significance)
+            )
+        })
         .collect();
     enthalpy("r").and(format!(
         " = {} = {} {unit}, exactly: nothing is rounded here.",
@@ -164,11 +176,17 @@ fn mass_steps(
     reaction: &ProblemReaction,
     mass: &MolarMass,
 ) -> Vec<Step> {
-    let outcome = |quantity: &str| calculation.working.outcome(&format!("{}.{quantity}", reaction.id));
+    let outcome = |quantity: &str| {
+        calculation
+            .working
+            .outcome(&format!("{}.{quantity}", reaction.id))
+    };
     let (Some(per), Some(by_mass)) = (outcome("heat-per"), outcome("heat-per-mass")) else {
         return Vec::new();
     };
-    let nu = reaction.per.map(|index| num_traits::Signed::abs(&reaction.terms[index].nu));
+    let nu = reaction
+        .per
+        .map(|index| num_traits::Signed::abs(&reaction.terms[index].nu));
     let nu = nu.map_or(String::new(), |nu| exact_fraction(&nu));
     let values = &calculation.problem.values;
     let mut sum = Rich::plain("M = ");
@@ -176,16 +194,24 @@ fn mass_steps(
         let plus = if i == 0 { "" } else { " + " };
         let value = &values[*index];
         sum = sum
-            .and(format!("{plus}{} · {} ", exact_fraction(count), value.printed.decimal.printed()))
+            .and(format!(
+                "{plus}{} · {} ",
+                exact_fraction(count),
+                value.printed.decimal.printed()
+            ))
             .run(Run::ValueUsed(index + 1));
     }
-    let sum = sum.and(format!(" = {} g/mol", in_full(&mass.value, mass.significance)));
+    let sum = sum.and(format!(
+        " = {} g/mol",
+        in_full(&mass.value, mass.significance)
+    ));
     vec![
         Step::Heading {
             text: "Referred to one substance".to_string(),
         },
         Step::Text {
-            text: Rich::plain(format!("Per mole: the heat divided by |ν| = {nu}. ")).with(stating(per)),
+            text: Rich::plain(format!("Per mole: the heat divided by |ν| = {nu}. "))
+                .with(stating(per)),
         },
         result(calculation, per),
         displayed(molar_mass_sum()),

@@ -2,6 +2,7 @@
 
 use crate::finding::Text;
 
+use super::glenn;
 use super::glenn_entries;
 use super::read::read_source;
 use super::store::Source;
@@ -9,13 +10,16 @@ use super::store::Source;
 /// The conventions: elements in their reference states, the hydrogen ion and the electron.
 pub(super) const CONVENTIONS: &str = "conventions";
 pub(super) const ATOMIC_WEIGHTS: &str = "atomic-weights-2021";
-const GLENN: &str = "nasa-glenn-2021";
+const GLENN: &str = glenn::ID;
 
 /// Source files that are part of the program.
 const FILES: [(&str, &str); 4] = [
     (CONVENTIONS, include_str!("data/conventions.toml")),
     ("codata-1989", include_str!("data/codata-1989.toml")),
-    (ATOMIC_WEIGHTS, include_str!("data/atomic-weights-2021.toml")),
+    (
+        ATOMIC_WEIGHTS,
+        include_str!("data/atomic-weights-2021.toml"),
+    ),
     ("constants-2022", include_str!("data/constants-2022.toml")),
 ];
 

@@ -91,7 +91,11 @@ fn look_up(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) -> Option<
 
 /// Of several condensed forms, those that the source gives at the reference temperature.
 fn stable_only(wanted: &Wanted, found: Match) -> Match {
-    let stable = wanted.species.phase.as_ref().is_some_and(|p| p.label == PhaseLabel::Stable);
+    let stable = wanted
+        .species
+        .phase
+        .as_ref()
+        .is_some_and(|p| p.label == PhaseLabel::Stable);
     let Match::Several(entries) = found else {
         return found;
     };
@@ -111,7 +115,10 @@ fn stable_only(wanted: &Wanted, found: Match) -> Match {
 fn tells_isomers(wanted: &Wanted) -> bool {
     let phase = wanted.species.phase.as_ref();
     phase.is_some_and(|p| {
-        matches!(p.label, PhaseLabel::Gas | PhaseLabel::Liquid | PhaseLabel::Aqueous)
+        matches!(
+            p.label,
+            PhaseLabel::Gas | PhaseLabel::Liquid | PhaseLabel::Aqueous
+        )
     })
 }
 
@@ -127,13 +134,19 @@ fn chosen_index(resolver: &mut Resolver<'_>, choice: &Choice, found: &[Held]) ->
         .iter()
         .position(|held| resolver.sources[held.source].id() == choice.source.value);
     if index.is_none() {
-        let ids: Vec<&str> = found.iter().map(|h| resolver.sources[h.source].id()).collect();
+        let ids: Vec<&str> = found
+            .iter()
+            .map(|h| resolver.sources[h.source].id())
+            .collect();
         let fault = Fault::new(
             FaultCode::Source,
             resolver.text,
             &choice.source.span,
             format!("\"{}\"", choice.source.value),
-            format!("a consulted source that holds the value: {}", ids.join(", ")),
+            format!(
+                "a consulted source that holds the value: {}",
+                ids.join(", ")
+            ),
             "write the id of the source (not its path)",
         );
         resolver.faults.push(fault);
@@ -148,7 +161,10 @@ fn refuse_isomers(
     first: &Held,
     others: &[Held],
 ) -> bool {
-    let Some(other) = others.iter().find(|other| are_isomers(&first.entry, &other.entry)) else {
+    let Some(other) = others
+        .iter()
+        .find(|other| are_isomers(&first.entry, &other.entry))
+    else {
         return false;
     };
     let entries = [first.entry.clone(), other.entry.clone()];
@@ -181,7 +197,10 @@ fn note_identity(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span, entr
         resolver.findings.push(Finding {
             severity: Severity::Note,
             code: FindingCode::IdentityByFormula,
-            message: format!("`{}` is taken as {form}, the one such form of the source.", wanted.label),
+            message: format!(
+                "`{}` is taken as {form}, the one such form of the source.",
+                wanted.label
+            ),
             at,
         });
     }

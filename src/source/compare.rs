@@ -1,7 +1,9 @@
 //! What the other consulted sources say of the same value.
 
 use crate::finding::{Finding, FindingCode, Severity, Span};
-use crate::quantity::{Exact, InputUncertainty, Quantity, power_of_ten, terminating_decimal, to_f64, two_digits};
+use crate::quantity::{
+    Exact, InputUncertainty, Quantity, power_of_ten, terminating_decimal, to_f64, two_digits,
+};
 use num_traits::{Signed, Zero};
 
 use super::choose::{Chosen, Held};
@@ -66,15 +68,17 @@ fn judgement(
     let factor = to_f64(&(other.unit.factor() / used.printed.unit.factor()));
     let stated = other.uncertainty.as_ref();
     let theirs = stated.map(|u| u.standard(&head.coverage) * factor);
-    let squares = [ours, theirs].into_iter().flatten().map(|u| u * u).sum::<f64>();
+    let squares = [ours, theirs]
+        .into_iter()
+        .flatten()
+        .map(|u| u * u)
+        .sum::<f64>();
     let combined = COVERAGE * libm::sqrt(squares);
     let apart = to_f64(&difference.abs());
+    let complete = ours.is_some() && theirs.is_some();
     match (ours.is_some() || theirs.is_some(), apart > combined) {
-        (true, true) => Judgement::Beyond {
-            combined,
-            complete: ours.is_some() && theirs.is_some(),
-        },
-        (true, false) => Judgement::Within { combined },
+        (true, true) => Judgement::Beyond { combined, complete },
+        (true, false) => Judgement::Within { combined, complete },
         (false, _) => Judgement::NotJudged {
             equal: difference.abs() <= half_places(used, other),
         },
@@ -85,7 +89,8 @@ fn judgement(
 fn half_places(used: &ValueUsed, other: &Quantity) -> Exact {
     let half = Exact::new(1.into(), 2.into());
     let ours = power_of_ten(used.printed.decimal.place());
-    let theirs = power_of_ten(other.decimal.place()) * other.unit.factor() / used.printed.unit.factor();
+    let theirs =
+        power_of_ten(other.decimal.place()) * other.unit.factor() / used.printed.unit.factor();
     half * if ours > theirs { ours } else { theirs }
 }
 
@@ -102,8 +107,7 @@ fn judge(
     let apart = amount(&comparison.difference, used);
     let differ = format!(
         "{}: {ours} and {theirs} are {apart} apart (the latter prints {})",
-        wanted.label,
-        comparison.printed
+        wanted.label, comparison.printed
     );
     let finding = |severity, code, message| Finding {
         severity,
@@ -114,9 +118,10 @@ fn judge(
     let (beyond, remark) = match comparison.judgement {
         Judgement::Within { .. } | Judgement::NotJudged { equal: true } => return None,
         Judgement::Beyond { combined, complete } => (true, beyond_words(combined, complete, used)),
-        Judgement::NotJudged { equal: false } => {
-            (false, "neither states an uncertainty to judge it by".to_string())
-        }
+        Judgement::NotJudged { equal: false } => (
+            false,
+            "neither states an uncertainty to judge it by".to_string(),
+        ),
     };
     Some(match (&chosen.because, beyond) {
         (Some(because), _) => finding(

@@ -105,7 +105,10 @@ fn unknown(name: &Located<String>, case: &Text) -> Fault {
         case,
         &name.span,
         format!("\"{}\"", name.value),
-        format!("a built-in source ({}) or a path beside the case", BUILT_IN.join(", ")),
+        format!(
+            "a built-in source ({}) or a path beside the case",
+            BUILT_IN.join(", ")
+        ),
         advice,
     )
 }

@@ -5,7 +5,7 @@ use std::collections::BTreeSet;
 use serde::Serialize;
 
 use crate::notation::Species;
-use crate::quantity::{Decimal, Quantity};
+use crate::quantity::{Decimal, Exact, Quantity};
 
 use super::heat_capacity::HeatCapacity;
 use super::model::{Digits, Entry, SourceHead, Subject};
@@ -19,16 +19,16 @@ pub fn attachment_name(id: &str) -> String {
 }
 
 /// For each source of a problem, its excerpt as TOML: all forms of the formulas that the case
-/// names, and the atomic weights used. The head names the SHA-256 of the whole file.
+/// names, what the checks of mixed references look up, and the atomic weights used. The head
+/// names the SHA-256 of the whole file.
 pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
-    let mut formulas: BTreeSet<String> = BTreeSet::new();
-    for substance in &problem.substances {
-        formulas.insert(substance.species.formula.hill());
-    }
+    let mut formulas = unusual_states(problem);
+    formulas.extend(problem.substances.iter().map(|s| s.species.formula.hill()));
     let states = reference_formulas(problem);
+    let capacities = mixes_temperatures(problem);
     let excerpt = |(index, source): (usize, &Source)| {
         let mut wanted = formulas.clone();
-        if index == 0 {
+        if index == 0 || capacities {
             wanted.extend(states.iter().cloned());
         }
         let entries = entries(problem, index, source, &wanted);
@@ -37,9 +37,33 @@ pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
     problem.sources.iter().enumerate().map(excerpt).collect()
 }
 
+/// What a source counts from another reference state costs the enthalpy of that state, which
+/// any source consulted may give.
+fn unusual_states(problem: &Problem) -> BTreeSet<String> {
+    let states = problem
+        .sources
+        .iter()
+        .flat_map(|source| &source.head.reference_states);
+    states.map(|(_, state)| state.formula.hill()).collect()
+}
+
+/// Where a source has another reference temperature than the conventions, the heat capacities of
+/// the elements decide what that costs.
+fn mixes_temperatures(problem: &Problem) -> bool {
+    let temperatures = problem
+        .sources
+        .iter()
+        .filter_map(|source| source.head.temperature.as_ref());
+    let kelvin: BTreeSet<Exact> = temperatures.map(Quantity::value_in_si).collect();
+    kelvin.len() > 1
+}
+
 /// Formation equations are written from the reference states, which therefore travel as well.
 fn reference_formulas(problem: &Problem) -> BTreeSet<String> {
-    let elements = problem.substances.iter().flat_map(|s| s.species.formula.counts().keys());
+    let elements = problem
+        .substances
+        .iter()
+        .flat_map(|s| s.species.formula.counts().keys());
     let states = elements.filter_map(|e| problem.reference_states.of_element(*e));
     let mut formulas: BTreeSet<String> = states.map(|s| s.formula.hill()).collect();
     // The electron stands in the formation equations of ions.
@@ -55,10 +79,17 @@ fn entries(
     source: &Source,
     formulas: &BTreeSet<String>,
 ) -> Vec<Entry> {
-    let mut entries: Vec<Entry> = formulas.iter().flat_map(|f| source.of_composition(f)).collect();
+    let mut entries: Vec<Entry> = formulas
+        .iter()
+        .flat_map(|f| source.of_composition(f))
+        .collect();
     let weights = problem.values.iter();
     let weights = weights.filter(|v| v.source == index && v.kind == ValueKind::AtomicWeight);
-    entries.extend(weights.filter_map(|v| source.of_symbol(&v.substance)).cloned());
+    entries.extend(
+        weights
+            .filter_map(|v| source.of_symbol(&v.substance))
+            .cloned(),
+    );
     entries
 }
 
@@ -109,7 +140,10 @@ fn head(head: &SourceHead) -> toml::Table {
         Digits::FixedDecimals => "fixed-decimals",
     };
     let states = head.reference_states.iter().map(|(element, species)| {
-        (element.symbol().to_string(), toml::Value::from(species.to_string()))
+        (
+            element.symbol().to_string(),
+            toml::Value::from(species.to_string()),
+        )
     });
     let states: toml::Table = states.collect();
     Fields::default()
@@ -122,11 +156,21 @@ fn head(head: &SourceHead) -> toml::Table {
         .put("edition", head.edition.clone())
         .put("doi", head.doi.clone())
         .put("licence", head.licence.clone())
-        .put("temperature", head.temperature.as_ref().map(Quantity::to_string))
+        .put("note", head.note.clone())
+        .put(
+            "temperature",
+            head.temperature.as_ref().map(Quantity::to_string),
+        )
         .put("pressure", head.pressure.as_ref().map(Quantity::to_string))
-        .put("energy-unit", head.energy_unit.as_ref().map(|u| u.symbol().to_string()))
+        .put(
+            "energy-unit",
+            head.energy_unit.as_ref().map(|u| u.symbol().to_string()),
+        )
         .put("coverage", head.coverage_text.clone())
-        .put("gas-constant", head.gas_constant.as_ref().map(|r| r.printed().to_string()))
+        .put(
+            "gas-constant",
+            head.gas_constant.as_ref().map(|r| r.printed().to_string()),
+        )
         .put("digits", Some(digits))
         .put("standing", Some(head.standing.word()))
         .put("extract-of", Some(head.sha256.clone()))
@@ -151,25 +195,49 @@ fn entry(entry: &Entry) -> toml::Table {
         .put("note", entry.note.clone())
         .put("standing", Some(Standing::word(entry.standing)))
         .put("reference-for", entry.reference_for.map(|e| e.symbol()))
-        .put("formation-enthalpy", entry.formation_enthalpy.as_ref().map(number_text))
-        .put("combustion-enthalpy", entry.combustion_enthalpy.as_ref().map(number_text))
-        .put("atomic-weight", entry.atomic_weight.as_ref().map(number_text))
+        .put(
+            "formation-enthalpy",
+            entry.formation_enthalpy.as_ref().map(number_text),
+        )
+        .put(
+            "combustion-enthalpy",
+            entry.combustion_enthalpy.as_ref().map(number_text),
+        )
+        .put(
+            "atomic-weight",
+            entry.atomic_weight.as_ref().map(number_text),
+        )
         .put("value", entry.value.as_ref().map(Quantity::to_string))
-        .put("heat-capacity", (!functions.is_empty()).then_some(functions))
-        .put("transitions", (!transitions.is_empty()).then_some(transitions))
+        .put(
+            "heat-capacity",
+            (!functions.is_empty()).then_some(functions),
+        )
+        .put(
+            "transitions",
+            (!transitions.is_empty()).then_some(transitions),
+        )
         .0
 }
 
 fn heat_capacity(function: &HeatCapacity) -> toml::Table {
-    let range = function.range.as_ref().map(|range| range.each_ref().map(Quantity::to_string).to_vec());
+    let range = function
+        .range
+        .as_ref()
+        .map(|range| range.each_ref().map(Quantity::to_string).to_vec());
     let printed = |decimal: &Decimal| decimal.printed().to_string();
     let coefficients: Vec<String> = function.coefficients.iter().map(printed).collect();
-    let points = function.points.iter().map(|point| point.each_ref().map(printed).to_vec());
+    let points = function
+        .points
+        .iter()
+        .map(|point| point.each_ref().map(printed).to_vec());
     let points: Vec<Vec<String>> = points.collect();
     Fields::default()
         .put("form", Some(function.form.word()))
         .put("range", range)
-        .put("coefficients", (!coefficients.is_empty()).then_some(coefficients))
+        .put(
+            "coefficients",
+            (!coefficients.is_empty()).then_some(coefficients),
+        )
         .put("points", (!points.is_empty()).then_some(points))
         .0
 }
@@ -186,7 +254,10 @@ fn correlation(stated: &super::model::StatedCorrelation) -> toml::Table {
     let between = stated.between.each_ref().map(Species::to_string).to_vec();
     Fields::default()
         .put("between", Some(between))
-        .put("coefficient", Some(stated.coefficient.printed().to_string()))
+        .put(
+            "coefficient",
+            Some(stated.coefficient.printed().to_string()),
+        )
         .0
 }
 

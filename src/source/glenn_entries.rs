@@ -22,6 +22,7 @@ pub(super) fn head(id: &str) -> SourceHead {
         edition: Some(format!("{} ({})", glenn::EDITION, glenn::DISTRIBUTION)),
         doi: None,
         licence: Some(glenn::LICENCE.to_string()),
+        note: None,
         temperature: Quantity::parse(glenn::TEMPERATURE).ok(),
         pressure: Quantity::parse(glenn::PRESSURE).ok(),
         energy_unit: Unit::parse("J/mol").ok(),
@@ -41,7 +42,10 @@ pub(super) fn of_composition(hill: &str) -> Vec<Entry> {
 }
 
 pub(super) fn all() -> Vec<Entry> {
-    GlennIndex::global().all().filter_map(|r| entry(&r)).collect()
+    GlennIndex::global()
+        .all()
+        .filter_map(|r| entry(&r))
+        .collect()
 }
 
 /// None where the record's own notation cannot be read, which a test excludes.
@@ -82,7 +86,9 @@ fn enthalpy(record: &GlennRecord) -> (Option<Quantity>, Option<String>) {
             printed,
         } => (
             None,
-            Some(format!("the file gives {printed} J/mol at {temperature} K, not at 298.15 K")),
+            Some(format!(
+                "the file gives {printed} J/mol at {temperature} K, not at 298.15 K"
+            )),
         ),
         GlennEnthalpy::NotAt298 { .. } => (
             None,

@@ -80,7 +80,11 @@ impl HeatCapacity {
     /// Cp at a temperature in K, J/(mol K). `gas_constant` is the R of the source's fits.
     /// None where a table does not reach the temperature.
     pub fn at(&self, kelvin: f64, gas_constant: f64) -> Option<f64> {
-        let c: Vec<f64> = self.coefficients.iter().map(|c| to_f64(&c.value())).collect();
+        let c: Vec<f64> = self
+            .coefficients
+            .iter()
+            .map(|c| to_f64(&c.value()))
+            .collect();
         let t = kelvin;
         match self.form {
             Form::Constant | Form::Polynomial => Some(horner(&c, t)),

@@ -50,7 +50,10 @@ pub fn pick(wanted: &Wanted, entries: &[Entry]) -> Match {
         true => Identity::Same,
         false => Identity::Open,
     };
-    let kept = fitting.into_iter().filter(|(_, id)| *id == best).map(|(e, _)| e);
+    let kept = fitting
+        .into_iter()
+        .filter(|(_, id)| *id == best)
+        .map(|(e, _)| e);
     let mut kept: Vec<Entry> = exact_form_first(phase, kept.collect());
     match kept.len() {
         0 => Match::None,

@@ -28,6 +28,7 @@ pub struct SourceHead {
     pub edition: Option<String>,
     pub doi: Option<String>,
     pub licence: Option<String>,
+    pub note: Option<String>,
     /// Reference temperature of the formation enthalpies.
     pub temperature: Option<Quantity>,
     /// Standard-state pressure.
@@ -53,7 +54,14 @@ impl SourceHead {
         let mut parts = Vec::new();
         parts.extend(self.authors.as_ref().map(|authors| format!("{authors}:")));
         parts.push(format!("{}.", self.title.trim_end_matches('.')));
-        for part in [&self.report, &self.edition, &self.publisher, &self.year] {
+        let edition = self
+            .edition
+            .as_ref()
+            .map(|edition| match edition.contains("edition") {
+                true => edition.clone(),
+                false => format!("edition {edition}"),
+            });
+        for part in [&self.report, &edition, &self.publisher, &self.year] {
             parts.extend(part.as_ref().map(|p| format!("{p},")));
         }
         parts.extend(self.doi.as_ref().map(|doi| format!("doi:{doi},")));

@@ -54,7 +54,7 @@ pub struct Comparison {
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub enum Judgement {
     /// Within the combined expanded uncertainty (k = 2), in the unit of the value used.
-    Within { combined: f64 },
+    Within { combined: f64, complete: bool },
     /// Beyond it, or beyond what the one source states that states any.
     Beyond { combined: f64, complete: bool },
     /// Equal to the printed digits, or no uncertainty to judge by.

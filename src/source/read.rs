@@ -46,13 +46,19 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
     let root = &document.root;
     root.only(&["source", "entry", "correlation", "erratum"]);
     let Some(table) = root.table("source") else {
-        root.missing("source", "begin the file with a [source] table: id, title, …");
+        root.missing(
+            "source",
+            "begin the file with a [source] table: id, title, …",
+        );
         return None;
     };
     let head = read_head(&table, text)?;
     let rules = EntryRules::of(&head);
     let entries = root.tables("entry");
-    let entries: Vec<Entry> = entries.iter().filter_map(|t| read_entry(t, &rules)).collect();
+    let entries: Vec<Entry> = entries
+        .iter()
+        .filter_map(|t| read_entry(t, &rules))
+        .collect();
     require_for_entries(&table, &head, &entries);
     let correlations = root.tables("correlation");
     let correlations = correlations.iter().filter_map(read_correlation);
@@ -68,15 +74,25 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
 
 /// What the entries need the head to say, so that nothing about them is guessed.
 fn require_for_entries(table: &Table<'_, '_>, head: &SourceHead, entries: &[Entry]) {
-    let enthalpies = entries.iter().any(|entry| entry.formation_enthalpy.is_some());
+    let enthalpies = entries
+        .iter()
+        .any(|entry| entry.formation_enthalpy.is_some());
     if enthalpies && head.temperature.is_none() && table.get("temperature").is_none() {
-        table.missing("temperature", "state the reference temperature: temperature = \"298.15 K\"");
+        table.missing(
+            "temperature",
+            "state the reference temperature: temperature = \"298.15 K\"",
+        );
     }
-    let stated = entries.iter().flat_map(|e| [&e.formation_enthalpy, &e.atomic_weight]);
+    let stated = entries
+        .iter()
+        .flat_map(|e| [&e.formation_enthalpy, &e.atomic_weight]);
     let mut stated = stated.flatten().filter_map(|q| q.uncertainty.as_ref());
     let expanded = stated.any(|u| matches!(u, StatedUncertainty::Expanded { .. }));
     if expanded && head.coverage_text.is_none() {
-        table.missing("coverage", "say what ± covers in this table: coverage = \"2\" for about 95 %");
+        table.missing(
+            "coverage",
+            "say what ± covers in this table: coverage = \"2\" for about 95 %",
+        );
     }
 }
 
@@ -103,10 +119,13 @@ fn read_head(table: &Table<'_, '_>, text: &Text) -> Option<SourceHead> {
         edition: owned("edition"),
         doi: owned("doi"),
         licence: owned("licence"),
+        note: owned("note"),
         temperature: measured("temperature"),
         pressure: measured("pressure"),
         energy_unit: energy.and_then(|text| unit(reader, &text)),
-        coverage: coverage.as_ref().map_or(Coverage::default(), |text| read_coverage(reader, text)),
+        coverage: coverage
+            .as_ref()
+            .map_or(Coverage::default(), |text| read_coverage(reader, text)),
         coverage_text: coverage.map(|text| text.value),
         gas_constant: constant.and_then(|text| read_decimal(reader, &text)),
         digits: read_digits(table),
@@ -150,7 +169,13 @@ fn read_authors(table: &Table<'_, '_>) -> Option<String> {
 
 fn read_coverage(reader: &Reader<'_>, text: &Located<String>) -> Coverage {
     Coverage::parse(&text.value).unwrap_or_else(|error| {
-        value_fault(reader, &text.span, error.found(), error.expected(), error.advice());
+        value_fault(
+            reader,
+            &text.span,
+            error.found(),
+            error.expected(),
+            error.advice(),
+        );
         Coverage::default()
     })
 }
@@ -211,7 +236,11 @@ fn read_reference_states(table: &Table<'_, '_>) -> Vec<(Element, crate::notation
 fn read_correlation(table: &Table<'_, '_>) -> Option<StatedCorrelation> {
     table.only(&["between", "coefficient", "locator", "note"]);
     let reader = table.reader();
-    let between: Vec<_> = table.strings("between").iter().filter_map(|s| species(reader, s)).collect();
+    let between: Vec<_> = table
+        .strings("between")
+        .iter()
+        .filter_map(|s| species(reader, s))
+        .collect();
     let coefficient = table.required_string("coefficient", "state r, between -1 and 1")?;
     let decimal = read_decimal(reader, &coefficient)?;
     let one = crate::quantity::Exact::from_integer(1.into());
@@ -226,7 +255,10 @@ fn read_correlation(table: &Table<'_, '_>) -> Option<StatedCorrelation> {
         return None;
     }
     let Ok(between) = <[_; 2]>::try_from(between) else {
-        table.missing("between", "name the two substances: between = [\"H2O(l)\", \"H2O(g)\"]");
+        table.missing(
+            "between",
+            "name the two substances: between = [\"H2O(l)\", \"H2O(g)\"]",
+        );
         return None;
     };
     Some(StatedCorrelation {

@@ -57,7 +57,10 @@ pub(super) fn read_entry(table: &Table<'_, '_>, rules: &EntryRules) -> Option<En
     let also = table.strings("also");
     Some(Entry {
         subject,
-        also: also.iter().filter_map(|text| species(reader, text)).collect(),
+        also: also
+            .iter()
+            .filter_map(|text| species(reader, text))
+            .collect(),
         name: owned("name"),
         cas: owned("cas"),
         locator: owned("locator").unwrap_or_default(),
@@ -66,10 +69,22 @@ pub(super) fn read_entry(table: &Table<'_, '_>, rules: &EntryRules) -> Option<En
         reference_for: read_element(table),
         formation_enthalpy: read_enthalpy(table, "formation-enthalpy", rules),
         combustion_enthalpy: read_enthalpy(table, "combustion-enthalpy", rules),
-        atomic_weight: table.string("atomic-weight").and_then(|t| Some(number(reader, &t)?.value)),
-        value: table.string("value").and_then(|t| Some(quantity(reader, &t)?.value)),
-        heat_capacity: table.tables("heat-capacity").iter().filter_map(read_heat_capacity).collect(),
-        transitions: table.tables("transitions").iter().filter_map(read_transition).collect(),
+        atomic_weight: table
+            .string("atomic-weight")
+            .and_then(|t| Some(number(reader, &t)?.value)),
+        value: table
+            .string("value")
+            .and_then(|t| Some(quantity(reader, &t)?.value)),
+        heat_capacity: table
+            .tables("heat-capacity")
+            .iter()
+            .filter_map(read_heat_capacity)
+            .collect(),
+        transitions: table
+            .tables("transitions")
+            .iter()
+            .filter_map(read_transition)
+            .collect(),
         place: reader.text().place(substance.span.start),
     })
 }
@@ -116,8 +131,13 @@ fn read_heat_capacity(table: &Table<'_, '_>) -> Option<HeatCapacity> {
     let read = HeatCapacity {
         form: form.value,
         range: read_range(table),
-        coefficients: coefficients.iter().filter_map(|c| read_decimal(reader, c)).collect(),
-        points: table.get("points").map_or_else(Vec::new, |points| read_points(&points)),
+        coefficients: coefficients
+            .iter()
+            .filter_map(|c| read_decimal(reader, c))
+            .collect(),
+        points: table
+            .get("points")
+            .map_or_else(Vec::new, |points| read_points(&points)),
     };
     count_coefficients(table, &form, read)
 }
@@ -131,7 +151,9 @@ fn count_coefficients(
     let (given, expected) = match form.value {
         Form::Table => (read.points.len(), "at least 2 points".to_string()),
         other => {
-            let expected = other.coefficients().map_or("at least 1".into(), |n| n.to_string());
+            let expected = other
+                .coefficients()
+                .map_or("at least 1".into(), |n| n.to_string());
             (read.coefficients.len(), format!("{expected} coefficients"))
         }
     };
@@ -175,7 +197,10 @@ fn read_points(points: &Value<'_, '_>) -> Vec<[Decimal; 2]> {
     let mut read = Vec::new();
     for point in points.elements("an array of [\"T\", \"Cp\"] pairs") {
         let pair = point.strings();
-        let pair: Vec<_> = pair.iter().filter_map(|p| read_decimal(point.reader(), p)).collect();
+        let pair: Vec<_> = pair
+            .iter()
+            .filter_map(|p| read_decimal(point.reader(), p))
+            .collect();
         match <[Decimal; 2]>::try_from(pair) {
             Ok(pair) => read.push(pair),
             Err(_) => value_fault(

@@ -16,9 +16,9 @@ impl ReferenceStates {
     /// The states that a source of conventions lists.
     pub fn of(conventions: &Source) -> ReferenceStates {
         let entries = conventions.all();
-        let states = entries.iter().filter_map(|entry| {
-            Some((entry.reference_for?, entry.species()?.clone()))
-        });
+        let states = entries
+            .iter()
+            .filter_map(|entry| Some((entry.reference_for?, entry.species()?.clone())));
         ReferenceStates {
             states: states.collect(),
         }

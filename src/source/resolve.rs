@@ -1,5 +1,6 @@
 //! From a case and its sources to a problem.
 
+use std::cell::OnceCell;
 use std::collections::BTreeMap;
 
 use crate::case::{Case, DeclaredKind, Reaction};
@@ -13,9 +14,7 @@ use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
 use super::model::Digits;
-use super::problem::{
-    Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
-};
+use super::problem::{Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed};
 use super::reference_states::ReferenceStates;
 use super::store::Source;
 use super::unbalanced::unbalanced;
@@ -30,12 +29,19 @@ pub fn resolve(
     files: &dyn SourceFiles,
 ) -> (Option<Problem>, Faults) {
     let mut resolver = Resolver::new(case, text, consultation);
-    if case.reactions.values().any(|reaction| reaction.per.is_some()) {
+    if case
+        .reactions
+        .values()
+        .any(|reaction| reaction.per.is_some())
+    {
         resolver.add_atomic_weights(files);
     }
     let reactions = case.reactions.values();
-    let reactions: Vec<_> = reactions.map(|reaction| resolver.reaction(reaction)).collect();
+    let reactions: Vec<_> = reactions
+        .map(|reaction| resolver.reaction(reaction))
+        .collect();
     resolver.check_choices();
+    resolver.check_correlations();
     let faults = std::mem::take(&mut resolver.faults);
     let problem = faults.is_empty().then(|| resolver.problem(reactions));
     (problem, faults)
@@ -56,6 +62,8 @@ pub(super) struct Resolver<'a> {
     atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
+    /// All notations and names of the sources, gathered at the first unknown substance.
+    pub(super) names: OnceCell<Vec<String>>,
 }
 
 impl<'a> Resolver<'a> {
@@ -72,17 +80,23 @@ impl<'a> Resolver<'a> {
             atomic_weights: BTreeMap::new(),
             findings: Vec::new(),
             faults: Faults::default(),
+            names: OnceCell::new(),
         }
     }
 
     fn add_atomic_weights(&mut self, files: &dyn SourceFiles) {
-        if self.sources.iter().any(|source| source.id() == ATOMIC_WEIGHTS) {
+        if self
+            .sources
+            .iter()
+            .any(|source| source.id() == ATOMIC_WEIGHTS)
+        {
             return;
         }
         let (source, faults) = load_built_in(ATOMIC_WEIGHTS, files);
         self.faults.extend(faults);
         if let Some(source) = source {
-            self.became.push((ATOMIC_WEIGHTS.to_string(), self.sources.len()));
+            self.became
+                .push((ATOMIC_WEIGHTS.to_string(), self.sources.len()));
             self.sources.push(source);
         }
     }
@@ -109,7 +123,9 @@ impl<'a> Resolver<'a> {
         let sides = [(&equation.value.left, -1), (&equation.value.right, 1)];
         let mut terms = Vec::new();
         let mut complete = true;
-        for (term, sign) in sides.iter().flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
+        for (term, sign) in sides
+            .iter()
+            .flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
         {
             let place = self.term_span(equation, term);
             let Some(substance) = self.participant(&term.participant, &place) else {
@@ -145,7 +161,11 @@ impl<'a> Resolver<'a> {
     fn term_span(&self, equation: &Located<crate::notation::Equation>, term: &Term) -> Span {
         // The literal starts with one quote, or with three.
         let literal = self.text.slice(&equation.span);
-        let quote = if literal.starts_with("\"\"\"") || literal.starts_with("'''") { 3 } else { 1 };
+        let quote = if literal.starts_with("\"\"\"") || literal.starts_with("'''") {
+            3
+        } else {
+            1
+        };
         let start = equation.span.start + quote + term.span.start;
         let end = equation.span.start + quote + term.span.end;
         match end < equation.span.end {
@@ -159,7 +179,9 @@ impl<'a> Resolver<'a> {
         if let Some(known) = self.known.get(&label) {
             return *known;
         }
-        let found = self.wanted(participant).and_then(|wanted| self.substance(&wanted, span));
+        let found = self
+            .wanted(participant)
+            .and_then(|wanted| self.substance(&wanted, span));
         self.known.insert(label, found);
         found
     }
@@ -197,7 +219,11 @@ impl<'a> Resolver<'a> {
         let value = self.value_used(&chosen, span);
         let comparisons = compare(self, wanted, &chosen, &self.values[value].clone(), span);
         // `choose` returns entries of species alone.
-        let species = chosen.entry.species().cloned().unwrap_or(wanted.species.clone());
+        let species = chosen
+            .entry
+            .species()
+            .cloned()
+            .unwrap_or(wanted.species.clone());
         self.substances.push(Substance {
             label: wanted.label.clone(),
             species,
@@ -223,7 +249,7 @@ impl<'a> Resolver<'a> {
         let significance = match (printed.exact, head.digits) {
             (true, _) => Significance::Exact,
             (false, Digits::FixedDecimals) => Significance::Unlimited,
-            (false, Digits::Significant) => Significance::Place(printed.decimal.place()),
+            (false, Digits::Significant) => printed.significance(),
         };
         let value = ValueUsed {
             source: chosen.source,
@@ -276,7 +302,7 @@ impl<'a> Resolver<'a> {
             substance: symbol.to_string(),
             species: None,
             name: entry.name.clone(),
-            significance: Significance::Place(printed.decimal.place()),
+            significance: printed.significance(),
             uncertainty: input_uncertainty(&printed, head),
             printed,
             locator: entry.locator.clone(),
@@ -284,14 +310,19 @@ impl<'a> Resolver<'a> {
             standing: entry.standing,
             used_at: span.clone(),
         });
-        self.atomic_weights.insert(symbol.to_string(), self.values.len() - 1);
+        self.atomic_weights
+            .insert(symbol.to_string(), self.values.len() - 1);
         Some(self.values.len() - 1)
     }
 
     fn check_balance(&mut self, reaction: &Reaction) {
         let equation = &reaction.equation;
         let sides = [&equation.value.left, &equation.value.right];
-        let [left, right] = sides.map(|side| side.iter().filter_map(|t| self.formula_of(t)).collect::<Vec<_>>());
+        let [left, right] = sides.map(|side| {
+            side.iter()
+                .filter_map(|t| self.formula_of(t))
+                .collect::<Vec<_>>()
+        });
         if left.len() != equation.value.left.len() || right.len() != equation.value.right.len() {
             return;
         }
@@ -306,10 +337,15 @@ impl<'a> Resolver<'a> {
         if off.is_empty() {
             return;
         }
-        let formulas = |side: &'_ [(Exact, Formula)]| side.iter().map(|(_, f)| f.clone()).collect::<Vec<_>>();
+        let formulas =
+            |side: &'_ [(Exact, Formula)]| side.iter().map(|(_, f)| f.clone()).collect::<Vec<_>>();
         let (left, right) = (formulas(&left), formulas(&right));
-        let form = balanced_form(&left.iter().collect::<Vec<_>>(), &right.iter().collect::<Vec<_>>());
-        self.faults.push(unbalanced(self.text, reaction, &off, form.as_deref()));
+        let form = balanced_form(
+            &left.iter().collect::<Vec<_>>(),
+            &right.iter().collect::<Vec<_>>(),
+        );
+        self.faults
+            .push(unbalanced(self.text, reaction, &off, form.as_deref()));
     }
 
     fn formula_of(&self, term: &Term) -> Option<(Exact, Formula)> {
@@ -321,7 +357,9 @@ impl<'a> Resolver<'a> {
     fn check_choices(&mut self) {
         for choice in &self.case.choices {
             let label = Species::parse(&choice.substance.value)
-                .map_or(choice.substance.value.clone(), |species| species.to_string());
+                .map_or(choice.substance.value.clone(), |species| {
+                    species.to_string()
+                });
             if !self.known.contains_key(&label) {
                 let known: Vec<&str> = self.known.keys().map(String::as_str).collect();
                 self.faults.push(Fault::new(
@@ -336,6 +374,35 @@ impl<'a> Resolver<'a> {
         }
     }
 
+    /// Correlations that cannot all be true would make a variance negative.
+    fn check_correlations(&mut self) {
+        let used: Vec<usize> = (0..self.values.len()).collect();
+        if self.correlations().is_consistent(&used) == Ok(true) {
+            return;
+        }
+        let with_any = self
+            .sources
+            .iter()
+            .filter(|source| !source.correlations.is_empty());
+        let ids: Vec<&str> = with_any.map(Source::id).collect();
+        let span = self
+            .case
+            .consult
+            .first()
+            .map_or(0..0, |name| name.span.clone());
+        self.faults.push(Fault::new(
+            FaultCode::Source,
+            self.text,
+            &span,
+            format!(
+                "correlations of {} that contradict each other",
+                ids.join(", ")
+            ),
+            "correlation coefficients that can all be true together (JCGM 100:2008, 5.2)",
+            "compare the coefficients with the source",
+        ));
+    }
+
     /// Correlations that the sources state, between values used.
     fn correlations(&self) -> Correlations {
         let mut correlations = Correlations::default();
@@ -343,7 +410,9 @@ impl<'a> Resolver<'a> {
             for stated in &source.correlations {
                 let of = |wanted: &Species| {
                     let name = wanted.to_string();
-                    self.values.iter().position(|v| v.source == index && v.substance == name)
+                    self.values
+                        .iter()
+                        .position(|v| v.source == index && v.substance == name)
                 };
                 if let (Some(a), Some(b)) = (of(&stated.between[0]), of(&stated.between[1])) {
                     // The reader of sources has checked that the coefficient is one.

@@ -37,12 +37,18 @@ pub fn search(sources: &[Source], word: &str) -> Vec<Hit> {
 
 fn formula_key(word: &str) -> Option<String> {
     let species = Species::parse(word).map(|species| species.formula);
-    species.or_else(|_| Formula::parse(word)).ok().map(|formula| formula.hill())
+    species
+        .or_else(|_| Formula::parse(word))
+        .ok()
+        .map(|formula| formula.hill())
 }
 
 fn named(source: &Source, word: &str, lower: &str) -> Vec<Entry> {
     let fits = |entry: &Entry| {
-        let name = entry.name.as_ref().is_some_and(|n| n.to_lowercase().contains(lower));
+        let name = entry
+            .name
+            .as_ref()
+            .is_some_and(|n| n.to_lowercase().contains(lower));
         let symbol = entry.subject == Subject::Symbol(word.to_string());
         name || symbol || entry.cas.as_deref() == Some(word)
     };

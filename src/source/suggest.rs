@@ -11,6 +11,11 @@ use super::resolve::Resolver;
 /// How many candidates a message names.
 const MOST: usize = 6;
 
+/// How many faults are helped by a search through all names, which takes milliseconds each.
+const MOST_SEARCHED: usize = 20;
+
+const OWN_VALUE: &str = "cite a value for it in a source file of your own and consult that";
+
 /// No consulted source lists the substance.
 pub(super) fn unknown_substance(resolver: &Resolver<'_>, wanted: &Wanted, span: &Span) -> Fault {
     Fault::new(
@@ -39,15 +44,24 @@ fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
     if !forms.is_empty() {
         return format!("the sources list: {}", forms.join(", "));
     }
+    if resolver.faults.len() >= MOST_SEARCHED {
+        return OWN_VALUE.to_string();
+    }
     let elsewhere = not_consulted(resolver, wanted);
     if !elsewhere.is_empty() {
-        return format!("add to `consult` a source that lists it: {}", elsewhere.join(", "));
+        return format!(
+            "add to `consult` a source that lists it: {}",
+            elsewhere.join(", ")
+        );
     }
     let near = near_names(resolver, wanted);
     if near.is_empty() {
-        return "cite a value for it in a source file of your own and consult that".to_string();
+        return OWN_VALUE.to_string();
     }
-    format!("did you mean {}? Otherwise cite a value in a source file of your own", near.join(", "))
+    format!(
+        "did you mean {}? Otherwise cite a value in a source file of your own",
+        near.join(", ")
+    )
 }
 
 /// Entries of the same composition in other phases or forms, or of another identity.
@@ -79,9 +93,7 @@ fn not_consulted(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<&'static str> 
 
 /// Substances whose notation or name is near to what was written.
 fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
-    let entries: Vec<Entry> = resolver.sources.iter().flat_map(|s| s.all()).collect();
-    let mut candidates: Vec<String> = entries.iter().filter_map(|e| Some(e.species()?.to_string())).collect();
-    candidates.extend(entries.iter().filter_map(|e| e.name.clone()));
+    let candidates = resolver.names.get_or_init(|| all_names(resolver));
     let words = std::iter::once(&wanted.label).chain(&wanted.names);
     let species = wanted.species.to_string();
     let mut near: Vec<String> = Vec::new();
@@ -95,6 +107,21 @@ fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
     }
     near.truncate(MOST);
     near
+}
+
+/// Every notation and every name that the consulted sources list.
+fn all_names(resolver: &Resolver<'_>) -> Vec<String> {
+    let entries: Vec<Entry> = resolver
+        .sources
+        .iter()
+        .flat_map(|source| source.all())
+        .collect();
+    let notations = entries
+        .iter()
+        .filter_map(|e| Some(e.species()?.to_string()));
+    notations
+        .chain(entries.iter().filter_map(|e| e.name.clone()))
+        .collect()
 }
 
 /// An entry with what tells it apart.
@@ -116,7 +143,9 @@ pub(super) fn ambiguous(
     entries: &[Entry],
 ) -> Fault {
     let labels: Vec<String> = entries.iter().take(MOST).map(label).collect();
-    let same_notation = entries.windows(2).all(|pair| pair[0].species() == pair[1].species());
+    let same_notation = entries
+        .windows(2)
+        .all(|pair| pair[0].species() == pair[1].species());
     let advice = match same_notation {
         true => declare(wanted, entries),
         false => "name the form: write one of them in the equation".to_string(),
@@ -141,9 +170,19 @@ fn declare(wanted: &Wanted, entries: &[Entry]) -> String {
         return "declare it under a name in [substances], with its CAS number".to_string();
     };
     let name = example.name.clone().unwrap_or_default();
-    let id: String = name.chars().map(|c| if c.is_ascii_alphanumeric() { c } else { '-' }).collect();
-    let phase = wanted.species.phase.as_ref().map_or_else(String::new, |p| p.label.symbol().to_string());
-    let cas = example.cas.as_ref().map_or_else(String::new, |cas| format!(", cas = \"{cas}\""));
+    let id: String = name
+        .chars()
+        .map(|c| if c.is_ascii_alphanumeric() { c } else { '-' })
+        .collect();
+    let phase = wanted
+        .species
+        .phase
+        .as_ref()
+        .map_or_else(String::new, |p| p.label.symbol().to_string());
+    let cas = example
+        .cas
+        .as_ref()
+        .map_or_else(String::new, |cas| format!(", cas = \"{cas}\""));
     format!(
         "declare the one that you mean and use its id, for example {} = {{ formula = \"{}\", \
          phase = \"{phase}\", name = \"{name}\"{cas} }}",
@@ -160,7 +199,10 @@ pub(super) fn no_enthalpy(
     source: usize,
     entry: &Entry,
 ) -> Fault {
-    let why = entry.note.as_ref().map_or_else(String::new, |note| format!(" ({note})"));
+    let why = entry
+        .note
+        .as_ref()
+        .map_or_else(String::new, |note| format!(" ({note})"));
     Fault::new(
         FaultCode::Source,
         resolver.text,
@@ -171,6 +213,9 @@ pub(super) fn no_enthalpy(
             resolver.sources[source].id()
         ),
         "an entry with `formation-enthalpy`",
-        format!("consult another source for `{}`, or cite a value of your own", wanted.label),
+        format!(
+            "consult another source for `{}`, or cite a value of your own",
+            wanted.label
+        ),
     )
 }

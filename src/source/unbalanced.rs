@@ -48,7 +48,11 @@ fn describe(surplus: &Surplus) -> String {
 fn balanced(reaction: &Reaction, coefficients: &[BigInt]) -> String {
     let equation = &reaction.equation.value;
     let (left, right) = coefficients.split_at(equation.left.len().min(coefficients.len()));
-    format!("{} -> {}", side(&equation.left, left), side(&equation.right, right))
+    format!(
+        "{} -> {}",
+        side(&equation.left, left),
+        side(&equation.right, right)
+    )
 }
 
 fn side(terms: &[Term], coefficients: &[BigInt]) -> String {

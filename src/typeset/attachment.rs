@@ -4,36 +4,9 @@ use std::collections::BTreeSet;
 
 use typst::foundations::{Array, Bytes, Dict, IntoValue, Value};
 
+use crate::record::{Attachment, Relationship};
+
 use super::TypesetError;
-
-/// How an attached file relates to the pages (AFRelationship, ISO 19005-3, 6.8).
-#[derive(Clone, Copy, Debug, PartialEq, Eq)]
-pub enum Relationship {
-    /// The pages were made from it.
-    Source,
-    /// It holds the data that the pages show.
-    Data,
-}
-
-impl Relationship {
-    fn keyword(self) -> &'static str {
-        match self {
-            Relationship::Source => "source",
-            Relationship::Data => "data",
-        }
-    }
-}
-
-/// A file to attach.
-#[derive(Clone, Debug, PartialEq, Eq)]
-pub struct Attachment {
-    /// Flat name: no folder, no separator.
-    pub name: String,
-    pub bytes: Vec<u8>,
-    pub relationship: Relationship,
-    pub media_type: &'static str,
-    pub description: String,
-}
 
 /// Names that a reader of the record can save under, each once.
 pub(super) fn check(attachments: &[Attachment]) -> Result<(), TypesetError> {
@@ -73,9 +46,17 @@ fn value(attachment: &Attachment) -> Value {
     put("data", Bytes::new(attachment.bytes.clone()).into_value());
     put(
         "relationship",
-        attachment.relationship.keyword().into_value(),
+        keyword(attachment.relationship).into_value(),
     );
     put("media-type", attachment.media_type.into_value());
     put("description", attachment.description.as_str().into_value());
     file.into_value()
+}
+
+/// The typesetter's word for a relationship.
+fn keyword(relationship: Relationship) -> &'static str {
+    match relationship {
+        Relationship::Source => "source",
+        Relationship::Data => "data",
+    }
 }

@@ -19,14 +19,13 @@ mod sample;
 #[cfg(test)]
 mod tests;
 
-pub use attachment::{Attachment, Relationship};
 pub use coverage::uncovered;
 pub use error::{Refusal, TypesetError};
 pub use fonts::{FontIdentity, fonts};
 pub use places::{SignatureBox, signature_boxes};
 pub use template::template_sha256;
 
-use crate::record::pages::Pages;
+use crate::record::{Attachment, Pages};
 use world::RecordWorld;
 
 /// The typesetter, as the manifest and the pages name it.

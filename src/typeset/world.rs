@@ -10,10 +10,11 @@ use typst::text::{Font, FontBook};
 use typst::utils::LazyHash;
 use typst::{Library, LibraryExt, World};
 
-use super::attachment::{self, Attachment};
+use super::attachment;
 use super::fonts::{BOOK, FACES};
 use super::template::{MAIN, SOURCES, file_id};
 use super::{Pages, TypesetError};
+use crate::record::Attachment;
 
 /// The file that the template reads its data from.
 const DATA: &str = "pages.json";

@@ -1,3 +1,5 @@
 //! Whole-program tests, in one binary because each links the typesetter.
 
+mod laws;
 mod outside;
+mod record;

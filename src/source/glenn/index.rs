@@ -71,18 +71,23 @@ impl GlennIndex {
             .collect()
     }
 
-    /// The entries under the file's own name; several where it uses one name for two forms.
-    pub fn by_name(&self, glenn_name: &str) -> Vec<GlennRecord> {
-        self.entries
-            .iter()
-            .filter(|entry| entry.named.glenn_name == glenn_name)
-            .filter_map(Entry::record)
-            .collect()
-    }
-
     /// All entries, in the order of the file.
     pub fn all(&self) -> impl Iterator<Item = GlennRecord> {
         self.entries.iter().filter_map(Entry::record)
+    }
+}
+
+/// What only tests ask for.
+#[cfg(test)]
+impl GlennIndex {
+    /// The entries under the file's own name; several where it uses one name for two forms.
+    pub fn by_name(&self, glenn_name: &str) -> Vec<GlennRecord> {
+        let own = |entry: &&Entry| entry.named.glenn_name == glenn_name;
+        self.entries
+            .iter()
+            .filter(own)
+            .filter_map(Entry::record)
+            .collect()
     }
 
     /// The composition keys in order; a key comes once for each of its entries.

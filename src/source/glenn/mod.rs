@@ -51,6 +51,7 @@ pub const SHA256: &str = "fa7746572952d74e249e818a82a35c113829742fb421a308e16718
 static THERMO: &str = include_str!("../data/nasa-glenn-2021/thermo.inp");
 static NAMES: &str = include_str!("../data/nasa-glenn-2021/names.tsv");
 
+#[cfg(test)]
 /// The embedded `thermo.inp`, byte for byte as NASA distributes it.
 pub fn bytes() -> &'static [u8] {
     THERMO.as_bytes()

@@ -1,10 +1,8 @@
 //! An invented record that uses every field and variant of the contract. Its numbers are made up
 //! for layout and stand for nothing.
 
-use crate::record::pages::*;
-use crate::record::rich::{Rich, Run};
-
-use super::{Attachment, Relationship};
+use crate::record::*;
+use crate::record::{Rich, Run};
 
 mod working;
 

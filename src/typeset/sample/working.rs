@@ -1,9 +1,9 @@
 //! The sample's working: a step of each kind, and equations of each shape and of too great a length.
 
 use super::{s, sulfate, water};
-use crate::record::math::Math;
-use crate::record::pages::*;
-use crate::record::rich::{Rich, Run};
+use crate::record::Math;
+use crate::record::*;
+use crate::record::{Rich, Run};
 
 fn symbol(text: &str) -> Math {
     Math::Symbol { text: s(text) }

@@ -3,7 +3,7 @@
 use typst::visualize::Geometry;
 
 use super::*;
-use crate::record::pages::{ProseSection, Step, ValueRow};
+use crate::record::{ProseSection, Step, ValueRow};
 
 #[test]
 fn every_variant_is_set_without_a_warning_and_within_the_margins() {

@@ -3,8 +3,8 @@
 use serde_json::Value;
 
 use super::*;
-use crate::record::pages::Step;
-use crate::record::rich::Rich;
+use crate::record::Rich;
+use crate::record::Step;
 
 /// What a person might try to smuggle into a page, and what is merely unusual. All of it has to
 /// appear as it stands.

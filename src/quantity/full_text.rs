@@ -1,0 +1,62 @@
+//! Numbers of a working in full, before anything is rounded.
+
+use super::exact::{Exact, round_to_place, terminating_decimal};
+use super::significance::Significance;
+
+/// Digits shown beyond the last significant place of a number whose decimals do not end.
+const GUARD_DIGITS: i64 = 3;
+
+/// The number as a decimal with the zeros that are significant: 2 × -285.830 is `-571.660`. Where
+/// its decimals do not end, some digits beyond its last place and an ellipsis.
+pub fn full_text(value: &Exact, significance: Significance) -> String {
+    let place = match significance {
+        Significance::Place(place) => place.min(0),
+        Significance::Exact | Significance::Unlimited => 0,
+    };
+    match terminating_decimal(value) {
+        Some(decimal) => padded(decimal, place),
+        None => {
+            let digits = place.min(-1) - GUARD_DIGITS;
+            format!("{}…", round_to_place(value, digits).text)
+        }
+    }
+}
+
+/// Zeros up to a decimal place.
+fn padded(decimal: String, place: i64) -> String {
+    // A place is bounded where a decimal is read, so this many zeros fit in memory.
+    let wanted = usize::try_from(-place).unwrap_or(0);
+    let have = decimal.split_once('.').map_or(0, |(_, part)| part.len());
+    if have >= wanted {
+        return decimal;
+    }
+    let point = if have == 0 { "." } else { "" };
+    format!("{decimal}{point}{}", "0".repeat(wanted - have))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::quantity::Decimal;
+
+    fn text(number: &str, place: i64) -> String {
+        // The numbers of this test are decimals.
+        let value = Decimal::parse(number).expect("a decimal").value();
+        full_text(&value, Significance::Place(place))
+    }
+
+    #[test]
+    fn significant_zeros_are_kept() {
+        assert_eq!(text("-571.66", -3), "-571.660");
+        assert_eq!(text("12", -1), "12.0");
+        assert_eq!(text("-571.66", -1), "-571.66");
+        assert_eq!(text("1200", 2), "1200");
+    }
+
+    #[test]
+    fn decimals_that_do_not_end_are_cut_with_an_ellipsis() {
+        let third = Exact::new(1.into(), 3.into());
+        assert_eq!(full_text(&third, Significance::Place(-2)), "0.33333…");
+        assert_eq!(full_text(&third, Significance::Exact), "0.3333…");
+    }
+}
