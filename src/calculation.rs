@@ -19,17 +19,23 @@ impl Calculation {
     /// Reads, resolves and works a case. All faults of the case and of the sources that it
     /// consults come together.
     pub fn of(text: Text, files: &dyn SourceFiles) -> Result<Calculation, Vec<Fault>> {
-        let (case, faults) = read_case(&text);
+        let (case, mut faults) = read_case(&text);
         let Some(case) = case else {
             return Err(faults.into_sorted());
         };
-        let (consultation, mut faults) = consult(&case, &text, files);
-        if !faults.is_empty() {
+        // Where the list of sources could not be read, no substance would be found.
+        if faults.has_syntax() || (case.consult.is_empty() && !faults.is_empty()) {
+            return Err(faults.into_sorted());
+        }
+        let (consultation, found) = consult(&case, &text, files);
+        let all_there = found.is_empty();
+        faults.extend(found);
+        if !all_there {
             return Err(faults.into_sorted());
         }
         let (problem, found) = resolve(&case, &text, consultation, files);
         faults.extend(found);
-        let Some(problem) = problem else {
+        let (Some(problem), true) = (problem, faults.is_empty()) else {
             return Err(faults.into_sorted());
         };
         let options = WorkOptions {

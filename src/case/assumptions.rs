@@ -1,6 +1,6 @@
 //! Reading assumptions and holds.
 
-use crate::document::{Table, value_fault};
+use crate::document::{Table, filled, value_fault};
 
 use super::model::{Assumption, Hold};
 
@@ -12,6 +12,7 @@ pub(super) fn read_assumptions(root: &Table<'_, '_>) -> Vec<Assumption> {
 fn read_assumption(table: &Table<'_, '_>) -> Option<Assumption> {
     table.only(&["text", "basis", "confirmed", "hold"]);
     let text = table.required_string("text", "say what is assumed");
+    let text = text.and_then(|text| filled(table.reader(), text));
     let basis = table.string("basis").map(|t| t.value);
     let (confirmed, hold) = read_standing(table);
     Some(Assumption {
@@ -43,7 +44,12 @@ fn read_hold(table: &Table<'_, '_>) -> Option<Hold> {
     table.only(&["owner", "closed-by", "accepted-by"]);
     let owner = table.required_string("owner", "name who will close the hold");
     let closed_by = table.required_string("closed-by", "say what will close the hold");
-    let accepted_by = table.string("accepted-by").map(|t| t.value);
+    let owner = owner.and_then(|text| filled(table.reader(), text));
+    let closed_by = closed_by.and_then(|text| filled(table.reader(), text));
+    let accepted_by = table
+        .string("accepted-by")
+        .and_then(|text| filled(table.reader(), text));
+    let accepted_by = accepted_by.map(|text| text.value);
     Some(Hold {
         owner: owner?.value,
         closed_by: closed_by?.value,

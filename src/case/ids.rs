@@ -1,5 +1,7 @@
 //! Ids: each names one thing in the whole case.
 
+use std::cell::Cell;
+
 use indexmap::IndexMap;
 
 use crate::document::{Reader, Table, is_id};
@@ -14,11 +16,12 @@ pub enum IdKind {
 }
 
 impl IdKind {
+    /// The word with its article.
     fn word(self) -> &'static str {
         match self {
-            IdKind::Substance => "substance",
-            IdKind::Input => "input",
-            IdKind::Reaction => "reaction",
+            IdKind::Substance => "a substance",
+            IdKind::Input => "an input",
+            IdKind::Reaction => "a reaction",
         }
     }
 }
@@ -27,7 +30,13 @@ impl IdKind {
 #[derive(Default)]
 pub(super) struct Ids {
     taken: IndexMap<String, (IdKind, Span)>,
+    /// How many unknown ids were compared with all others.
+    searched: Cell<usize>,
 }
+
+/// How many unknown ids are helped by a search through all others, so that a long case that is
+/// wrong everywhere is answered as soon as one that is right.
+const MOST_SEARCHED: usize = 50;
 
 impl Ids {
     /// Takes the ids of a table of named things.
@@ -55,11 +64,8 @@ impl Ids {
             reader.fault(
                 FaultCode::DuplicateId,
                 &id.span,
-                format!("the id `{}` for a {}", id.value, kind.word()),
-                format!(
-                    "an id of its own: line {line} has it for a {}",
-                    other.word()
-                ),
+                format!("the id `{}` for {}", id.value, kind.word()),
+                format!("an id of its own: line {line} has it for {}", other.word()),
                 "rename one of the two, and where it is used",
             );
             return;
@@ -73,11 +79,7 @@ impl Ids {
 
     /// Reports an id that nothing has, with the nearest one of the kind that was asked for.
     pub(super) fn unknown(&self, reader: &Reader<'_>, id: &str, span: &Span, wanted: &[IdKind]) {
-        let fitting = self
-            .taken
-            .iter()
-            .filter(|(_, (kind, _))| wanted.contains(kind));
-        let advice = match nearest(id, fitting.map(|(id, _)| id.as_str()), 1).first() {
+        let advice = match self.nearest(id, wanted) {
             Some(near) => format!("did you mean `{near}`?"),
             None => "define it, or use one that is defined".to_string(),
         };
@@ -86,8 +88,21 @@ impl Ids {
             FaultCode::UnknownId,
             span,
             format!("`{id}`"),
-            format!("the id of a {} of this case", words.join(" or ")),
+            format!("the id of {} of this case", words.join(" or ")),
             advice,
         );
+    }
+
+    fn nearest(&self, id: &str, wanted: &[IdKind]) -> Option<&str> {
+        self.searched.set(self.searched.get() + 1);
+        if self.searched.get() > MOST_SEARCHED {
+            return None;
+        }
+        let fitting = self
+            .taken
+            .iter()
+            .filter(|(_, (kind, _))| wanted.contains(kind));
+        let candidates = fitting.map(|(id, _)| id.as_str());
+        nearest(id, candidates, 1).first().copied()
     }
 }

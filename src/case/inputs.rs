@@ -2,7 +2,7 @@
 
 use indexmap::IndexMap;
 
-use crate::document::{Table, quantity, value_fault};
+use crate::document::{Table, quantity};
 use crate::finding::{FaultCode, Located};
 use crate::quantity::Quantity;
 
@@ -44,29 +44,15 @@ fn read_input(table: &Table<'_, '_>, id: Located<String>) -> Option<Input> {
     })
 }
 
+/// The tolerance has to fit the value that it stands beside.
 fn check_tolerance(table: &Table<'_, '_>, value: &Quantity, tolerance: &Located<Quantity>) {
-    let reader = table.reader();
-    if value.unit.dimension() != tolerance.value.unit.dimension() {
-        reader.fault(
+    if let Err(error) = value.clone().with_tolerance(&tolerance.value) {
+        table.reader().fault(
             FaultCode::Quantity,
             &tolerance.span,
-            format!("a tolerance in {}", tolerance.value.unit.symbol()),
-            format!(
-                "a tolerance of the same kind as the value, in {}",
-                value.unit.symbol()
-            ),
-            "write the tolerance in the unit of the value",
-        );
-    }
-    if tolerance.value.value_in_si() < num_traits::Zero::zero() {
-        let found = table.reader().text().slice(&tolerance.span).to_string();
-        let expected = "a half-width of zero or more";
-        value_fault(
-            reader,
-            &tolerance.span,
-            found,
-            expected,
-            "write it without a sign",
+            error.found(),
+            error.expected(),
+            error.advice(),
         );
     }
 }

@@ -5,11 +5,12 @@ use num_traits::One;
 
 use crate::document::{Reader, Table, quantity, unit, value_fault};
 use crate::finding::{FaultCode, Located};
-use crate::quantity::{Dimension, Exact, Unit, order_of_magnitude, power_of_ten};
+use crate::quantity::{Exact, Unit, order_of_magnitude, power_of_ten};
 
 use super::ids::Ids;
 use super::model::{Reaction, ResultUnits, RoundingRule};
 use super::prose::check_result;
+use super::reactions::{RESULT_QUANTITIES, result_dimension};
 
 pub(super) fn read_units(table: Option<&Table<'_, '_>>) -> ResultUnits {
     if let Some(table) = table {
@@ -74,12 +75,29 @@ pub(super) fn read_rounding(
     };
     let mut rules = Vec::new();
     for (result, value) in table.entries() {
+        if value.is_table() {
+            dotted(table, &result);
+            continue;
+        }
         let reader = table.reader();
-        check_result(reader, &result.value, &result.span, ids, reactions);
+        check_result(reader, &result, ids, reactions, NAME_ADVICE);
         let text = value.string();
         rules.extend(text.and_then(|text| read_rule(reader, result, &text)));
     }
     rules
+}
+
+const NAME_ADVICE: &str = "write it as in \"hydrogenation.heat\" = \"0.1 kJ/mol\"";
+
+/// `hydrogenation.heat` without quotes is a table to TOML.
+fn dotted(table: &Table<'_, '_>, result: &Located<String>) {
+    value_fault(
+        table.reader(),
+        &result.span,
+        format!("`{}` and a point without quotes", result.value),
+        "the name of a result in \"quotes\"",
+        NAME_ADVICE,
+    );
 }
 
 fn read_rule(
@@ -98,17 +116,22 @@ fn read_rule(
         );
         return None;
     };
-    let over = match result.value.ends_with("-mass") {
-        true => Dimension::MASS,
-        false => Dimension::AMOUNT,
-    };
-    if place.unit.dimension() != Dimension::ENERGY.over(over) {
+    let quantity = result
+        .value
+        .split_once('.')
+        .map_or("", |(_, quantity)| quantity);
+    let dimension = result_dimension(quantity);
+    if RESULT_QUANTITIES.contains(&quantity) && place.unit.dimension() != dimension {
         reader.fault(
             FaultCode::Quantity,
             &text.span,
-            format!("\"{}\", a place in {}", text.value, place.unit.dimension()),
-            format!("a place in {}", Dimension::ENERGY.over(over)),
-            format!("write it in the unit of {}", result.value),
+            format!(
+                "\"{}\", a place in a unit of {}",
+                text.value,
+                place.unit.dimension()
+            ),
+            format!("a unit of {dimension}"),
+            "write the place in the unit of the result",
         );
         return None;
     }

@@ -1,9 +1,9 @@
 //! Reading `[prose]`, and the results that it is bound to.
 
 use indexmap::IndexMap;
-use pulldown_cmark::{Event, Options, Parser};
+use pulldown_cmark::{Event, Options, Parser, Tag, TagEnd};
 
-use crate::document::{Reader, Table, is_id};
+use crate::document::{Reader, Table, is_id, value_fault};
 use crate::finding::{FaultCode, Located, Span, nearest};
 
 use super::ids::{IdKind, Ids};
@@ -49,21 +49,44 @@ pub fn bindings(text: &str) -> Vec<Binding> {
     found
 }
 
-/// The bindings of a Markdown text: those in its running text, none in code; `\\{` is a brace.
-fn markdown_bindings(markdown: &str) -> Vec<Binding> {
-    let mut found = Vec::new();
-    for (event, range) in Parser::new_ext(markdown, MARKDOWN).into_offset_iter() {
-        if !matches!(event, Event::Text(_)) {
-            continue;
-        }
-        for mut binding in bindings(&markdown[range.clone()]) {
-            binding.span = range.start + binding.span.start..range.start + binding.span.end;
-            if !is_escaped(markdown, &binding.span) {
-                found.push(binding);
+/// The braces of a Markdown text: those in its running text, none in code; `\\{` is a brace.
+#[derive(Debug, Default)]
+struct Braces {
+    bindings: Vec<Binding>,
+    /// Opening braces without a closing one in the same line.
+    open: Vec<Span>,
+}
+
+impl Braces {
+    fn of(markdown: &str) -> Braces {
+        let mut braces = Braces::default();
+        let mut in_code = false;
+        for (event, range) in Parser::new_ext(markdown, MARKDOWN).into_offset_iter() {
+            match event {
+                Event::Start(Tag::CodeBlock(_)) => in_code = true,
+                Event::End(TagEnd::CodeBlock) => in_code = false,
+                Event::Text(_) if !in_code => braces.add(markdown, range),
+                _ => {}
             }
         }
+        braces
     }
-    found
+
+    fn add(&mut self, markdown: &str, range: Span) {
+        let mut end = range.start;
+        for mut binding in bindings(&markdown[range.clone()]) {
+            binding.span = range.start + binding.span.start..range.start + binding.span.end;
+            end = binding.span.end;
+            if !is_escaped(markdown, &binding.span) {
+                self.bindings.push(binding);
+            }
+        }
+        let open = markdown[end..range.end]
+            .find('{')
+            .map(|at| end + at..end + at + 1);
+        self.open
+            .extend(open.filter(|open| !is_escaped(markdown, open)));
+    }
 }
 
 /// Whether a backslash stands before the opening brace.
@@ -96,32 +119,54 @@ fn check_bindings(
     ids: &Ids,
     reactions: &IndexMap<String, Reaction>,
 ) {
-    for binding in markdown_bindings(&markdown.value) {
-        let span = reader
-            .text()
-            .inside(&markdown.span, &markdown.value, &binding.span);
-        if ids.kind(&binding.name) != Some(IdKind::Input) {
-            check_result(reader, &binding.name, &span, ids, reactions);
+    let braces = Braces::of(&markdown.value);
+    let (literal, text) = (&markdown.span, &markdown.value);
+    // The text is looked for in its literal once: a long one can hold thousands of bindings.
+    let whole = reader.text().inside(literal, text, &(0..text.len()));
+    let place = |span: &Span| match whole.len() == text.len() {
+        true => whole.start + span.start..whole.start + span.end,
+        false => literal.clone(),
+    };
+    for binding in braces.bindings {
+        let name = Located::new(binding.name, place(&binding.span));
+        if ids.kind(&name.value) != Some(IdKind::Input) {
+            check_result(
+                reader,
+                &name,
+                ids,
+                reactions,
+                "write {reaction.heat} or {input}",
+            );
         }
+    }
+    for open in braces.open {
+        value_fault(
+            reader,
+            &place(&open),
+            "a brace that is not closed on its line",
+            "{reaction.heat} or {input}, on one line",
+            "close it; for a brace itself put a backslash before it",
+        );
     }
 }
 
 /// Reports a name that is not the name of a result of this case.
 pub(super) fn check_result(
     reader: &Reader<'_>,
-    name: &str,
-    span: &Span,
+    name: &Located<String>,
     ids: &Ids,
     reactions: &IndexMap<String, Reaction>,
+    advice: &str,
 ) {
-    let (id, quantity) = name.split_once('.').unwrap_or((name, ""));
+    let Located { value: name, span } = name;
+    let (id, quantity) = name.split_once('.').unwrap_or((name.as_str(), ""));
     if !is_id(id) || quantity.is_empty() {
         reader.fault(
             FaultCode::Value,
             span,
             format!("`{name}`"),
-            "a result (`id.quantity`) or the id of an input",
-            "write {reaction.heat}; write \\{ for a literal brace",
+            "the name of a result: id.quantity",
+            advice,
         );
     } else if ids.kind(id) != Some(IdKind::Reaction) {
         ids.unknown(reader, id, span, &[IdKind::Reaction]);
@@ -170,9 +215,15 @@ mod tests {
 
     #[test]
     fn code_and_escaped_braces_are_no_bindings() {
-        let found = markdown_bindings("*see* {x.heat}, `{y.heat}` and \\{z.heat}");
+        let found = Braces::of("*see* {x.heat}, `{y.heat}` and \\{z.heat}\n\n    {code}").bindings;
         let names: Vec<_> = found.iter().map(|b| b.name.as_str()).collect();
         assert_eq!(names, ["x.heat"]);
         assert_eq!(found[0].span, 6..14);
+    }
+
+    #[test]
+    fn a_brace_is_closed_on_its_line() {
+        assert_eq!(Braces::of("a {x\n.heat} b").open, [2..3]);
+        assert!(Braces::of("a \\{x").open.is_empty());
     }
 }

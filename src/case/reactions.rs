@@ -1,17 +1,26 @@
 //! Reading `[reactions]`.
 
 use indexmap::IndexMap;
+use num_traits::Signed;
 
 use crate::document::{Table, is_id, notation_fault, quantity, value_fault};
 use crate::finding::{FaultCode, Located};
 use crate::notation::{Equation, Participant};
-use crate::quantity::{Dimension, Quantity};
+use crate::quantity::{Dimension, Quantity, UnitKind};
 
 use super::ids::{IdKind, Ids};
 use super::model::{DeclaredKind, DeclaredSubstance, Input, Reaction};
 
 /// The results that a reaction can have.
 pub const RESULT_QUANTITIES: [&str; 3] = ["heat", "heat-per", "heat-per-mass"];
+
+/// What a result of a reaction measures.
+pub(super) fn result_dimension(quantity: &str) -> Dimension {
+    match quantity {
+        "heat-per-mass" => Dimension::ENERGY.over(Dimension::MASS),
+        _ => Dimension::ENERGY.over(Dimension::AMOUNT),
+    }
+}
 
 pub(super) fn read_reactions(
     table: &Table<'_, '_>,
@@ -46,6 +55,7 @@ impl Context<'_, '_, '_> {
     fn read_reaction(&self, id: Located<String>) -> Option<Reaction> {
         self.table.only(&["equation", "temperature", "per"]);
         let temperature = self.read_temperature();
+        let per = self.table.string("per");
         let advice = "write equation = \"N2(g) + 3 H2(g) -> 2 NH3(g)\"";
         let text = self.table.required_string("equation", advice)?;
         let equation = Equation::parse(&text.value);
@@ -56,7 +66,7 @@ impl Context<'_, '_, '_> {
         }
         let equation = Located::new(equation.ok()?, text.span.clone());
         self.check_participants(&equation, &text);
-        let per = self.read_per(&equation);
+        let per = per.and_then(|text| self.read_per(&equation, text));
         Some(Reaction {
             id,
             equation,
@@ -79,17 +89,32 @@ impl Context<'_, '_, '_> {
         } else {
             quantity(reader, &text)?
         };
-        if found.value.unit.dimension() == Dimension::TEMPERATURE {
-            return Some(found);
+        if found.value.unit.dimension() != Dimension::TEMPERATURE
+            || found.value.unit.kind() == UnitKind::Difference
+        {
+            let advice = "write it as \"25 °C\" or \"298.15 K\"";
+            reader.fault(
+                FaultCode::Quantity,
+                &text.span,
+                quoted(&text),
+                "a temperature",
+                advice,
+            );
+            return None;
         }
-        reader.fault(
-            FaultCode::Quantity,
-            &text.span,
-            format!("\"{}\"", text.value),
-            "a temperature",
-            "write it as \"25 °C\" or \"298.15 K\"",
-        );
-        None
+        if !found.value.value_in_si().is_positive() {
+            let advice = "check the number and its unit";
+            let expected = "a temperature above absolute zero";
+            reader.fault(
+                FaultCode::Quantity,
+                &text.span,
+                quoted(&text),
+                expected,
+                advice,
+            );
+            return None;
+        }
+        Some(found)
     }
 
     fn check_participants(&self, equation: &Located<Equation>, text: &Located<String>) {
@@ -115,8 +140,11 @@ impl Context<'_, '_, '_> {
     }
 
     /// The participant that `per` names, as it is written in the equation.
-    fn read_per(&self, equation: &Located<Equation>) -> Option<Located<String>> {
-        let text = self.table.string("per")?;
+    fn read_per(
+        &self,
+        equation: &Located<Equation>,
+        text: Located<String>,
+    ) -> Option<Located<String>> {
         let terms = equation.value.left.iter().chain(&equation.value.right);
         let names: Vec<String> = terms.map(|term| term.participant.to_string()).collect();
         let wanted = canonical_participant(&text.value);
@@ -132,6 +160,10 @@ impl Context<'_, '_, '_> {
         );
         None
     }
+}
+
+fn quoted(text: &Located<String>) -> String {
+    format!("\"{}\"", text.value)
 }
 
 /// A participant in the one way that equations print it.

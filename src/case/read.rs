@@ -41,11 +41,10 @@ const NOT_WORKED: [&str; 6] = [
     "criteria",
 ];
 
-/// Reads a case. It is there only where no fault was found.
+/// Reads a case. Where there are faults it holds what could be read in spite of them, so that the
+/// rest can be checked as well; such a case is not to be worked.
 pub fn read_case(text: &Text) -> (Option<Case>, Faults) {
-    let (case, faults) = with_document(text, |document| read_root(&document.root));
-    let case = if faults.is_empty() { case } else { None };
-    (case, faults)
+    with_document(text, |document| read_root(&document.root))
 }
 
 fn read_root(root: &Table<'_, '_>) -> Option<Case> {
@@ -68,9 +67,10 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
             "begin the case with a [record] table: number, revision, title, …",
         );
     }
-    let record = record.and_then(|table| read_record(&table));
+    let record = record.map(|table| read_record(&table));
     let substances = substances.map_or_else(IndexMap::new, |t| read_substances(&t));
     let inputs = inputs.map_or_else(IndexMap::new, |t| read_inputs(&t));
+    let stated = reactions.as_ref().map_or(0, |table| table.entries().len());
     let reactions = match reactions {
         Some(table) => read_reactions(&table, &ids, &inputs, &substances),
         None => {
@@ -89,11 +89,16 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
             "add [sources] with consult = [\"codata-1989\", \"nasa-glenn-2021\"]",
         );
     }
+    let mut choices = read_choices(sources.as_ref());
+    if reactions.len() < stated {
+        // They may be for a substance of a reaction that could not be read.
+        choices.clear();
+    }
     Some(Case {
         prose: read_prose(root.table("prose").as_ref(), &ids, &reactions),
         assumptions: read_assumptions(root),
         consult: read_consult(sources.as_ref()),
-        choices: read_choices(sources.as_ref()),
+        choices,
         rounding: read_rounding(root.table("rounding").as_ref(), &ids, &reactions),
         record: record?,
         substances,

@@ -2,7 +2,7 @@
 
 use chrono::NaiveDate;
 
-use crate::document::{Reader, Table, one_of, value_fault};
+use crate::document::{Reader, Table, filled, one_of, value_fault};
 use crate::finding::Located;
 
 use super::model::{RecordHead, Revision, Role, Status};
@@ -33,7 +33,8 @@ const ROLES: [(&str, Role); 3] = [
     ("approver", Role::Approver),
 ];
 
-pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
+/// Reads the head. What is at fault in it is reported and left empty.
+pub(super) fn read_record(table: &Table<'_, '_>) -> RecordHead {
     table.only(&KEYS);
     let reader = table.reader();
     let number = table.required_string("number", "give the record's number: number = \"C-1001\"");
@@ -45,6 +46,8 @@ pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
         "status = \"preliminary\", \"for-check\" or \"issued\"",
     );
     let date = required_date(table, "date");
+    let title = title.and_then(|text| fitting(reader, text, LONGEST_TITLE));
+    let preparer = preparer.and_then(|text| fitting(reader, text, LONGEST_NAME));
     let number = number.and_then(|text| file_word(reader, text));
     let revision = revision.and_then(|text| file_word(reader, text));
     let status =
@@ -55,19 +58,21 @@ pub(super) fn read_record(table: &Table<'_, '_>) -> Option<RecordHead> {
     let signatures = read_signatures(table);
     let facility = table.string("facility").map(|t| t.value);
     let (equipment, related) = (texts("equipment"), texts("related"));
-    Some(RecordHead {
-        number: number?,
-        revision: revision?,
-        title: title.and_then(|title| filled(reader, title, LONGEST_TITLE))?,
+    let empty = || Located::new(String::new(), table.span.clone());
+    let preliminary = || Located::new(Status::Preliminary, table.span.clone());
+    RecordHead {
+        number: number.unwrap_or_else(empty),
+        revision: revision.unwrap_or_else(empty),
+        title: title.unwrap_or_else(empty).value,
         facility,
         equipment,
         related,
-        date: date?,
-        preparer: preparer.and_then(|preparer| filled(reader, preparer, LONGEST_NAME))?,
-        status: status?,
+        date: date.unwrap_or_default(),
+        preparer: preparer.unwrap_or_else(empty).value,
+        status: status.unwrap_or_else(preliminary),
         history: history.into_iter().flatten().collect(),
         signatures,
-    })
+    }
 }
 
 fn required_date(table: &Table<'_, '_>, key: &str) -> Option<NaiveDate> {
@@ -92,7 +97,7 @@ fn file_word(reader: &Reader<'_>, text: Located<String>) -> Option<Located<Strin
         &text.span,
         format!("\"{}\"", text.value),
         "letters, digits, points, underscores and hyphens, begun by a letter or digit, at most 64",
-        "it becomes part of a file name: write it with these characters alone",
+        "write it with these characters alone: it becomes part of a file name",
     );
     None
 }
@@ -101,7 +106,8 @@ fn file_word(reader: &Reader<'_>, text: Located<String>) -> Option<Located<Strin
 const LONGEST_TITLE: usize = 200;
 const LONGEST_NAME: usize = 80;
 
-fn filled(reader: &Reader<'_>, text: Located<String>, longest: usize) -> Option<String> {
+fn fitting(reader: &Reader<'_>, text: Located<String>, longest: usize) -> Option<Located<String>> {
+    let text = filled(reader, text)?;
     let count = text.value.chars().count();
     if count > longest {
         value_fault(
@@ -113,11 +119,7 @@ fn filled(reader: &Reader<'_>, text: Located<String>, longest: usize) -> Option<
         );
         return None;
     }
-    if text.value.trim().is_empty() {
-        value_fault(reader, &text.span, "an empty string", "words", "fill it in");
-        return None;
-    }
-    Some(text.value)
+    Some(text)
 }
 
 fn read_revision(table: &Table<'_, '_>) -> Option<Revision> {

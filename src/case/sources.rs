@@ -1,10 +1,12 @@
 //! Reading `[sources]`: which are consulted, in which order, and what was chosen.
 
-use crate::document::{Table, value_fault};
+use crate::document::{Table, filled, value_fault};
 use crate::finding::Located;
 
 use super::model::Choice;
 
+/// The sources in their order; none where one of them could not be read, because the others alone
+/// would answer differently.
 pub(super) fn read_consult(table: Option<&Table<'_, '_>>) -> Vec<Located<String>> {
     let Some(table) = table else {
         return Vec::new();
@@ -16,12 +18,13 @@ pub(super) fn read_consult(table: Option<&Table<'_, '_>>) -> Vec<Located<String>
             "list the sources in order: consult = [\"codata-1989\"]",
         );
     }
-    let consult = table.strings("consult");
-    for (index, text) in consult.iter().enumerate() {
-        if consult[..index]
-            .iter()
-            .any(|earlier| earlier.value == text.value)
-        {
+    let named = table.strings("consult");
+    if named.len() < table.get("consult").map_or(0, |value| value.count()) {
+        return Vec::new();
+    }
+    let mut consult: Vec<Located<String>> = Vec::new();
+    for text in named {
+        if consult.iter().any(|earlier| earlier.value == text.value) {
             value_fault(
                 table.reader(),
                 &text.span,
@@ -29,6 +32,8 @@ pub(super) fn read_consult(table: Option<&Table<'_, '_>>) -> Vec<Located<String>
                 "each source once, in order of preference",
                 "remove one of the two",
             );
+        } else {
+            consult.push(text);
         }
     }
     consult
@@ -44,6 +49,7 @@ pub(super) fn read_choices(table: Option<&Table<'_, '_>>) -> Vec<Choice> {
         table.only(&["source", "because"]);
         let source = table.required_string("source", "name the source that serves");
         let because = table.required_string("because", "say why this source and not the other");
+        let because = because.and_then(|text| filled(table.reader(), text));
         if let (Some(source), Some(because)) = (source, because) {
             choices.push(Choice {
                 substance,

@@ -2,6 +2,8 @@
 
 use std::io::{self, IsTerminal, Write};
 
+use crate::finding::visible;
+
 /// Widest lines that are written for people.
 pub const WIDTH: usize = 80;
 
@@ -92,15 +94,9 @@ pub fn wrap(first: &str, text: &str) -> String {
         .collect()
 }
 
-/// Text from a file without what would move the cursor.
+/// Text from a file without what would move the cursor or change the order of characters.
 pub fn plain(text: &str) -> String {
-    let shown = |c: char| {
-        if c.is_control() && c != '\n' {
-            '\u{fffd}'
-        } else {
-            c
-        }
-    };
+    let shown = |c: char| if c == '\n' { c } else { visible(c) };
     text.chars().map(shown).collect()
 }
 

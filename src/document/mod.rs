@@ -4,14 +4,19 @@
 //! the keys mean. A reader asks a [`Table`] for keys; what is missing, of the wrong type or
 //! unknown becomes a fault in the [`Reader`], and reading goes on.
 
+mod cas;
 mod file;
 mod reader;
+mod syntax;
 mod table;
 mod value;
 mod words;
 
+pub use cas::cas_number;
 pub use file::read_text;
 pub use reader::{Document, Reader, with_document};
 pub use table::Table;
 pub use value::Value;
-pub use words::{is_id, notation_fault, number, one_of, quantity, species, unit, value_fault};
+pub use words::{
+    filled, is_id, notation_fault, number, one_of, quantity, species, unit, value_fault,
+};

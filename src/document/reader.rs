@@ -1,21 +1,21 @@
 //! The reader: a document's text and the faults found in it.
 
 use std::cell::RefCell;
+use std::collections::BTreeSet;
 
 use toml::Spanned;
 use toml::de::DeTable;
 
+use super::syntax::report_syntax;
 use super::table::Table;
 use crate::finding::{Fault, FaultCode, Faults, Span, Text};
-
-/// How many syntax errors of one file are reported; a file that is not TOML at all would
-/// otherwise be answered by a wall of text.
-const MOST_SYNTAX_ERRORS: usize = 20;
 
 /// The text being read and the faults found so far.
 pub struct Reader<'d> {
     text: &'d Text,
     faults: RefCell<Faults>,
+    /// Tables and keys that an unknown key was probably meant for; they are not missing as well.
+    meant: RefCell<BTreeSet<(String, String)>>,
 }
 
 impl<'d> Reader<'d> {
@@ -24,6 +24,7 @@ impl<'d> Reader<'d> {
         Reader {
             text,
             faults: RefCell::default(),
+            meant: RefCell::default(),
         }
     }
 
@@ -44,6 +45,19 @@ impl<'d> Reader<'d> {
         self.faults.borrow_mut().push(fault);
     }
 
+    /// Remembers that an unknown key of a table was reported with this key as the one meant.
+    pub(super) fn mean(&self, table: &str, key: &str) {
+        self.meant
+            .borrow_mut()
+            .insert((table.to_string(), key.to_string()));
+    }
+
+    pub(super) fn is_meant(&self, table: &str, key: &str) -> bool {
+        self.meant
+            .borrow()
+            .contains(&(table.to_string(), key.to_string()))
+    }
+
     /// The faults, taken out.
     pub fn into_faults(self) -> Faults {
         self.faults.into_inner()
@@ -61,46 +75,13 @@ pub struct Document<'r, 'd> {
 pub fn with_document<T>(text: &Text, read: impl FnOnce(&Document<'_, '_>) -> T) -> (T, Faults) {
     let (root, errors) = DeTable::parse_recoverable(text.as_str());
     let reader = Reader::new(text);
-    for error in errors.iter().take(MOST_SYNTAX_ERRORS) {
-        syntax_fault(&reader, error);
-    }
+    report_syntax(&reader, &errors);
     let document = Document {
         root: Table::root(&reader, &root),
         reader: &reader,
     };
     let value = read(&document);
     (value, reader.into_faults())
-}
-
-fn syntax_fault(reader: &Reader<'_>, error: &toml::de::Error) {
-    let end = reader.text.as_str().len();
-    let span = error.span().unwrap_or(end..end);
-    let message = error.message();
-    let (problem, expected) = match message.split_once(", expected ") {
-        Some((problem, expected)) => (problem, expected.to_string()),
-        None => (message, "TOML 1.1".to_string()),
-    };
-    let token = reader.text.slice(&span);
-    let found = if token.trim().is_empty() {
-        problem.to_string()
-    } else {
-        format!("{problem}: {token}")
-    };
-    let (expected, advice) = syntax_help(problem, expected);
-    reader.fault(FaultCode::Syntax, &span, found, expected, advice);
-}
-
-fn syntax_help(problem: &str, expected: String) -> (String, &'static str) {
-    match problem {
-        "duplicate key" => (
-            "each key once in its table".to_string(),
-            "remove or rename one of the two",
-        ),
-        _ => (
-            expected,
-            "mend the line; strings stand in \"quotes\", tables in [brackets]",
-        ),
-    }
 }
 
 /// The span of a table in a document that was parsed.

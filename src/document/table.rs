@@ -89,7 +89,10 @@ impl<'r, 'd> Table<'r, 'd> {
 
     fn unknown_key(&self, key: &str, span: &Span, known: &[&str]) {
         let advice = match nearest(key, known.iter().copied(), 1).first() {
-            Some(near) => format!("did you mean `{near}`?"),
+            Some(near) => {
+                self.reader.mean(&self.path, near);
+                format!("did you mean `{near}`?")
+            }
             None => "remove it, or move it to the table that it belongs to".to_string(),
         };
         self.reader.fault(
@@ -105,12 +108,17 @@ impl<'r, 'd> Table<'r, 'd> {
     pub fn title(&self) -> String {
         match self.path.as_str() {
             "" => "the file".to_string(),
+            path if path.ends_with(']') || path.contains("].") => format!("`{path}`"),
             path => format!("[{path}]"),
         }
     }
 
-    /// Reports that a key has to be there and is not.
+    /// Reports that a key has to be there and is not; a slip in its name was reported already.
+    /// Call [`Table::only`] before.
     pub fn missing(&self, key: &str, advice: &str) {
+        if self.reader.is_meant(&self.path, key) {
+            return;
+        }
         self.reader.fault(
             FaultCode::MissingKey,
             &self.span,

@@ -6,7 +6,10 @@ use toml::de::DeValue;
 
 use super::reader::Reader;
 use super::table::Table;
-use crate::finding::{FaultCode, Located, Span};
+use crate::finding::{FaultCode, Located, Span, shorten};
+
+/// How much of a value messages repeat.
+const LONGEST_VALUE: usize = 48;
 
 /// A value with the key it belongs to.
 #[derive(Clone)]
@@ -46,10 +49,15 @@ impl<'r, 'd> Value<'r, 'd> {
         self.value.get_ref().is_str()
     }
 
+    /// Whether the value is a table, without complaint where it is not.
+    pub fn is_table(&self) -> bool {
+        self.value.get_ref().is_table()
+    }
+
     pub fn string(&self) -> Option<Located<String>> {
         match self.value.get_ref() {
             DeValue::String(text) => Some(Located::new(text.to_string(), self.span())),
-            _ => self.wrong_type("a string in quotes", "put it in \"quotes\""),
+            _ => self.wrong_type("text in \"quotes\"", "put it in \"quotes\""),
         }
     }
 
@@ -87,7 +95,7 @@ impl<'r, 'd> Value<'r, 'd> {
 
     /// An array of strings; elements of another type are reported and left out.
     pub fn strings(&self) -> Vec<Located<String>> {
-        self.elements("an array of strings")
+        self.elements("a list of texts", "put it in [brackets]")
             .iter()
             .filter_map(Value::string)
             .collect()
@@ -95,16 +103,27 @@ impl<'r, 'd> Value<'r, 'd> {
 
     /// An array of tables; elements of another type are reported and left out.
     pub fn tables(&self) -> Vec<Table<'r, 'd>> {
-        self.elements("an array of tables")
-            .iter()
-            .filter_map(Value::table)
-            .collect()
+        self.elements(
+            "a list of tables",
+            "write it as [{ key = \"value\" }] or under a [[header]]",
+        )
+        .iter()
+        .filter_map(Value::table)
+        .collect()
+    }
+
+    /// How many elements an array has; none where it is none.
+    pub fn count(&self) -> usize {
+        self.value
+            .get_ref()
+            .as_array()
+            .map_or(0, |array| array.len())
     }
 
     /// The elements of an array.
-    pub fn elements(&self, expected: &str) -> Vec<Value<'r, 'd>> {
+    pub fn elements(&self, expected: &str, advice: &str) -> Vec<Value<'r, 'd>> {
         let DeValue::Array(array) = self.value.get_ref() else {
-            self.wrong_type::<()>(expected, "put it in [brackets]");
+            self.wrong_type::<()>(expected, advice);
             return Vec::new();
         };
         let element = |(i, value): (usize, &'r Spanned<DeValue<'d>>)| {
@@ -119,7 +138,7 @@ impl<'r, 'd> Value<'r, 'd> {
         match self.value.get_ref() {
             DeValue::String(text) => found.push(Located::new(text.to_string(), self.span())),
             DeValue::Array(_) => {
-                for element in self.elements("an array") {
+                for element in self.elements("a list", "") {
                     element.collect_strings(found);
                 }
             }
@@ -152,16 +171,30 @@ impl<'r, 'd> Value<'r, 'd> {
         }
     }
 
+    /// What messages call a value of its type.
+    fn kind(&self) -> &'static str {
+        match self.value.get_ref() {
+            DeValue::String(_) => "the text",
+            DeValue::Integer(_) | DeValue::Float(_) => "the number",
+            DeValue::Boolean(_) => "the word",
+            DeValue::Datetime(_) => "the date or time",
+            DeValue::Array(_) => "the list",
+            DeValue::Table(_) => "the table",
+        }
+    }
+
+    /// The value as it stands in the file, on one line.
+    fn shown(&self) -> String {
+        let text = self.reader.text().slice(&self.span());
+        shorten(text.lines().next().unwrap_or(""), LONGEST_VALUE)
+    }
+
     fn wrong_type<T>(&self, expected: &str, advice: &str) -> Option<T> {
         self.reader.fault(
             FaultCode::WrongType,
             &self.span(),
-            format!(
-                "{}: {}",
-                self.value.get_ref().type_str(),
-                self.reader.text().slice(&self.span())
-            ),
-            format!("`{}` is {expected}", self.path),
+            format!("{} {}", self.kind(), self.shown()),
+            format!("`{}` as {expected}", self.path),
             advice,
         );
         None

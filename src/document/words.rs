@@ -113,6 +113,15 @@ pub fn one_of<T: Copy>(
     found.map(|(_, value)| *value)
 }
 
+/// Words that have to be there.
+pub fn filled(reader: &Reader<'_>, text: Located<String>) -> Option<Located<String>> {
+    if text.value.trim().is_empty() {
+        value_fault(reader, &text.span, "an empty text", "words", "fill it in");
+        return None;
+    }
+    Some(text)
+}
+
 /// A fault of a value that is well-formed and still cannot be.
 pub fn value_fault(
     reader: &Reader<'_>,

@@ -1,8 +1,11 @@
 //! Faults: what is wrong with an input, so that there is no working.
 
-use super::nearest::shorten;
+use std::collections::BTreeSet;
+
+use super::nearest::{shorten, shorten_words};
 use super::place::{Place, Span};
 use super::text::Text;
+use super::visible::visible;
 
 /// What kind of fault it is; the word is stable and stands in messages and JSON.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
@@ -70,6 +73,10 @@ pub struct Fault {
 /// How much of a long line is shown before and after the fault.
 const CONTEXT: usize = 48;
 
+/// How much of the file a message repeats, and how much of one word of it.
+const LONGEST_FOUND: usize = 200;
+const LONGEST_WORD: usize = 48;
+
 impl Fault {
     pub fn new(
         code: FaultCode,
@@ -86,7 +93,7 @@ impl Fault {
             place,
             line,
             mark,
-            found: shorten(found.as_ref(), 160),
+            found: shorten(&shorten_words(found.as_ref(), LONGEST_WORD), LONGEST_FOUND),
             expected: expected.into(),
             advice: advice.into(),
         }
@@ -111,6 +118,12 @@ impl Fault {
     }
 }
 
+impl Fault {
+    fn line_of_file(&self) -> (String, usize) {
+        (self.place.file.clone(), self.place.line)
+    }
+}
+
 fn excerpt(text: &Text, place: &Place, span: &Span) -> (String, (usize, usize)) {
     let line: Vec<char> = text.line(place.line).chars().collect();
     let start = (place.column - 1).min(line.len());
@@ -123,18 +136,17 @@ fn excerpt(text: &Text, place: &Place, span: &Span) -> (String, (usize, usize)) 
     let to = (start + length.min(CONTEXT) + CONTEXT).min(line.len());
     let head = if from > 0 { "…" } else { "" };
     let tail = if to < line.len() { "…" } else { "" };
-    let body: String = line[from..to].iter().map(|c| visible(*c)).collect();
+    let body: String = line[from..to].iter().map(|c| in_line(*c)).collect();
     let offset = start - from + head.chars().count();
     let shown = length.min(to.max(start + 1) - start);
     (format!("{head}{body}{tail}"), (offset, shown))
 }
 
-/// Control characters would move the cursor or change colours where the line is shown.
-fn visible(c: char) -> char {
+/// A tab counts as one character, so that the mark stands under what it marks.
+fn in_line(c: char) -> char {
     match c {
         '\t' => ' ',
-        c if c.is_control() => '\u{fffd}',
-        c => c,
+        c => visible(c),
     }
 }
 
@@ -161,11 +173,28 @@ impl Faults {
         self.list.extend(other.list);
     }
 
+    /// Whether a syntax error is among them.
+    pub fn has_syntax(&self) -> bool {
+        self.list
+            .iter()
+            .any(|fault| fault.code == FaultCode::Syntax)
+    }
+
     /// The faults in the order of their places. Where there are syntax errors, faults that may
-    /// only follow from them are left out: the next run will tell.
+    /// only follow from them are left out, and so are all others on their lines: the next run
+    /// will tell.
     pub fn into_sorted(mut self) -> Vec<Fault> {
-        if self.list.iter().any(|f| f.code == FaultCode::Syntax) {
-            self.list.retain(|f| !f.code.follows_from_syntax());
+        let syntax = self
+            .list
+            .iter()
+            .filter(|fault| fault.code == FaultCode::Syntax);
+        let lines: BTreeSet<(String, usize)> = syntax.map(Fault::line_of_file).collect();
+        if !lines.is_empty() {
+            self.list.retain(|fault| {
+                let follows =
+                    fault.code.follows_from_syntax() || lines.contains(&fault.line_of_file());
+                fault.code == FaultCode::Syntax || !follows
+            });
         }
         self.list
             .sort_by(|a, b| (&a.place, a.code).cmp(&(&b.place, b.code)));
@@ -195,13 +224,18 @@ mod tests {
 
     #[test]
     fn faults_that_follow_from_syntax_errors_are_left_out() {
-        let text = Text::new("a", "ab");
+        let text = Text::new("a", "a\nbc");
         let mut faults = Faults::default();
-        for code in [FaultCode::MissingKey, FaultCode::Syntax, FaultCode::Value] {
-            faults.push(Fault::new(code, &text, &(0..1), "", "", ""));
+        for (code, at) in [
+            (FaultCode::Value, 0),
+            (FaultCode::MissingKey, 0),
+            (FaultCode::Syntax, 2),
+            (FaultCode::WrongType, 3),
+        ] {
+            faults.push(Fault::new(code, &text, &(at..at + 1), "", "", ""));
         }
         let codes: Vec<_> = faults.into_sorted().into_iter().map(|f| f.code).collect();
-        assert_eq!(codes, [FaultCode::Syntax, FaultCode::Value]);
+        assert_eq!(codes, [FaultCode::Value, FaultCode::Syntax]);
     }
 
     #[test]

@@ -6,9 +6,11 @@ mod nearest;
 mod place;
 mod severity;
 mod text;
+mod visible;
 
 pub use fault::{Fault, FaultCode, Faults};
-pub use nearest::{nearest, shorten};
+pub use nearest::{nearest, shorten, shorten_words};
 pub use place::{Located, Place, Span};
 pub use severity::{Finding, FindingCode, Severity};
 pub use text::Text;
+pub use visible::visible;

@@ -38,6 +38,16 @@ pub fn shorten(text: &str, most: usize) -> String {
     format!("{head}…{tail} ({count} characters)")
 }
 
+/// A text whose words are at most `most` characters long, so that it can be broken into lines.
+pub fn shorten_words(text: &str, most: usize) -> String {
+    let parts = text.split_inclusive(char::is_whitespace);
+    let short = |part: &str| match part.chars().count() > most + 1 {
+        true => shorten(part, most),
+        false => part.to_string(),
+    };
+    parts.map(short).collect()
+}
+
 #[cfg(test)]
 mod tests {
     use super::*;

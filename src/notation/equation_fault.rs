@@ -48,7 +48,7 @@ impl EquationFault {
             Self::SecondArrow { arrow } => Message::new(
                 format!("a second arrow, {}", quoted(arrow)),
                 "one arrow",
-                "write each step as an equation of its own",
+                "write each step as an equation of its own, and no bonds in formulas",
             ),
             Self::WrongArrow { arrow } => Message::new(
                 format!("the arrow {}", quoted(arrow)),

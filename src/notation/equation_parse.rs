@@ -118,6 +118,7 @@ fn read_term(text: &str, span: Range<usize>) -> Result<Term, NotationError> {
         return Err(NotationError::new(0..0, EquationFault::EmptyTerm));
     }
     refuse_negative(text)?;
+    refuse_comma(text)?;
     let mut cursor = Cursor::new(text);
     let number = scan_positive(&mut cursor, NumberRole::Coefficient)?;
     match &number {
@@ -158,6 +159,15 @@ fn refuse_negative(text: &str) -> Result<(), NotationError> {
         written: cursor.read().to_owned(),
     };
     Err(NotationError::new(0..cursor.at(), fault))
+}
+
+/// Refuses a comma between digits: `0,5` is not a coefficient of zero.
+fn refuse_comma(text: &str) -> Result<(), NotationError> {
+    let digits = text.trim_start_matches(|c: char| c.is_ascii_digit());
+    match digits.len() < text.len() && digits.starts_with(',') {
+        true => Err(malformed(text)),
+        false => Ok(()),
+    }
 }
 
 /// Refuses a number that goes on as none does, or that runs into a declared name.

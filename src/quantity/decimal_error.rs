@@ -94,7 +94,9 @@ explained_error!(DecimalError);
 /// The likely intention behind a character that no number contains.
 fn advice_on(character: char) -> &'static str {
     match character {
-        ',' | '\'' | '_' => "use a decimal point, and nothing between groups of digits: 1234.5",
+        ' ' | ',' | '\'' | '_' => {
+            "use a decimal point, and nothing between groups of digits: 1234.5"
+        }
         '×' | '*' | '^' | 'd' | 'D' => "write a power of ten as 1.200e3",
         '.' => "leave one decimal point",
         _ => "put a space between a number and its unit, and nothing inside the number",

@@ -17,6 +17,8 @@ pub enum QuantityError {
     BadUncertainty { span: Range<usize>, text: String },
     /// `exact` beside a stated uncertainty.
     ExactWithUncertainty { span: Range<usize> },
+    /// `±` behind the unit.
+    UncertaintyAfterUnit { span: Range<usize> },
     /// A unit where the source has stated it for all values.
     UnitNotWanted { span: Range<usize>, text: String },
     /// A tolerance beside a value that states an uncertainty or is exact.
@@ -36,6 +38,7 @@ impl QuantityError {
             Self::Unit(error) => error.span(),
             Self::BadUncertainty { span, .. }
             | Self::ExactWithUncertainty { span }
+            | Self::UncertaintyAfterUnit { span }
             | Self::UnitNotWanted { span, .. } => Some(span.clone()),
             Self::ToleranceBesideUncertainty
             | Self::BadTolerance { .. }
@@ -50,6 +53,7 @@ impl QuantityError {
             Self::Unit(error) => error.found(),
             Self::BadUncertainty { text, .. } => format!("the uncertainty {}", quoted(text)),
             Self::ExactWithUncertainty { .. } => "an exact value with an uncertainty".to_owned(),
+            Self::UncertaintyAfterUnit { .. } => "an uncertainty behind the unit".to_owned(),
             Self::UnitNotWanted { text, .. } => format!("the unit {}", quoted(text)),
             Self::ToleranceBesideUncertainty => {
                 "a tolerance beside a value that is exact or states an uncertainty".to_owned()
@@ -69,6 +73,7 @@ impl QuantityError {
             Self::ExactWithUncertainty { .. } | Self::ToleranceBesideUncertainty => {
                 "one statement of how well the value is known"
             }
+            Self::UncertaintyAfterUnit { .. } => "one unit, behind value and uncertainty",
             Self::UnitNotWanted { .. } => "a number without a unit",
             Self::BadTolerance { .. } => "a positive half-width without an uncertainty",
             Self::ToleranceIsReading { .. } => "a temperature difference",
@@ -86,6 +91,7 @@ impl QuantityError {
                  that has none"
             }
             Self::ExactWithUncertainty { .. } => "leave out exact, or the uncertainty",
+            Self::UncertaintyAfterUnit { .. } => "write it as 12.5 ± 0.4 kg",
             Self::UnitNotWanted { .. } => "leave the unit to the source",
             Self::ToleranceBesideUncertainty => "leave one of them out",
             Self::BadTolerance { .. } => "write a tolerance of ±12 kg as 12 kg",

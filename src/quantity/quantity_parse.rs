@@ -32,6 +32,7 @@ impl Quantity {
             return number.with(Unit::one(), String::new());
         }
         let start = rest + text[rest..].len() - text[rest..].trim_start().len();
+        refuse_more_number(written, rest, start)?;
         let unit = Unit::parse(written).map_err(|error| error.shifted(start))?;
         number.with(unit, written.to_owned())
     }
@@ -52,6 +53,25 @@ impl Quantity {
             });
         }
         number.with(Unit::one(), String::new())
+    }
+}
+
+/// Refuses digits in groups (`1 200 kg`) and an uncertainty behind the unit (`12 kg ± 1 kg`).
+fn refuse_more_number(unit: &str, rest: usize, start: usize) -> Result<(), QuantityError> {
+    let digits = unit.len() - unit.trim_start_matches(|c: char| c.is_ascii_digit()).len();
+    if digits > 0 && !unit.starts_with("1/") && !unit.starts_with("1 ") {
+        let span = rest..start + digits;
+        let error = DecimalError::Unexpected {
+            span,
+            character: ' ',
+        };
+        return Err(QuantityError::Number(error));
+    }
+    match PLUS_MINUS.iter().find_map(|sign| unit.find(sign)) {
+        Some(at) => Err(QuantityError::UncertaintyAfterUnit {
+            span: start + at..start + unit.len(),
+        }),
+        None => Ok(()),
     }
 }
 

@@ -1,6 +1,5 @@
 //! Sources and their entries, as typed data.
 
-use crate::finding::Place;
 use crate::notation::{Element, Species};
 use crate::quantity::{Coverage, Decimal, Quantity, Unit};
 
@@ -96,8 +95,6 @@ pub struct Entry {
     pub value: Option<Quantity>,
     pub heat_capacity: Vec<HeatCapacity>,
     pub transitions: Vec<Transition>,
-    /// Where the entry stands in its file.
-    pub place: Place,
 }
 
 impl Entry {

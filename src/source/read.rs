@@ -4,9 +4,9 @@ use sha2::{Digest, Sha256};
 
 use crate::document::{Document, Reader, Table, one_of, quantity, unit, value_fault};
 use crate::document::{species, with_document};
-use crate::finding::{Faults, Located, Text};
+use crate::finding::{FaultCode, Faults, Located, Text};
 use crate::notation::Element;
-use crate::quantity::{Coverage, Decimal, StatedUncertainty};
+use crate::quantity::{Coverage, Decimal, Dimension, Quantity, StatedUncertainty, Unit, UnitKind};
 
 use super::model::{Digits, Entry, Erratum, SourceHead, StatedCorrelation};
 use super::read_entry::{EntryRules, read_entry};
@@ -52,7 +52,7 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
         );
         return None;
     };
-    let head = read_head(&table, text)?;
+    let head = read_head(&table, text);
     let rules = EntryRules::of(&head);
     let entries = root.tables("entry");
     let entries: Vec<Entry> = entries
@@ -60,6 +60,7 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
         .filter_map(|t| read_entry(t, &rules))
         .collect();
     require_for_entries(&table, &head, &entries);
+    refuse_repeated(document.reader, &root.tables("entry"), &entries);
     let correlations = root.tables("correlation");
     let correlations = correlations.iter().filter_map(read_correlation);
     let errata = root.tables("erratum");
@@ -72,11 +73,25 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
     ))
 }
 
+/// Reads the `[source]` table of a text that holds nothing else.
+pub(super) fn read_head_alone(text: &Text) -> Option<SourceHead> {
+    let (head, _) = with_document(text, |document| {
+        read_head(&document.root.table("source")?, text)
+    });
+    head
+}
+
 /// What the entries need the head to say, so that nothing about them is guessed.
 fn require_for_entries(table: &Table<'_, '_>, head: &SourceHead, entries: &[Entry]) {
     let enthalpies = entries
         .iter()
         .any(|entry| entry.formation_enthalpy.is_some());
+    if enthalpies && head.energy_unit.is_none() && table.get("energy-unit").is_none() {
+        table.missing(
+            "energy-unit",
+            "add the unit that the table prints: energy-unit = \"kJ/mol\"",
+        );
+    }
     if enthalpies && head.temperature.is_none() && table.get("temperature").is_none() {
         table.missing(
             "temperature",
@@ -96,22 +111,46 @@ fn require_for_entries(table: &Table<'_, '_>, head: &SourceHead, entries: &[Entr
     }
 }
 
-fn read_head(table: &Table<'_, '_>, text: &Text) -> Option<SourceHead> {
+/// Two entries that nothing tells apart would make each other useless.
+fn refuse_repeated(reader: &Reader<'_>, tables: &[Table<'_, '_>], entries: &[Entry]) {
+    for (index, entry) in entries.iter().enumerate() {
+        let same = |other: &&Entry| {
+            (&other.subject, &other.name, &other.cas) == (&entry.subject, &entry.name, &entry.cas)
+        };
+        let Some(first) = entries[..index].iter().find(same) else {
+            continue;
+        };
+        let substances = tables.iter().filter_map(|table| table.get("substance"));
+        let mut spans = substances.map(|value| value.span());
+        let span = spans.find(|span| reader.text().place(span.start) == entry.place);
+        reader.fault(
+            FaultCode::DuplicateId,
+            &span.unwrap_or(0..0),
+            "a second entry of this substance, name and CAS number",
+            format!(
+                "one entry for it: the first stands in line {}",
+                first.place.line
+            ),
+            "gather the values in one entry; tell isomers apart by name or CAS number",
+        );
+    }
+}
+
+/// Reads the head. What is at fault in it is reported and left empty.
+fn read_head(table: &Table<'_, '_>, text: &Text) -> SourceHead {
     table.only(&HEAD_KEYS);
     let reader = table.reader();
     let owned = |key| table.string(key).map(|text| text.value);
-    let measured = |key| {
-        let text = table.string(key)?;
-        quantity(reader, &text).map(|q| q.value)
-    };
+    let temperature = table.string("temperature");
+    let pressure = table.string("pressure");
     let id = table.required_string("id", "name the source as cases will consult it");
     let title = table.required_string("title", "give the title as it is cited");
     let coverage = table.string("coverage");
     let energy = table.string("energy-unit");
     let constant = table.string("gas-constant");
-    Some(SourceHead {
-        id: checked_id(reader, id)?,
-        title: title?.value,
+    SourceHead {
+        id: checked_id(reader, id).unwrap_or_default(),
+        title: title.map_or_else(String::new, |title| title.value),
         authors: read_authors(table),
         year: table.get("year").and_then(|value| value.word()),
         publisher: owned("publisher"),
@@ -120,9 +159,9 @@ fn read_head(table: &Table<'_, '_>, text: &Text) -> Option<SourceHead> {
         doi: owned("doi"),
         licence: owned("licence"),
         note: owned("note"),
-        temperature: measured("temperature"),
-        pressure: measured("pressure"),
-        energy_unit: energy.and_then(|text| unit(reader, &text)),
+        temperature: temperature.and_then(|text| read_temperature(reader, &text)),
+        pressure: pressure.and_then(|text| measured(reader, &text, Dimension::PRESSURE)),
+        energy_unit: energy.and_then(|text| read_energy_unit(reader, &text)),
         coverage: coverage
             .as_ref()
             .map_or(Coverage::default(), |text| read_coverage(reader, text)),
@@ -132,7 +171,57 @@ fn read_head(table: &Table<'_, '_>, text: &Text) -> Option<SourceHead> {
         standing: read_standing(table).unwrap_or(Standing::EnteredOnce),
         reference_states: read_reference_states(table),
         sha256: owned("extract-of").unwrap_or_else(|| sha256_hex(text.as_str().as_bytes())),
-    })
+    }
+}
+
+/// A temperature, not a difference of two.
+pub(super) fn read_temperature(reader: &Reader<'_>, text: &Located<String>) -> Option<Quantity> {
+    let read = measured(reader, text, Dimension::TEMPERATURE)?;
+    if read.unit.kind() == UnitKind::Difference {
+        wrong_dimension(
+            reader,
+            text,
+            "a temperature difference",
+            Dimension::TEMPERATURE,
+        );
+        return None;
+    }
+    Some(read)
+}
+
+/// A quantity that measures what is asked for.
+pub(super) fn measured(
+    reader: &Reader<'_>,
+    text: &Located<String>,
+    dimension: Dimension,
+) -> Option<Quantity> {
+    let read = quantity(reader, text)?.value;
+    if read.unit.dimension() == dimension {
+        return Some(read);
+    }
+    wrong_dimension(reader, text, &read.unit.dimension().to_string(), dimension);
+    None
+}
+
+fn wrong_dimension(reader: &Reader<'_>, text: &Located<String>, found: &str, wanted: Dimension) {
+    reader.fault(
+        FaultCode::Quantity,
+        &text.span,
+        format!("\"{}\": {found}", text.value),
+        wanted.to_string(),
+        "check the unit that the table prints",
+    );
+}
+
+/// The unit of the table's energies, which are molar.
+fn read_energy_unit(reader: &Reader<'_>, text: &Located<String>) -> Option<Unit> {
+    let read = unit(reader, text)?;
+    let molar = Dimension::ENERGY.over(Dimension::AMOUNT);
+    if read.dimension() == molar {
+        return Some(read);
+    }
+    wrong_dimension(reader, text, &read.dimension().to_string(), molar);
+    None
 }
 
 /// The SHA-256 of some bytes as 64 hexadecimal digits.

@@ -1,13 +1,13 @@
 //! Reading one entry of a source file.
 
-use crate::document::{Table, Value, number, one_of, quantity, species, value_fault};
+use crate::document::{Table, Value, cas_number, number, one_of, quantity, species, value_fault};
 use crate::finding::Located;
 use crate::notation::Element;
-use crate::quantity::{Decimal, Quantity, Unit};
+use crate::quantity::{Decimal, Dimension, Quantity, Unit};
 
 use super::heat_capacity::{Form, HeatCapacity};
 use super::model::{Entry, SourceHead, Subject, Transition};
-use super::read::{read_decimal, read_standing};
+use super::read::{measured, read_decimal, read_standing, read_temperature};
 use super::standing::Standing;
 
 const ENTRY_KEYS: [&str; 14] = [
@@ -28,6 +28,7 @@ const ENTRY_KEYS: [&str; 14] = [
 ];
 
 /// What the head of a source settles for its entries.
+#[derive(Clone, Debug)]
 pub(super) struct EntryRules {
     energy_unit: Option<Unit>,
     standing: Standing,
@@ -62,7 +63,9 @@ pub(super) fn read_entry(table: &Table<'_, '_>, rules: &EntryRules) -> Option<En
             .filter_map(|text| species(reader, text))
             .collect(),
         name: owned("name"),
-        cas: owned("cas"),
+        cas: table
+            .string("cas")
+            .and_then(|text| cas_number(reader, &text)),
         locator: owned("locator").unwrap_or_default(),
         note: owned("note"),
         standing: read_standing(table).unwrap_or(rules.standing),
@@ -85,7 +88,6 @@ pub(super) fn read_entry(table: &Table<'_, '_>, rules: &EntryRules) -> Option<En
             .iter()
             .filter_map(read_transition)
             .collect(),
-        place: reader.text().place(substance.span.start),
     })
 }
 
@@ -104,21 +106,15 @@ fn read_element(table: &Table<'_, '_>) -> Option<Element> {
     element
 }
 
-/// An enthalpy as printed, in the energy unit of the source.
+/// An enthalpy as printed, in the energy unit of the source. Without one it stays a bare number,
+/// and the source is refused for its head.
 fn read_enthalpy(table: &Table<'_, '_>, key: &str, rules: &EntryRules) -> Option<Quantity> {
     let text = table.string(key)?;
-    let Some(unit) = &rules.energy_unit else {
-        value_fault(
-            table.reader(),
-            &text.span,
-            format!("`{key}` in a source without `energy-unit`"),
-            "the unit that the table's energies are printed in",
-            "add energy-unit = \"kJ/mol\" (or the table's own) to [source]",
-        );
-        return None;
-    };
     let quantity = number(table.reader(), &text)?.value;
-    Some(quantity.with_unit(unit.clone()))
+    Some(match &rules.energy_unit {
+        Some(unit) => quantity.with_unit(unit.clone()),
+        None => quantity,
+    })
 }
 
 fn read_heat_capacity(table: &Table<'_, '_>) -> Option<HeatCapacity> {
@@ -139,22 +135,22 @@ fn read_heat_capacity(table: &Table<'_, '_>) -> Option<HeatCapacity> {
             .get("points")
             .map_or_else(Vec::new, |points| read_points(&points)),
     };
-    count_coefficients(table, &form, read)
+    let given = match form.value {
+        Form::Table => table.get("points").map_or(0, |points| points.count()),
+        _ => coefficients.len(),
+    };
+    count_coefficients(table, &form, given).then_some(read)
 }
 
 /// A function without the number of coefficients that its form has would be read wrongly.
-fn count_coefficients(
-    table: &Table<'_, '_>,
-    form: &Located<Form>,
-    read: HeatCapacity,
-) -> Option<HeatCapacity> {
-    let (given, expected) = match form.value {
-        Form::Table => (read.points.len(), "at least 2 points".to_string()),
+fn count_coefficients(table: &Table<'_, '_>, form: &Located<Form>, given: usize) -> bool {
+    let (what, expected) = match form.value {
+        Form::Table => ("points", "at least 2 points".to_string()),
         other => {
             let expected = other
                 .coefficients()
                 .map_or("at least 1".into(), |n| n.to_string());
-            (read.coefficients.len(), format!("{expected} coefficients"))
+            ("coefficients", format!("{expected} coefficients"))
         }
     };
     let fits = match form.value {
@@ -165,20 +161,25 @@ fn count_coefficients(
         value_fault(
             table.reader(),
             &form.span,
-            format!("{given} with the form {}", form.value.word()),
+            format!("{what} of a {}: {given}", form.value.word()),
             expected,
             "copy them from the table in the order that the form names",
         );
     }
-    fits.then_some(read)
+    fits
 }
 
 fn read_range(table: &Table<'_, '_>) -> Option<[Quantity; 2]> {
     let value = table.get("range")?;
     let reader = table.reader();
     let bounds = value.strings();
-    let bounds: Vec<_> = bounds.iter().filter_map(|b| quantity(reader, b)).collect();
-    let bounds: Vec<_> = bounds.into_iter().map(|b| b.value).collect();
+    let bounds: Vec<_> = bounds
+        .iter()
+        .filter_map(|b| read_temperature(reader, b))
+        .collect();
+    if bounds.len() < value.count() {
+        return None;
+    }
     let rising = bounds.len() == 2 && bounds[0].value_in_si() < bounds[1].value_in_si();
     if !rising {
         value_fault(
@@ -195,7 +196,7 @@ fn read_range(table: &Table<'_, '_>) -> Option<[Quantity; 2]> {
 
 fn read_points(points: &Value<'_, '_>) -> Vec<[Decimal; 2]> {
     let mut read = Vec::new();
-    for point in points.elements("an array of [\"T\", \"Cp\"] pairs") {
+    for point in points.elements("a list of pairs", "write it as [[\"T\", \"Cp\"], …]") {
         let pair = point.strings();
         let pair: Vec<_> = pair
             .iter()
@@ -222,9 +223,13 @@ fn read_transition(table: &Table<'_, '_>) -> Option<Transition> {
     let to = table.required_string("to", advice);
     let temperature = table.required_string("temperature", advice);
     let enthalpy = table.required_string("enthalpy", advice);
+    let molar = Dimension::ENERGY.over(Dimension::AMOUNT);
+    let to = to.and_then(|text| species(reader, &text));
+    let temperature = temperature.and_then(|text| read_temperature(reader, &text));
+    let enthalpy = enthalpy.and_then(|text| measured(reader, &text, molar));
     Some(Transition {
-        to: species(reader, &to?)?,
-        temperature: quantity(reader, &temperature?)?.value,
-        enthalpy: quantity(reader, &enthalpy?)?.value,
+        to: to?,
+        temperature: temperature?,
+        enthalpy: enthalpy?,
     })
 }

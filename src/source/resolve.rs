@@ -1,11 +1,11 @@
 //! From a case and its sources to a problem.
 
 use std::cell::OnceCell;
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 use crate::case::{Case, DeclaredKind, Reaction};
 use crate::finding::{Fault, FaultCode, Faults, Finding, Located, Span, Text};
-use crate::notation::{Formula, Participant, Species, Term, balanced_form, imbalance};
+use crate::notation::{Element, Formula, Participant, Species, Term, balanced_form, imbalance};
 use crate::quantity::{Correlations, Exact, Quantity, to_f64};
 
 use super::builtin::ATOMIC_WEIGHTS;
@@ -13,7 +13,7 @@ use super::choose::{Chosen, choose};
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
-use super::model::Digits;
+use super::model::{Digits, Entry};
 use super::problem::{Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed};
 use super::reference_states::ReferenceStates;
 use super::store::Source;
@@ -62,8 +62,8 @@ pub(super) struct Resolver<'a> {
     atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
-    /// All notations and names of the sources, gathered at the first unknown substance.
-    pub(super) names: OnceCell<Vec<String>>,
+    /// All entries of the sources, gathered at the first unknown substance.
+    listed: OnceCell<Vec<Entry>>,
 }
 
 impl<'a> Resolver<'a> {
@@ -80,8 +80,14 @@ impl<'a> Resolver<'a> {
             atomic_weights: BTreeMap::new(),
             findings: Vec::new(),
             faults: Faults::default(),
-            names: OnceCell::new(),
+            listed: OnceCell::new(),
         }
+    }
+
+    /// All entries of the sources.
+    pub(super) fn listed(&self) -> &[Entry] {
+        let gathered = || self.sources.iter().flat_map(Source::all).collect();
+        self.listed.get_or_init(gathered)
     }
 
     fn add_atomic_weights(&mut self, files: &dyn SourceFiles) {
@@ -103,9 +109,11 @@ impl<'a> Resolver<'a> {
 
     fn problem(self, reactions: Vec<Option<ProblemReaction>>) -> Problem {
         let correlations = self.correlations();
+        let counts = self.substances.iter().map(|s| s.species.formula.counts());
+        let elements: BTreeSet<Element> = counts.flat_map(|c| c.keys().copied()).collect();
         Problem {
             // The conventions are always the first source.
-            reference_states: ReferenceStates::of(&self.sources[0]),
+            reference_states: ReferenceStates::of(&self.sources[0], elements),
             consulted: self.consulted,
             became: self.became,
             substances: self.substances,

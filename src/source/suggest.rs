@@ -1,10 +1,12 @@
 //! Faults about substances, with help towards the one that was meant.
 
+use std::collections::BTreeSet;
+
 use crate::finding::{Fault, FaultCode, Span, nearest};
 use crate::notation::Species;
 
 use super::builtin::{BUILT_IN, built_in};
-use super::matching::Wanted;
+use super::matching::{Match, Wanted, pick};
 use super::model::Entry;
 use super::resolve::Resolver;
 
@@ -86,42 +88,46 @@ fn not_consulted(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<&'static str> 
     let open = BUILT_IN.into_iter().filter(|id| !consulted.contains(id));
     open.filter(|id| {
         let entries = built_in(id).map_or_else(Vec::new, |source| source.of_composition(&hill));
-        !entries.is_empty()
+        !matches!(pick(wanted, &entries), Match::None)
     })
     .collect()
 }
 
-/// Substances whose notation or name is near to what was written.
+/// Substances of the same elements and phase, and such as have a name near to what was written.
 fn near_names(resolver: &Resolver<'_>, wanted: &Wanted) -> Vec<String> {
-    let candidates = resolver.names.get_or_init(|| all_names(resolver));
-    let words = std::iter::once(&wanted.label).chain(&wanted.names);
-    let species = wanted.species.to_string();
+    let entries = resolver.listed();
     let mut near: Vec<String> = Vec::new();
-    for word in words.chain([&species]) {
-        for candidate in nearest(word, candidates.iter().map(String::as_str), 3) {
-            let candidate = format!("`{candidate}`");
-            if !near.contains(&candidate) {
-                near.push(candidate);
-            }
+    let alike = entries
+        .iter()
+        .filter(|entry| is_alike(wanted, entry))
+        .filter_map(Entry::species);
+    near.extend(alike.map(|species| format!("`{species}`")));
+    let names: Vec<&str> = entries
+        .iter()
+        .filter_map(|entry| entry.name.as_deref())
+        .collect();
+    for word in &wanted.names {
+        for name in nearest(word, names.iter().copied(), 3) {
+            let found = entries
+                .iter()
+                .filter(|entry| entry.name.as_deref() == Some(name));
+            near.extend(found.map(label));
         }
     }
+    let mut seen = BTreeSet::new();
+    near.retain(|candidate| seen.insert(candidate.clone()));
     near.truncate(MOST);
     near
 }
 
-/// Every notation and every name that the consulted sources list.
-fn all_names(resolver: &Resolver<'_>) -> Vec<String> {
-    let entries: Vec<Entry> = resolver
-        .sources
-        .iter()
-        .flat_map(|source| source.all())
-        .collect();
-    let notations = entries
-        .iter()
-        .filter_map(|e| Some(e.species()?.to_string()));
-    notations
-        .chain(entries.iter().filter_map(|e| e.name.clone()))
-        .collect()
+/// Whether an entry is of the same elements, in whatever number, and in the same kind of phase.
+fn is_alike(wanted: &Wanted, entry: &Entry) -> bool {
+    let Some(species) = entry.species() else {
+        return false;
+    };
+    let elements = |species: &Species| species.formula.counts().keys().copied().collect::<Vec<_>>();
+    let label = |species: &Species| species.phase.as_ref().map(|phase| phase.label);
+    elements(species) == elements(&wanted.species) && label(species) == label(&wanted.species)
 }
 
 /// An entry with what tells it apart.

@@ -1,6 +1,7 @@
 //! The fault of an equation that does not balance.
 
 use num_bigint::BigInt;
+use num_traits::Zero;
 
 use crate::case::Reaction;
 use crate::finding::{Fault, FaultCode, Text};
@@ -18,7 +19,7 @@ pub(super) fn unbalanced(
     let found: Vec<String> = off.iter().map(describe).collect();
     let advice = match form {
         Some(coefficients) => format!("balanced it reads: {}", balanced(reaction, coefficients)),
-        None => "no single set of positive coefficients balances it: check the substances".into(),
+        None => not_balanced(off),
     };
     Fault::new(
         FaultCode::Unbalanced,
@@ -28,6 +29,24 @@ pub(super) fn unbalanced(
         "as many atoms of each element, and as much charge, on the right as on the left",
         advice,
     )
+}
+
+/// What to do where no single set of positive coefficients balances the equation.
+fn not_balanced(off: &[Surplus]) -> String {
+    let one_sided = off.iter().find_map(|surplus| match &surplus.of {
+        Conserved::Element(element) if surplus.left.is_zero() => Some((element, "right", "left")),
+        Conserved::Element(element) if surplus.right.is_zero() => Some((element, "left", "right")),
+        _ => None,
+    });
+    match one_sided {
+        Some((element, there, missing)) => format!(
+            "{} stands on the {there} alone: add the substance that brings it to the {missing}",
+            element.symbol()
+        ),
+        None => "no coefficients balance it, or more than one set of them: check the substances, \
+                 and write each reaction as an equation of its own"
+            .to_string(),
+    }
 }
 
 fn describe(surplus: &Surplus) -> String {

@@ -1,5 +1,8 @@
 //! Whole-program tests, in one binary because each links the typesetter.
 
+mod commands;
+mod faults;
 mod laws;
 mod outside;
+mod program;
 mod record;
