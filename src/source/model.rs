@@ -69,7 +69,7 @@ impl SourceHead {
 }
 
 /// What an entry is about.
-#[derive(Clone, Debug, PartialEq)]
+#[derive(Clone, Debug, PartialEq, Eq, PartialOrd, Ord)]
 pub enum Subject {
     Species(Species),
     /// An element (atomic weights) or a constant, by its symbol.
