@@ -149,10 +149,13 @@ pub(super) fn ambiguous(
     entries: &[Entry],
 ) -> Fault {
     let labels: Vec<String> = entries.iter().take(MOST).map(label).collect();
-    let same_notation = entries
+    // HCN(g) and HNC(g) are spelt apart, and still one composition in one phase: neither spelling
+    // chooses between them.
+    let phase = |entry: &Entry| entry.species().map(|species| species.phase.clone());
+    let same_phase = entries
         .windows(2)
-        .all(|pair| pair[0].species() == pair[1].species());
-    let advice = match same_notation {
+        .all(|pair| phase(&pair[0]) == phase(&pair[1]));
+    let advice = match same_phase {
         true => declare(wanted, entries),
         false => "name the form: write one of them in the equation".to_string(),
     };
