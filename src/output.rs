@@ -21,9 +21,27 @@ pub fn write_new(path: &Path, bytes: &[u8]) -> io::Result<()> {
     sync_folder(path)
 }
 
+/// Why a file could not be written, in words.
+pub fn why(error: &io::Error) -> String {
+    match error.kind() {
+        io::ErrorKind::AlreadyExists => "something of this name is there already",
+        io::ErrorKind::NotADirectory => "a file is where a folder should be",
+        io::ErrorKind::IsADirectory => "a folder of this name is there",
+        io::ErrorKind::PermissionDenied => "the folder may not be written to",
+        io::ErrorKind::ReadOnlyFilesystem => "the file system is read-only",
+        io::ErrorKind::StorageFull => "no space is left",
+        _ => return error.to_string(),
+    }
+    .to_string()
+}
+
 fn prepared(path: &Path, bytes: &[u8]) -> io::Result<NamedTempFile> {
     let folder = folder_of(path);
-    fs::create_dir_all(folder)?;
+    let in_the_way = |error| match folder.is_file() {
+        true => io::Error::from(io::ErrorKind::NotADirectory),
+        false => error,
+    };
+    fs::create_dir_all(folder).map_err(in_the_way)?;
     let mut file = NamedTempFile::new_in(folder)?;
     file.write_all(bytes)?;
     readable(file.as_file())?;

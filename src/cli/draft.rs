@@ -7,7 +7,7 @@ use super::Output;
 use super::draft_text::draft_text;
 use super::exit::Exit;
 use super::terminal::{print, tell};
-use crate::output::write_new;
+use crate::output::{why, write_new};
 
 #[derive(Args)]
 pub struct Draft {
@@ -31,11 +31,7 @@ impl Draft {
         let path = self.output.out.join(format!("{}.toml", self.number));
         let text = draft_text(&self.number, today());
         if let Err(error) = write_new(&path, text.as_bytes()) {
-            let why = match error.kind() {
-                std::io::ErrorKind::AlreadyExists => "it is there already".to_string(),
-                _ => error.to_string(),
-            };
-            return self.refused(format!("{}: not written: {why}", path.display()));
+            return self.refused(format!("{}: not written: {}", path.display(), why(&error)));
         }
         let shown = path.display();
         tell(&format!(

@@ -7,7 +7,8 @@ use serde_json::json;
 
 use super::exit::Exit;
 use super::terminal::{print, tell};
-use crate::output::write_new;
+use crate::document::unread;
+use crate::output::{why, write_new};
 use crate::pdf::RecordFile;
 
 #[derive(Args)]
@@ -49,12 +50,14 @@ impl Extract {
 
     fn extract(&self) -> Result<Vec<String>, String> {
         let record = self.record.display();
-        let bytes = std::fs::read(&self.record).map_err(|error| format!("{record}: {error}"))?;
+        let bytes =
+            std::fs::read(&self.record).map_err(|error| format!("{record}: {}", unread(&error)))?;
         let file = RecordFile::read(bytes).map_err(|error| format!("{record}: {error}"))?;
         self.refuse_existing(&file)?;
         for embedded in &file.attachments {
             let path = self.dir.join(&embedded.name);
-            let said = |error| format!("{}: not written: {error}", path.display());
+            let said =
+                |error: std::io::Error| format!("{}: not written: {}", path.display(), why(&error));
             write_new(&path, &embedded.bytes).map_err(said)?;
         }
         Ok(file.attachments.into_iter().map(|file| file.name).collect())

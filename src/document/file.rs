@@ -34,16 +34,20 @@ fn read_bytes(path: &Path) -> io::Result<Vec<u8>> {
     Ok(bytes)
 }
 
-fn unreadable(name: &str, error: &io::Error) -> Fault {
-    let found = match error.kind() {
+/// Why a file could not be read, in words.
+pub fn unread(error: &io::Error) -> String {
+    match error.kind() {
         io::ErrorKind::NotFound => "no file of this name".to_string(),
         io::ErrorKind::PermissionDenied => "a file that may not be read".to_string(),
         io::ErrorKind::IsADirectory => "a folder".to_string(),
         _ => error.to_string(),
-    };
+    }
+}
+
+fn unreadable(name: &str, error: &io::Error) -> Fault {
     Fault::of_file(
         name,
-        found,
+        unread(error),
         "a file of TOML text that can be read",
         "check the name and the folder it is relative to",
     )

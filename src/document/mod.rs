@@ -13,7 +13,7 @@ mod value;
 mod words;
 
 pub use cas::cas_number;
-pub use file::read_text;
+pub use file::{read_text, unread};
 pub use reader::{Document, Reader, with_document};
 pub use table::Table;
 pub use value::Value;

@@ -5,7 +5,7 @@ use std::fs;
 use std::io;
 use std::path::Path;
 
-use crate::output::write_whole;
+use crate::output::{why, write_whole};
 use crate::pdf::RecordFile;
 use crate::record::MANIFEST_NAME;
 use crate::source::sha256_hex;
@@ -46,7 +46,7 @@ impl fmt::Display for PlaceError {
                 "a signed record of other content is there (stamp {stamp}); raise the revision"
             ),
             PlaceError::Foreign(what) => write!(f, "{what} is there; move it away first"),
-            PlaceError::Io(error) => write!(f, "{error}"),
+            PlaceError::Io(error) => f.write_str(&why(error)),
         }
     }
 }

@@ -38,6 +38,8 @@ impl fmt::Display for PdfError {
 
 impl std::error::Error for PdfError {}
 
+const BYTE_RANGE: &[u8] = b"/ByteRange";
+
 /// What a record's PDF holds.
 #[derive(Clone, Debug)]
 pub struct RecordFile {
@@ -49,9 +51,11 @@ pub struct RecordFile {
 impl RecordFile {
     /// Reads the attachments of a record.
     pub fn read(bytes: Vec<u8>) -> Result<RecordFile, PdfError> {
+        // A signature dictionary stands in plain text, for its bytes to be counted; one within
+        // another dictionary is no object of its own.
+        let mut is_signed = bytes.windows(BYTE_RANGE.len()).any(|at| at == BYTE_RANGE);
         let pdf = Pdf::new(bytes).map_err(|_| PdfError::NotPdf)?;
         let mut attachments: Vec<Embedded> = Vec::new();
-        let mut is_signed = false;
         for object in pdf.objects() {
             let Object::Dict(dict) = object else { continue };
             is_signed |= is_signature(&dict);
