@@ -81,6 +81,9 @@ impl Ids {
     pub(super) fn unknown(&self, reader: &Reader<'_>, id: &str, span: &Span, wanted: &[IdKind]) {
         let advice = match self.nearest(id, wanted) {
             Some(near) => format!("did you mean `{near}`?"),
+            None if wanted.contains(&IdKind::Substance) => format!(
+                "declare it: [substances] {id} = {{ formula = \"…\", phase = \"l\", cas = \"…\" }}"
+            ),
             None => "define it, or use one that is defined".to_string(),
         };
         let words: Vec<&str> = wanted.iter().map(|kind| kind.word()).collect();

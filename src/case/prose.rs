@@ -177,7 +177,7 @@ pub(super) fn check_result(
 
 fn check_quantity(reader: &Reader<'_>, reaction: &Reaction, quantity: &str, span: &Span) {
     if RESULT_QUANTITIES.contains(&quantity) {
-        if quantity != "heat" && reaction.per.is_none() {
+        if quantity != "heat" && !reaction.says_per {
             reader.fault(
                 FaultCode::Value,
                 span,

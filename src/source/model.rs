@@ -58,7 +58,7 @@ impl SourceHead {
             .as_ref()
             .map(|edition| match edition.contains("edition") {
                 true => edition.clone(),
-                false => format!("edition {edition}"),
+                false => format!("Edition {edition}"),
             });
         for part in [&self.report, &edition, &self.publisher, &self.year] {
             parts.extend(part.as_ref().map(|p| format!("{p},")));

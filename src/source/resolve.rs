@@ -208,14 +208,15 @@ impl<'a> Resolver<'a> {
                 let DeclaredKind::Compound { formula, phase } = &declared.kind else {
                     return None;
                 };
-                let names = std::iter::once(id.clone()).chain(declared.name.clone());
+                // A name that the case gives goes before the id, which is often a short form.
+                let name = declared.name.clone().unwrap_or_else(|| id.clone());
                 Some(Wanted {
                     label: id.clone(),
                     species: Species {
                         formula: formula.clone(),
                         phase: Some(phase.clone()),
                     },
-                    names: names.collect(),
+                    names: vec![name],
                     cas: declared.cas.clone(),
                 })
             }
@@ -238,6 +239,7 @@ impl<'a> Resolver<'a> {
             name: chosen.entry.name.clone(),
             value,
             comparisons,
+            because: chosen.because.clone(),
         });
         Some(self.substances.len() - 1)
     }
@@ -265,6 +267,7 @@ impl<'a> Resolver<'a> {
             substance,
             species: entry.species().cloned(),
             name: entry.name.clone(),
+            cas: entry.cas.clone(),
             significance,
             uncertainty: input_uncertainty(&printed, head),
             printed,
@@ -310,6 +313,7 @@ impl<'a> Resolver<'a> {
             substance: symbol.to_string(),
             species: None,
             name: entry.name.clone(),
+            cas: entry.cas.clone(),
             significance: printed.significance(),
             uncertainty: input_uncertainty(&printed, head),
             printed,
