@@ -224,19 +224,19 @@ pub(super) fn no_enthalpy(
     let why = entry
         .note
         .as_ref()
-        .map_or_else(String::new, |note| format!(" ({note})"));
+        .map_or_else(String::new, |note| format!("{note}. "));
     Fault::new(
         FaultCode::Source,
         resolver.text,
         span,
         format!(
-            "{} in {}, without a formation enthalpy at its reference temperature{why}",
+            "{} in {}, without a formation enthalpy at its reference temperature",
             label(entry),
             resolver.sources[source].id()
         ),
         "an entry with `formation-enthalpy`",
         format!(
-            "consult another source for `{}`, or cite a value of your own",
+            "{why}Consult another source for `{}`, or cite a value of your own",
             wanted.label
         ),
     )
