@@ -99,18 +99,18 @@ fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) ->
     }
 }
 
+/// U is the combined expanded uncertainty of the two values, or the one that is stated.
 fn judgement(judgement: Judgement) -> String {
-    let size = |combined: f64| minus(&two_digits(combined));
-    let stated = |complete: bool| match complete {
-        true => "the combined expanded uncertainty",
-        false => "the one expanded uncertainty that is stated",
+    let stated = |combined: f64, complete: bool| {
+        let remark = if complete { "" } else { "; one states none" };
+        format!("U = {} (k = 2{remark})", minus(&two_digits(combined)))
     };
     match judgement {
         Judgement::Within { combined, complete } => {
-            format!("within {}, {}", stated(complete), size(combined))
+            format!("within {}", stated(combined, complete))
         }
         Judgement::Beyond { combined, complete } => {
-            format!("beyond {}, {}", stated(complete), size(combined))
+            format!("beyond {}", stated(combined, complete))
         }
         Judgement::NotJudged { equal: true } => "equal as printed".to_string(),
         Judgement::NotJudged { equal: false } => {
