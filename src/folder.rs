@@ -5,7 +5,7 @@ use std::path::{Component, Path, PathBuf};
 use crate::document::read_text;
 use crate::finding::{Fault, Text};
 use crate::record::{MANIFEST_NAME, Manifest};
-use crate::source::{SourceFiles, sha256_hex};
+use crate::source::{Provenance, SourceFiles, sha256_hex};
 
 /// Source files by the names that a case consults.
 pub struct CaseFolder {
@@ -59,6 +59,13 @@ impl CaseFolder {
 }
 
 impl SourceFiles for CaseFolder {
+    fn provenance(&self) -> Provenance {
+        match self.manifest {
+            Some(_) => Provenance::Extract,
+            None => Provenance::Original,
+        }
+    }
+
     fn text(&self, name: &str) -> Option<Result<Text, Fault>> {
         if let Some(manifest) = &self.manifest {
             let file = manifest.consult.get(name)?.as_str()?;

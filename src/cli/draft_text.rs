@@ -5,8 +5,8 @@ use chrono::NaiveDate;
 /// A new case for a record of this number and date.
 pub fn draft_text(number: &str, date: NaiveDate) -> String {
     TEMPLATE
-        .replace("NUMBER", number)
-        .replace("DATE", &date.to_string())
+        .replace("{{number}}", number)
+        .replace("{{date}}", &date.to_string())
 }
 
 const TEMPLATE: &str = include_str!("draft.toml");

@@ -12,7 +12,7 @@ use crate::finding::{Fault, Place};
 /// Shows all faults of an input and says that it could not be done.
 pub fn report(case: &Path, faults: &[Fault], json: bool) -> Exit {
     if json {
-        print(&format!("{}\n", to_json(faults)));
+        print(&format!("{}\n", to_json(case, faults)));
     }
     let style = Style::stderr();
     for fault in faults {
@@ -53,7 +53,7 @@ fn shown(case: &Path, fault: &Fault, style: Style) -> String {
     text + "\n"
 }
 
-fn to_json(faults: &[Fault]) -> Value {
+fn to_json(case: &Path, faults: &[Fault]) -> Value {
     let fault = |fault: &Fault| {
         json!({
             "code": fault.code.word(),
@@ -63,5 +63,5 @@ fn to_json(faults: &[Fault]) -> Value {
             "at": fault.place,
         })
     };
-    json!({ "faults": faults.iter().map(fault).collect::<Vec<_>>() })
+    json!({ "case": case, "faults": faults.iter().map(fault).collect::<Vec<_>>() })
 }

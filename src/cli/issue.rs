@@ -50,7 +50,7 @@ impl Issue {
             Ok(placed) => placed,
             Err(error) => {
                 tell(&format!("{}: not written: {error}\n", path.display()));
-                self.json(json!({ "file": path, "error": error.to_string() }));
+                self.json(json!({ "case": case, "file": path, "error": error.to_string() }));
                 return Exit::NotDone;
             }
         };
@@ -60,6 +60,7 @@ impl Issue {
             said(&placed)
         ));
         self.json(json!({
+            "case": case,
             "file": path,
             "number": worked.calculation.case.record.number.value,
             "revision": worked.calculation.case.record.revision.value,
@@ -80,12 +81,14 @@ impl Issue {
                     "{}: not issued: a stop allows it only with status = \"preliminary\".\n",
                     case.display()
                 ));
-                self.json(json!({ "error": "a stop allows only a preliminary record" }));
+                self.json(
+                    json!({ "case": case, "error": "a stop allows only a preliminary record" }),
+                );
                 Exit::DoesNotHold
             }
             IssueError::Typeset(error) => {
                 tell(&format!("{}: not issued: {error}\n", case.display()));
-                self.json(json!({ "error": error.to_string() }));
+                self.json(json!({ "case": case, "error": error.to_string() }));
                 Exit::NotDone
             }
         }

@@ -11,7 +11,9 @@ use super::terminal::{plain, print, tell, wrap};
 use crate::document::read_text;
 use crate::finding::Fault;
 use crate::notation::Species;
-use crate::source::{BUILT_IN, Entry, Hit, Source, Subject, built_in, read_source, search};
+use crate::source::{
+    BUILT_IN, Entry, Hit, Provenance, Source, Subject, built_in, read_source, search,
+};
 
 #[derive(Args)]
 pub struct SourceCommand {
@@ -146,7 +148,7 @@ fn load(name: &str) -> Result<Source, Vec<Fault>> {
 
 fn load_file(name: &str) -> Result<Source, Vec<Fault>> {
     let text = read_text(name.as_ref(), name).map_err(|fault| vec![fault])?;
-    let (source, faults) = read_source(&text);
+    let (source, faults) = read_source(&text, Provenance::Original);
     source.ok_or_else(|| faults.into_sorted())
 }
 

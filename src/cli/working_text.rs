@@ -6,7 +6,8 @@ use super::findings;
 use super::terminal::{Style, Tone, plain, wrap};
 use crate::calculation::Calculation;
 use crate::engine::{Outcome, ReactionWorking};
-use crate::quantity::{exact_text, full_text, two_digits};
+use crate::quantity::{exact_text, full_text};
+use crate::record::coverage;
 use crate::source::Problem;
 
 /// The working of a case as text.
@@ -44,7 +45,10 @@ fn results(calculation: &Calculation, style: Style) -> String {
     for outcome in outcomes {
         let line = format!("{} {}", stated(outcome), outcome.direction().word());
         text += &wrap(&format!("  {:<width$}  ", outcome.id), &line);
-        text += &wrap(&format!("  {:<width$}  ", ""), &coverage(outcome));
+        text += &wrap(
+            &format!("  {:<width$}  ", ""),
+            &coverage(outcome).replace('\u{a0}', " "),
+        );
     }
     if outcomes.is_empty() {
         text += "  none\n";
@@ -62,17 +66,6 @@ fn stated(outcome: &Outcome) -> String {
         outcome.stated.value_text,
         outcome.unit.symbol()
     )
-}
-
-fn coverage(outcome: &Outcome) -> String {
-    let (stated, of) = (outcome.combined.stated, outcome.combined.of);
-    match outcome.expanded {
-        Some(expanded) => format!(
-            "U = {} (k = 2), covers {stated} of {of} values used",
-            two_digits(expanded)
-        ),
-        None => format!("uncertainty not stated by any of {of} values used"),
-    }
 }
 
 fn reaction(calculation: &Calculation, working: &ReactionWorking) -> String {

@@ -4,7 +4,7 @@ use num_traits::Signed;
 
 use crate::quantity::{
     Combined, Dimension, Exact, LinearForm, Real, Significance, Stated, Unit, combine, exact_text,
-    order_of_magnitude, power_of_ten,
+    order_of_magnitude, power_of_ten, to_f64,
 };
 use crate::source::Problem;
 
@@ -152,6 +152,14 @@ impl Rules<'_> {
     /// (JCGM 100:2008, 7.2.6).
     fn at_place(&self, place: i64, by_uncertainty: Option<&Stated>) -> Option<Stated> {
         let mut stated = Stated::at_place(self.value, place, self.expanded)?;
+        let half_place = power_of_ten(place) / Exact::from_integer(2.into());
+        if self
+            .expanded
+            .is_some_and(|expanded| to_f64(&half_place) > expanded)
+        {
+            // The rounding then hides more than the uncertainty says.
+            stated.uncertainty_text = None;
+        }
         if let Some(other) = by_uncertainty
             && other.place > Some(place)
         {

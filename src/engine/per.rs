@@ -24,8 +24,8 @@ pub(super) struct Per {
     pub(super) form: LinearForm,
 }
 
-/// M = Σ n_i·A_r(i)·(1 g/mol), from standard atomic weights (IUPAC/CIAAW), in g/mol. The mass of
-/// electrons in ions is left out: it is below the last place of the abridged weights.
+/// M = Σ n_i·A_r(i)·(1 g/mol), from standard atomic weights (IUPAC/CIAAW), in g/mol. Ions have none
+/// here: nobody weighs them, and the electron's mass is not among the weights.
 pub(super) fn molar_mass(problem: &Problem, reaction: &ProblemReaction) -> Option<MolarMass> {
     if reaction.molar_mass.is_empty() {
         return None;

@@ -7,7 +7,7 @@ use num_traits::Zero;
 use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::notation::{Element, PhaseLabel, Species};
 use crate::quantity::{Exact, exact_text, to_f64, two_digits};
-use crate::source::{Problem, ProblemReaction, ValueKind, ValueUsed};
+use crate::source::{Problem, ProblemReaction, ProblemTerm, ValueKind, ValueUsed};
 
 use super::work::Working;
 
@@ -25,6 +25,7 @@ pub(super) fn check(problem: &Problem, working: &Working, text: &Text) -> Vec<Fi
         for (severity, code, message) in temperature(problem, reaction)
             .into_iter()
             .chain(charge_in_water(problem, reaction))
+            .chain(free_electrons(problem, reaction))
             .chain(states(problem, reaction))
         {
             findings.push(Finding {
@@ -127,12 +128,39 @@ fn charge_in_water(problem: &Problem, reaction: &ProblemReaction) -> Option<Said
         Severity::Caution,
         FindingCode::ChargeInWater,
         format!(
-            "{}: the ions in water carry {} charges more on the right than on the left. The heat \
-             then rests on the convention that H+(aq) is zero, and cannot be measured as such.",
+            "{}: the charge of the ions in water is not the same on both sides (right less left: \
+             {}). The heat then rests on the convention that H+(aq) is zero, and cannot be \
+             measured as such.",
             reaction.id,
             exact_text(&charge)
         ),
     ))
+}
+
+/// Tables of gas ions differ in whether the electron is at rest or in thermal motion: 5/2·R·T, or
+/// 6.197 kJ/mol at 298.15 K, for each electron (NASA/TP-2002-211556 prints 6197.428 J/mol).
+fn free_electrons(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
+    let species = |term: &ProblemTerm| &problem.substances[term.substance].species;
+    let electron = reaction
+        .terms
+        .iter()
+        .any(|t| species(t).formula.is_electron());
+    let gas_ion = reaction.terms.iter().any(|term| {
+        let phase = species(term).phase.as_ref();
+        let in_gas = phase.is_some_and(|phase| phase.label == PhaseLabel::Gas);
+        in_gas && species(term).formula.charge() != 0
+    });
+    (electron && gas_ion).then(|| {
+        (
+            Severity::Caution,
+            FindingCode::FreeElectron,
+            format!(
+                "{}: the electron is zero by the convention for ions in water, while tables of gas \
+                 ions differ in how they count it, by 6.2 kJ/mol for each electron.",
+                reaction.id
+            ),
+        )
+    })
 }
 
 /// A formation enthalpy at another temperature is off by ΔCp of the formation reaction times the

@@ -91,21 +91,27 @@ pub(super) fn fixed_decimals(problem: &Problem, outcomes: &[Outcome], text: &Tex
         .iter()
         .filter(|outcome| outcome.stated_by == StatedBy::FixedDecimals)
         .collect();
-    let first = problem
-        .values
-        .iter()
-        .find(|v| v.significance == Significance::Unlimited);
-    let (Some(first), false) = (first, decided.is_empty()) else {
+    let fixed = problem.values.iter();
+    let fixed: Vec<&ValueUsed> = fixed
+        .filter(|v| v.significance == Significance::Unlimited)
+        .collect();
+    let (Some(first), false) = (fixed.first(), decided.is_empty()) else {
         return Vec::new();
     };
+    let mut tables: Vec<&str> = fixed
+        .iter()
+        .map(|v| problem.sources[v.source].id())
+        .collect();
+    tables.sort_unstable();
+    tables.dedup();
+    let verb = if tables.len() == 1 { "prints" } else { "print" };
     vec![Finding {
         severity: Severity::Note,
         code: FindingCode::FixedDecimals,
         message: format!(
-            "{} prints a fixed number of decimals whatever is known, so its digits limit nothing: \
-             {} stated to 0.1 kJ/mol at the finest (or the like in another unit). [rounding] \
-             states another place.",
-            problem.sources[first.source].id(),
+            "{} {verb} a fixed number of decimals whatever is known, which limits no digits: {} \
+             stated to 0.1 kJ/mol or 1 kJ/kg at the finest. [rounding] states another place.",
+            tables.join(", "),
             named(&decided),
         ),
         at: text.place(first.used_at.start),

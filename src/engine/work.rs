@@ -1,5 +1,7 @@
 //! Working a problem: every reaction, every result, every check.
 
+use std::collections::BTreeMap;
+
 use crate::case::{ResultUnits, RoundingRule};
 use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::quantity::{Exact, Real, Unit};
@@ -39,11 +41,14 @@ pub struct Working {
     /// All results, in the order of the case.
     pub outcomes: Vec<Outcome>,
     pub findings: Vec<Finding>,
+    /// Index of each result by its id.
+    by_id: BTreeMap<String, usize>,
 }
 
 impl Working {
     pub fn outcome(&self, id: &str) -> Option<&Outcome> {
-        self.outcomes.iter().find(|outcome| outcome.id == id)
+        let index = self.by_id.get(id)?;
+        self.outcomes.get(*index)
     }
 
     /// Whether a finding says that the working does not hold.
@@ -70,10 +75,15 @@ pub fn work(problem: &Problem, options: &WorkOptions<'_>) -> Working {
         reactions: Vec::with_capacity(problem.reactions.len()),
         outcomes: Vec::with_capacity(problem.reactions.len()),
         findings: problem.findings.clone(),
+        by_id: BTreeMap::new(),
     };
     for (index, reaction) in problem.reactions.iter().enumerate() {
         work_reaction(problem, options, index, reaction, &mut working);
     }
+    let ids = working.outcomes.iter().enumerate();
+    working.by_id = ids
+        .map(|(index, outcome)| (outcome.id.clone(), index))
+        .collect();
     let text = options.text;
     working
         .findings

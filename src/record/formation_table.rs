@@ -20,6 +20,9 @@ pub(super) fn formation_table(
     hess: &Hess,
     unit: &str,
 ) -> Option<Table> {
+    if counts_from_other_states(problem, hess) {
+        return None;
+    }
     let mut rows = Vec::new();
     for term in &hess.terms {
         let species = &problem.substances[term.substance].species;
@@ -54,6 +57,17 @@ pub(super) fn formation_table(
             Rich::default(),
             Rich::plain(in_full(&hess.sum, hess.significance)),
         ]),
+    })
+}
+
+/// Values of a source with reference states of its own are not the heats of these equations.
+fn counts_from_other_states(problem: &Problem, hess: &Hess) -> bool {
+    hess.terms.iter().any(|term| {
+        let counts = problem.substances[term.substance].species.formula.counts();
+        let head = &problem.sources[problem.values[term.value].source].head;
+        head.reference_states
+            .iter()
+            .any(|(element, _)| counts.contains_key(element))
     })
 }
 
@@ -121,7 +135,10 @@ pub(super) fn cancelled(problem: &Problem, reaction: &ProblemReaction) -> Rich {
             .and(format!("{separator}{}", coefficient(amount)))
             .with(Rich::from(species.pieces()));
     }
-    text.and(" stand on both sides and cancel, and what is left is the reaction.")
+    let verb = if shown.len() == 1 { "stands" } else { "stand" };
+    text.and(format!(
+        " {verb} on both sides and cancel, and what is left is the reaction."
+    ))
 }
 
 /// For each reference state: how much the formations of the products use, and how much the

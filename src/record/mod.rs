@@ -31,5 +31,6 @@ pub use manifest::{MANIFEST_NAME, Manifest, Typesetting};
 pub use math::Math;
 pub use numerals::minus;
 pub use pages::*;
+pub use result_rows::coverage;
 pub use results_json::results_json;
 pub use rich::{Rich, Run};

@@ -1,6 +1,7 @@
 //! Results as they are stated.
 
 use crate::calculation::Calculation;
+use crate::case::RESULT_QUANTITIES;
 use crate::engine::{COVERAGE, Outcome};
 use crate::quantity::two_digits;
 
@@ -12,12 +13,9 @@ pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
     let mut rows = Vec::new();
     for (section, reaction) in calculation.working.reactions.iter().enumerate() {
         let id = &calculation.problem.reactions[reaction.reaction].id;
-        let prefix = format!("{id}.");
-        let own = calculation
-            .working
-            .outcomes
+        let own = RESULT_QUANTITIES
             .iter()
-            .filter(|o| o.id.starts_with(&prefix));
+            .filter_map(|quantity| calculation.working.outcome(&format!("{id}.{quantity}")));
         let first = rows.len();
         rows.extend(own.map(|outcome| result_row(calculation, outcome, section)));
         if reaction.hess.is_none() {
@@ -82,7 +80,7 @@ pub(super) fn stated_uncertainty(outcome: &Outcome) -> Option<String> {
 }
 
 /// What the uncertainty covers, in words.
-pub(super) fn coverage(outcome: &Outcome) -> String {
+pub fn coverage(outcome: &Outcome) -> String {
     let (stated, of) = (outcome.combined.stated, outcome.combined.of);
     match (outcome.expanded, of) {
         (_, 0) => "exact".to_string(),

@@ -42,8 +42,11 @@ fn rule(outcome: &Outcome) -> String {
              digits (JCGM 100:2008, 7.2.6): two where it begins with 1 or 2, otherwise one."
             .to_string(),
         StatedBy::Significance => format!(
-            "The uncertainty does not cover every value, so the significant digits of the values \
-             decide (ASTM E29): {}.",
+            "{}, so the significant digits of the values decide (ASTM E29): {}.",
+            match outcome.is_complete() {
+                true => "There is no uncertainty to decide the digits",
+                false => "The uncertainty does not cover every value",
+            },
             last_place(outcome.significance)
         ),
         StatedBy::FixedDecimals => format!(

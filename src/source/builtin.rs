@@ -48,12 +48,12 @@ pub fn built_in(id: &str) -> Option<Source> {
 #[cfg(test)]
 mod tests {
     use super::*;
-    use crate::source::read::read_source;
+    use crate::source::read::{Provenance, read_source};
 
     #[test]
     fn every_built_in_source_reads_without_fault_and_bears_its_id() {
         for (id, content) in FILES {
-            let (source, faults) = read_source(&Text::new(id, content));
+            let (source, faults) = read_source(&Text::new(id, content), Provenance::Original);
             assert_eq!(faults.into_sorted(), [], "{id}");
             assert_eq!(source.map(|s| s.head.id), Some(id.to_string()));
         }

@@ -107,8 +107,11 @@ fn stable_only(wanted: &Wanted, found: Match) -> Match {
         .phase
         .as_ref()
         .is_some_and(|p| p.label == PhaseLabel::Stable);
-    let Match::Several(entries) = found else {
-        return found;
+    let entries = match found {
+        Match::Several(entries) => entries,
+        // One form whose range ends elsewhere is not the one that is stable here.
+        Match::One(entry) if stable && !entry.heat_capacity.is_empty() => vec![*entry],
+        found => return found,
     };
     if !stable {
         return Match::Several(entries);
@@ -118,6 +121,7 @@ fn stable_only(wanted: &Wanted, found: Match) -> Match {
     let mut serving: Vec<Entry> = entries.iter().filter(|e| serving(e)).cloned().collect();
     match serving.len() {
         1 => Match::One(Box::new(serving.remove(0))),
+        0 if entries.len() == 1 => Match::None,
         _ => Match::Several(entries),
     }
 }

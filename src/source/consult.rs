@@ -4,7 +4,7 @@ use crate::case::Case;
 use crate::finding::{Fault, FaultCode, Faults, Located, Text, nearest};
 
 use super::builtin::{BUILT_IN, CONVENTIONS, built_in};
-use super::read::read_source;
+use super::read::{Provenance, read_source};
 use super::store::Source;
 
 /// The one door through which source files come in: a folder, or the attachments of a record.
@@ -12,6 +12,11 @@ pub trait SourceFiles {
     /// The text of a source by its name in `consult`; none where this door does not lead to it
     /// and the built-in source of that id serves.
     fn text(&self, name: &str) -> Option<Result<Text, Fault>>;
+
+    /// Whether the door leads to attachments of a record that its manifest vouches for.
+    fn provenance(&self) -> Provenance {
+        Provenance::Original
+    }
 }
 
 /// The sources that a case consults.
@@ -47,7 +52,7 @@ pub fn consult(case: &Case, text: &Text, files: &dyn SourceFiles) -> (Consultati
 /// A built-in source that a result needs beyond those consulted (atomic weights).
 pub(super) fn load_built_in(id: &str, files: &dyn SourceFiles) -> (Option<Source>, Faults) {
     match files.text(id) {
-        Some(Ok(text)) => read_source(&text),
+        Some(Ok(text)) => read_source(&text, files.provenance()),
         Some(Err(fault)) => {
             let mut faults = Faults::default();
             faults.push(fault);
@@ -65,9 +70,14 @@ fn load(
 ) -> Option<Source> {
     match files.text(&name.value) {
         Some(Ok(text)) => {
-            let (source, found) = read_source(&text);
+            let (source, found) = read_source(&text, files.provenance());
             faults.extend(found);
-            source
+            let source = source?;
+            if files.provenance() == Provenance::Original && BUILT_IN.contains(&source.id()) {
+                faults.push(borrowed_id(name, case, source.id()));
+                return None;
+            }
+            Some(source)
         }
         Some(Err(fault)) => {
             faults.push(at_consult(name, case, &fault));
@@ -110,6 +120,17 @@ fn unknown(name: &Located<String>, case: &Text) -> Fault {
             BUILT_IN.join(", ")
         ),
         advice,
+    )
+}
+
+fn borrowed_id(name: &Located<String>, case: &Text, id: &str) -> Fault {
+    Fault::new(
+        FaultCode::DuplicateId,
+        case,
+        &name.span,
+        format!("\"{}\", whose id is `{id}`", name.value),
+        "an id of its own: a built-in source has this one",
+        "give the file's [source] another id",
     )
 }
 

@@ -5,7 +5,7 @@ use super::builtin::{FILES, GLENN};
 use super::glenn::GlennIndex;
 use super::index;
 use super::model::{Entry, Subject};
-use super::read::{read_source, sha256_hex};
+use super::read::{Provenance, read_source, sha256_hex};
 use crate::finding::Text;
 
 #[test]
@@ -49,7 +49,7 @@ fn blocks(text: &str) -> Vec<(usize, usize)> {
 }
 
 fn rows_of(id: &str, text: &str) -> Vec<(String, String)> {
-    let (source, _) = read_source(&Text::new(id, text));
+    let (source, _) = read_source(&Text::new(id, text), Provenance::Original);
     let entries = source.expect("a built-in source reads").all();
     let blocks = blocks(text);
     assert_eq!(entries.len(), blocks.len(), "{id}");

@@ -36,7 +36,7 @@ pub use model::{Digits, Entry, SourceHead, Subject};
 pub use problem::{
     Comparison, Judgement, Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
 };
-pub use read::{read_source, sha256_hex};
+pub use read::{Provenance, read_source, sha256_hex};
 pub use reference_states::ReferenceStates;
 pub use resolve::resolve;
 pub use search::{Hit, search};

@@ -1,6 +1,6 @@
 //! Reading a source file in the project's own format.
 
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 use sha2::{Digest, Sha256};
 
@@ -37,9 +37,23 @@ const HEAD_KEYS: [&str; 19] = [
     "extract-of",
 ];
 
+/// Where the text of a source comes from.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Provenance {
+    /// A file as its author keeps it.
+    Original,
+    /// The attachment of a record, which a manifest vouches for; it names the SHA-256 of the
+    /// whole file that its entries came from.
+    Extract,
+}
+
 /// Reads a source file. The source is there only where no fault was found.
-pub fn read_source(text: &Text) -> (Option<Source>, Faults) {
-    let (source, faults) = with_document(text, |document| read_document(document, text));
+pub fn read_source(text: &Text, provenance: Provenance) -> (Option<Source>, Faults) {
+    let (source, faults) = with_document(text, |document| {
+        let source = read_document(document, text);
+        check_provenance(&document.root, provenance);
+        source
+    });
     let source = if faults.is_empty() { source } else { None };
     (source, faults)
 }
@@ -65,16 +79,37 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
     refuse_repeated(document.reader, &entries);
     let entries: Vec<Entry> = entries.into_iter().map(|(_, entry)| entry).collect();
     require_for_entries(&table, &head, &entries);
-    let correlations = root.tables("correlation");
-    let correlations = correlations.iter().filter_map(read_correlation);
+    let correlations = read_correlations(root);
     let errata = root.tables("erratum");
     let errata = errata.iter().filter_map(read_erratum);
     Some(Source::listed(
         head,
         entries,
-        correlations.collect(),
+        correlations,
         errata.collect(),
     ))
+}
+
+/// Only a manifest vouches for the hash of a file that is not there.
+fn check_provenance(root: &Table<'_, '_>, provenance: Provenance) {
+    let Some(hash) = root
+        .table("source")
+        .and_then(|table| table.string("extract-of"))
+    else {
+        return;
+    };
+    let hex = |c: char| c.is_ascii_digit() || ('a'..='f').contains(&c);
+    let is_hash = hash.value.len() == 64 && hash.value.chars().all(hex);
+    if provenance == Provenance::Extract && is_hash {
+        return;
+    }
+    value_fault(
+        root.reader(),
+        &hash.span,
+        "`extract-of` in a file that no manifest vouches for",
+        "a source file of its own, or an extracted one beside the manifest.json of its record",
+        "remove the key: the file then stands under its own hash",
+    );
 }
 
 /// Reads the `[source]` table of a text that holds nothing else.
@@ -317,6 +352,30 @@ fn read_reference_states(table: &Table<'_, '_>) -> Vec<(Element, crate::notation
             ),
             _ => {}
         }
+    }
+    read
+}
+
+/// Each pair once, and of two different values.
+fn read_correlations(root: &Table<'_, '_>) -> Vec<StatedCorrelation> {
+    let mut seen = BTreeSet::new();
+    let mut read = Vec::new();
+    for table in root.tables("correlation") {
+        let Some(stated) = read_correlation(&table) else {
+            continue;
+        };
+        let mut pair = stated.between.each_ref().map(|species| species.to_string());
+        pair.sort();
+        if pair[0] == pair[1] || !seen.insert(pair) {
+            value_fault(
+                root.reader(),
+                &table.span,
+                "a correlation of a value with itself, or a second one for the same pair",
+                "one coefficient for each pair of values",
+                "remove one of the two, or mend its `between`",
+            );
+        }
+        read.push(stated);
     }
     read
 }

@@ -152,7 +152,7 @@ impl<'a> Resolver<'a> {
         let per = per.and_then(|per| names.iter().position(|name| *name == per.value));
         let molar_mass = per.map_or_else(Vec::new, |index| {
             let species = self.substances[terms[index].substance].species.clone();
-            self.molar_mass(&species, &reaction.equation.span)
+            self.molar_mass(reaction, &species)
         });
         Some(ProblemReaction {
             id: reaction.id.value.clone(),
@@ -174,6 +174,13 @@ impl<'a> Resolver<'a> {
         } else {
             1
         };
+        // TOML trims a line end right after three quotes.
+        let trimmed = match literal.get(quote..) {
+            Some(text) if quote == 3 && text.starts_with("\r\n") => 2,
+            Some(text) if quote == 3 && text.starts_with('\n') => 1,
+            _ => 0,
+        };
+        let quote = quote + trimmed;
         let start = equation.span.start + quote + term.span.start;
         let end = equation.span.start + quote + term.span.end;
         match end < equation.span.end {
@@ -250,7 +257,9 @@ impl<'a> Resolver<'a> {
         let entry = &chosen.entry;
         let substance = entry.species().map_or_else(String::new, Species::to_string);
         let same = |v: &ValueUsed| {
-            v.source == chosen.source && v.substance == substance && v.locator == entry.locator
+            v.source == chosen.source
+                && v.substance == substance
+                && (&v.name, &v.cas, &v.locator) == (&entry.name, &entry.cas, &entry.locator)
         };
         if let Some(index) = self.values.iter().position(same) {
             return index;
@@ -281,12 +290,49 @@ impl<'a> Resolver<'a> {
     }
 
     /// The atomic weights that make up a molar mass, with the counts of atoms.
-    fn molar_mass(&mut self, species: &Species, span: &Span) -> Vec<(usize, Exact)> {
+    fn molar_mass(&mut self, reaction: &Reaction, species: &Species) -> Vec<(usize, Exact)> {
+        let span = &reaction.equation.span;
+        if species.formula.charge() != 0 {
+            self.refuse_mass_of_ion(reaction, species);
+            return Vec::new();
+        }
         let counts = species.formula.counts().clone();
         let weights = counts.into_iter().filter_map(|(element, count)| {
             Some((self.atomic_weight(element.symbol(), span)?, count))
         });
         weights.collect()
+    }
+
+    /// A result that cannot be there must not be asked for.
+    fn refuse_mass_of_ion(&mut self, reaction: &Reaction, species: &Species) {
+        let name = format!("{}.heat-per-mass", reaction.id.value);
+        let rounded = self
+            .case
+            .rounding
+            .iter()
+            .find(|rule| rule.result.value == name);
+        let bound = self
+            .case
+            .prose
+            .iter()
+            .find(|p| p.markdown.value.contains(&format!("{{{name}}}")));
+        let span = rounded.map(|rule| rule.result.span.clone());
+        let Some(span) = span.or_else(|| bound.map(|prose| prose.markdown.span.clone())) else {
+            return;
+        };
+        self.faults.push(Fault::new(
+            FaultCode::Value,
+            self.text,
+            &span,
+            format!("`{name}`"),
+            format!(
+                "a result that is there: {species} is an ion, and no mass of it alone is weighed"
+            ),
+            format!(
+                "use {}.heat-per, or name a neutral substance in `per`",
+                reaction.id.value
+            ),
+        ));
     }
 
     fn atomic_weight(&mut self, symbol: &str, span: &Span) -> Option<usize> {
@@ -389,9 +435,15 @@ impl<'a> Resolver<'a> {
     /// Correlations that cannot all be true would make a variance negative.
     fn check_correlations(&mut self) {
         let used: Vec<usize> = (0..self.values.len()).collect();
-        if self.correlations().is_consistent(&used) == Ok(true) {
-            return;
-        }
+        let (found, expected, advice) = match self.correlations().is_consistent(&used) {
+            Ok(true) => return,
+            Err(error) => (error.found(), error.expected(), error.advice()),
+            Ok(false) => (
+                "correlations that contradict each other".to_string(),
+                "coefficients that can all be true together (JCGM 100:2008, 5.2)".to_string(),
+                "compare the coefficients with the source".to_string(),
+            ),
+        };
         let with_any = self
             .sources
             .iter()
@@ -406,12 +458,9 @@ impl<'a> Resolver<'a> {
             FaultCode::Source,
             self.text,
             &span,
-            format!(
-                "correlations of {} that contradict each other",
-                ids.join(", ")
-            ),
-            "correlation coefficients that can all be true together (JCGM 100:2008, 5.2)",
-            "compare the coefficients with the source",
+            format!("{found} ({})", ids.join(", ")),
+            expected,
+            advice,
         ));
     }
 

@@ -3,7 +3,7 @@
 use std::collections::BTreeMap;
 
 use super::model::{Entry, Erratum, SourceHead, StatedCorrelation, Subject};
-use super::read::read_source;
+use super::read::{Provenance, read_source};
 use super::read_entry::{EntryRules, read_entry};
 use super::{glenn_entries, index};
 use crate::document::with_document;
@@ -139,7 +139,7 @@ impl Source {
         match &self.store {
             Store::Glenn => glenn_entries::all(),
             Store::Embedded { text, .. } => {
-                let (source, _) = read_source(&Text::new(self.id(), *text));
+                let (source, _) = read_source(&Text::new(self.id(), *text), Provenance::Original);
                 source.map_or_else(Vec::new, |source| source.all())
             }
             Store::Listed { entries, .. } => entries.clone(),

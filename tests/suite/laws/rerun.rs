@@ -40,7 +40,7 @@ fn sources_of(record: &Record) -> Files {
             attached(&record.attachments, file).to_string(),
         )
     });
-    Files(became.collect())
+    Files::extracted(became)
 }
 
 fn assert_same_record(first: &Record) {

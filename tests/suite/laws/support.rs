@@ -10,16 +10,25 @@ use hesswright::source::SourceFiles;
 
 /// Source files by the name that a case consults.
 #[derive(Clone, Debug, Default)]
-pub struct Files(pub BTreeMap<String, String>);
+pub struct Files(pub BTreeMap<String, String>, Provenance);
 
 impl Files {
     pub fn of(files: &[(&str, &str)]) -> Files {
         let owned = |(name, text): &(&str, &str)| (name.to_string(), text.to_string());
-        Files(files.iter().map(owned).collect())
+        Files(files.iter().map(owned).collect(), Provenance::Original)
+    }
+
+    /// The attachments of a record, which its manifest vouches for.
+    pub fn extracted(files: impl Iterator<Item = (String, String)>) -> Files {
+        Files(files.collect(), Provenance::Extract)
     }
 }
 
 impl SourceFiles for Files {
+    fn provenance(&self) -> Provenance {
+        self.1
+    }
+
     fn text(&self, name: &str) -> Option<Result<Text, Fault>> {
         self.0
             .get(name)
