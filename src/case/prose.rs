@@ -120,7 +120,7 @@ fn check_bindings(
     reactions: &IndexMap<String, Reaction>,
 ) {
     let braces = Braces::of(&markdown.value);
-    let place = |span: &Span| reader.text().inside(&markdown.span, &markdown.value, span);
+    let place = |span: &Span| reader.text().inside(&markdown.span, span);
     for binding in braces.bindings {
         let name = Located::new(binding.name, place(&binding.span));
         if ids.kind(&name.value) != Some(IdKind::Input) {
