@@ -189,7 +189,7 @@ fn faults_of_equations_say_what_to_do() {
             "a + b -> c -> d",
             11..13,
             "found a second arrow, `->`; expected one arrow; \
-             write each step as an equation of its own",
+             write each step as an equation of its own, and no bonds in formulas",
         ),
         (
             "a b",
