@@ -36,11 +36,33 @@ impl CaseFolder {
     }
 }
 
+impl CaseFolder {
+    /// An extracted source has to be the one that the manifest names: its head bears the hash of
+    /// the file that the values came from, which no longer vouches for altered ones.
+    fn read_extracted(&self, manifest: &Manifest, file: &str) -> Result<Text, Fault> {
+        let text = self.read(file)?;
+        let named = manifest
+            .attachments
+            .get(file)
+            .and_then(|hash| hash.as_str());
+        if named == Some(&sha256_hex(text.as_str().as_bytes())) {
+            return Ok(text);
+        }
+        Err(Fault::of_file(
+            file,
+            "another content than manifest.json beside it names",
+            "the file as it was extracted from the record",
+            "extract the record again; to work with other values, take the case to a folder of \
+             its own and consult a source file of your own",
+        ))
+    }
+}
+
 impl SourceFiles for CaseFolder {
     fn text(&self, name: &str) -> Option<Result<Text, Fault>> {
         if let Some(manifest) = &self.manifest {
             let file = manifest.consult.get(name)?.as_str()?;
-            return Some(self.read(file));
+            return Some(self.read_extracted(manifest, file));
         }
         name.ends_with(".toml").then(|| self.read(name))
     }

@@ -1,5 +1,7 @@
 //! Ids: each names one thing in the whole case.
 
+use std::cell::Cell;
+
 use indexmap::IndexMap;
 
 use crate::document::{Reader, Table, is_id};
@@ -28,7 +30,13 @@ impl IdKind {
 #[derive(Default)]
 pub(super) struct Ids {
     taken: IndexMap<String, (IdKind, Span)>,
+    /// How many unknown ids were compared with all others.
+    searched: Cell<usize>,
 }
+
+/// How many unknown ids are helped by a search through all others, so that a long case that is
+/// wrong everywhere is answered as soon as one that is right.
+const MOST_SEARCHED: usize = 50;
 
 impl Ids {
     /// Takes the ids of a table of named things.
@@ -71,12 +79,11 @@ impl Ids {
 
     /// Reports an id that nothing has, with the nearest one of the kind that was asked for.
     pub(super) fn unknown(&self, reader: &Reader<'_>, id: &str, span: &Span, wanted: &[IdKind]) {
-        let fitting = self
-            .taken
-            .iter()
-            .filter(|(_, (kind, _))| wanted.contains(kind));
-        let advice = match nearest(id, fitting.map(|(id, _)| id.as_str()), 1).first() {
+        let advice = match self.nearest(id, wanted) {
             Some(near) => format!("did you mean `{near}`?"),
+            None if wanted.contains(&IdKind::Substance) => format!(
+                "declare it: [substances] {id} = {{ formula = \"…\", phase = \"l\", cas = \"…\" }}"
+            ),
             None => "define it, or use one that is defined".to_string(),
         };
         let words: Vec<&str> = wanted.iter().map(|kind| kind.word()).collect();
@@ -87,5 +94,18 @@ impl Ids {
             format!("the id of {} of this case", words.join(" or ")),
             advice,
         );
+    }
+
+    fn nearest(&self, id: &str, wanted: &[IdKind]) -> Option<&str> {
+        self.searched.set(self.searched.get() + 1);
+        if self.searched.get() > MOST_SEARCHED {
+            return None;
+        }
+        let fitting = self
+            .taken
+            .iter()
+            .filter(|(_, (kind, _))| wanted.contains(kind));
+        let candidates = fitting.map(|(id, _)| id.as_str());
+        nearest(id, candidates, 1).first().copied()
     }
 }

@@ -158,6 +158,8 @@ pub struct Reaction {
     pub equation: Located<Equation>,
     pub temperature: Option<Located<Quantity>>,
     pub per: Option<Located<String>>,
+    /// Whether the case says `per`, be it rightly or not.
+    pub says_per: bool,
 }
 
 /// A place that a result is to be stated to.

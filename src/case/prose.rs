@@ -120,9 +120,10 @@ fn check_bindings(
     reactions: &IndexMap<String, Reaction>,
 ) {
     let braces = Braces::of(&markdown.value);
-    let place = |span: &Span| reader.text().inside(&markdown.span, span);
-    for binding in braces.bindings {
-        let name = Located::new(binding.name, place(&binding.span));
+    let text = reader.text();
+    let places = text.inside_each(&markdown.span, braces.bindings.iter().map(|b| &b.span));
+    for (binding, place) in braces.bindings.into_iter().zip(places) {
+        let name = Located::new(binding.name, place);
         if ids.kind(&name.value) != Some(IdKind::Input) {
             check_result(
                 reader,
@@ -133,10 +134,10 @@ fn check_bindings(
             );
         }
     }
-    for open in braces.open {
+    for place in text.inside_each(&markdown.span, &braces.open) {
         value_fault(
             reader,
-            &place(&open),
+            &place,
             "a brace that is not closed on its line",
             "{reaction.heat} or {input}, on one line",
             "close it; for a brace itself put a backslash before it",
@@ -171,7 +172,7 @@ pub(super) fn check_result(
 
 fn check_quantity(reader: &Reader<'_>, reaction: &Reaction, quantity: &str, span: &Span) {
     if RESULT_QUANTITIES.contains(&quantity) {
-        if quantity != "heat" && reaction.per.is_none() {
+        if quantity != "heat" && !reaction.says_per {
             reader.fault(
                 FaultCode::Value,
                 span,

@@ -66,12 +66,14 @@ impl Context<'_, '_, '_> {
         }
         let equation = Located::new(equation.ok()?, text.span.clone());
         self.check_participants(&equation, &text);
+        let says_per = per.is_some();
         let per = per.and_then(|text| self.read_per(&equation, text));
         Some(Reaction {
             id,
             equation,
             temperature,
             per,
+            says_per,
         })
     }
 

@@ -141,7 +141,7 @@ impl Rules<'_> {
         }
         match by_uncertainty {
             Some(stated) if self.complete => (stated, StatedBy::Uncertainty, Some(by_digits)),
-            _ if self.fixed => (by_digits, StatedBy::FixedDecimals, None),
+            _ if self.fixed => (by_digits, StatedBy::FixedDecimals, by_uncertainty),
             _ => (by_digits, StatedBy::Significance, by_uncertainty),
         }
     }

@@ -5,7 +5,7 @@ use std::collections::BTreeSet;
 use num_traits::Zero;
 
 use crate::finding::{Finding, FindingCode, Severity, Text};
-use crate::notation::{Element, Species};
+use crate::notation::{Element, PhaseLabel, Species};
 use crate::quantity::{Exact, exact_text, to_f64, two_digits};
 use crate::source::{Problem, ProblemReaction, ValueKind, ValueUsed};
 
@@ -24,6 +24,7 @@ pub(super) fn check(problem: &Problem, working: &Working, text: &Text) -> Vec<Fi
         let place = text.place(reaction.span.start);
         for (severity, code, message) in temperature(problem, reaction)
             .into_iter()
+            .chain(charge_in_water(problem, reaction))
             .chain(states(problem, reaction))
         {
             findings.push(Finding {
@@ -99,6 +100,39 @@ fn standard_pressures(problem: &Problem) -> Vec<Standard<'_>> {
         .filter(|v| !v.printed.exact)
         .filter_map(of_source)
         .collect()
+}
+
+/// Enthalpies of ions in water rest on the convention that H+(aq) is zero, which cancels only
+/// where the ions on the two sides carry the same charge (IUPAC Green Book, from memory).
+fn charge_in_water(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
+    let charge: Exact = reaction
+        .terms
+        .iter()
+        .map(|term| {
+            let species = &problem.substances[term.substance].species;
+            let phase = species.phase.as_ref();
+            let in_water = phase.is_some_and(|phase| phase.label == PhaseLabel::Aqueous);
+            let charge = if in_water {
+                species.formula.charge()
+            } else {
+                0
+            };
+            &term.nu * Exact::from_integer(charge.into())
+        })
+        .sum();
+    if charge.is_zero() {
+        return None;
+    }
+    Some((
+        Severity::Caution,
+        FindingCode::ChargeInWater,
+        format!(
+            "{}: the ions in water carry {} charges more on the right than on the left. The heat \
+             then rests on the convention that H+(aq) is zero, and cannot be measured as such.",
+            reaction.id,
+            exact_text(&charge)
+        ),
+    ))
 }
 
 /// A formation enthalpy at another temperature is off by ΔCp of the formation reaction times the

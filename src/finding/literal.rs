@@ -1,31 +1,50 @@
 //! The way back from a decoded string to the TOML literal that it was written as.
 
-/// The byte of a literal at which byte `wanted` of the string begins that it stands for. A literal
-/// that is none, or ends before, counts as its own end.
-pub(super) fn undecoded(literal: &str, wanted: usize) -> usize {
-    let quotes = ["\"\"\"", "'''", "\"", "'"]
-        .into_iter()
-        .find(|q| literal.starts_with(q));
-    let quotes = quotes.unwrap_or("");
-    let mut at = quotes.len();
-    if quotes.len() == 3 {
-        let rest = &literal[at..];
+/// Passes through a literal from its beginning to its end.
+pub(super) struct Decoder<'a> {
+    literal: &'a str,
+    escapes: bool,
+    /// Where it is in the literal.
+    at: usize,
+    /// How many bytes of the string it has passed.
+    decoded: usize,
+}
+
+impl<'a> Decoder<'a> {
+    pub(super) fn new(literal: &'a str) -> Decoder<'a> {
+        let quotes = ["\"\"\"", "'''", "\"", "'"];
+        let quotes = quotes
+            .into_iter()
+            .find(|quotes| literal.starts_with(quotes));
+        let quotes = quotes.unwrap_or("");
+        let rest = &literal[quotes.len()..];
         // A line end right after three quotes does not belong to the string.
-        at += rest
-            .strip_prefix("\r\n")
-            .or(rest.strip_prefix('\n'))
-            .map_or(0, |left| rest.len() - left.len());
-    }
-    let escapes = quotes.starts_with('"');
-    let mut decoded = 0;
-    while decoded < wanted {
-        let Some((raw, bytes)) = next(&literal[at..], escapes) else {
-            return literal.len();
+        let line_end = ["\r\n", "\n"].into_iter().find(|end| rest.starts_with(end));
+        let passed = match quotes.len() {
+            3 => line_end.map_or(0, str::len),
+            _ => 0,
         };
-        at += raw;
-        decoded += bytes;
+        Decoder {
+            literal,
+            escapes: quotes.starts_with('"'),
+            at: quotes.len() + passed,
+            decoded: 0,
+        }
     }
-    at
+
+    /// Goes on to byte `wanted` of the string, and says where it begins in the literal. A literal
+    /// that is none, or ends before, counts as its own end.
+    pub(super) fn pass(&mut self, wanted: usize) -> usize {
+        while self.decoded < wanted {
+            let Some((raw, bytes)) = next(&self.literal[self.at..], self.escapes) else {
+                self.at = self.literal.len();
+                break;
+            };
+            self.at += raw;
+            self.decoded += bytes;
+        }
+        self.at
+    }
 }
 
 /// How many bytes the next character takes in the literal, and in the string.
@@ -52,7 +71,11 @@ fn next(rest: &str, escapes: bool) -> Option<(usize, usize)> {
 
 #[cfg(test)]
 mod tests {
-    use super::undecoded;
+    use super::Decoder;
+
+    fn undecoded(literal: &str, wanted: usize) -> usize {
+        Decoder::new(literal).pass(wanted)
+    }
 
     #[test]
     fn escapes_take_more_room_than_what_they_stand_for() {

@@ -28,6 +28,7 @@ impl fmt::Display for Severity {
 /// Which check speaks; the word is stable and stands in records and JSON.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
 pub enum FindingCode {
+    ChargeInWater,
     ChoiceOverrides,
     FixedDecimals,
     HoldOpen,
@@ -48,6 +49,7 @@ pub enum FindingCode {
 impl FindingCode {
     pub fn word(self) -> &'static str {
         match self {
+            FindingCode::ChargeInWater => "charge-in-water",
             FindingCode::ChoiceOverrides => "choice-overrides",
             FindingCode::FixedDecimals => "fixed-decimals",
             FindingCode::HoldOpen => "hold-open",

@@ -1,6 +1,6 @@
 //! A file's text, with its name and the starts of its lines.
 
-use super::literal::undecoded;
+use super::literal::Decoder;
 use super::place::{Place, Span};
 
 /// The text of a case or a source file, so that byte offsets can be told as lines and columns.
@@ -61,8 +61,22 @@ impl Text {
 
     /// Where a part of a decoded string stands in the file, given the span of its literal.
     pub fn inside(&self, literal: &Span, within: &Span) -> Span {
-        let raw = self.slice(literal);
-        literal.start + undecoded(raw, within.start)..literal.start + undecoded(raw, within.end)
+        let mut decoder = Decoder::new(self.slice(literal));
+        literal.start + decoder.pass(within.start)..literal.start + decoder.pass(within.end)
+    }
+
+    /// The same for many parts that follow each other, in one pass: a long text can hold
+    /// thousands.
+    pub fn inside_each<'s>(
+        &self,
+        literal: &Span,
+        parts: impl IntoIterator<Item = &'s Span>,
+    ) -> Vec<Span> {
+        let mut decoder = Decoder::new(self.slice(literal));
+        let place = |part: &Span| {
+            literal.start + decoder.pass(part.start)..literal.start + decoder.pass(part.end)
+        };
+        parts.into_iter().map(place).collect()
     }
 
     fn floor_char_boundary(&self, offset: usize) -> usize {

@@ -93,7 +93,10 @@ fn remark(problem: &Problem, outcome: &Outcome) -> Option<String> {
         .correlations
         .pairs()
         .any(|(a, b)| outcome.form.get(a).is_some() && outcome.form.get(b).is_some());
-    let mut remarks = Vec::new();
+    let mut remarks = vec![format!(
+        "Sensitivity: {0} of the result for each unit of the value as printed; contribution in {0}.",
+        unit(&outcome.unit)
+    )];
     if !outcome.is_complete() {
         remarks.push(format!(
             "{} of {} values state no uncertainty; that is not zero, so the sum is a lower bound.",
@@ -104,5 +107,5 @@ fn remark(problem: &Problem, outcome: &Outcome) -> Option<String> {
     if correlated {
         remarks.push("Correlations that the source states are included.".to_string());
     }
-    (!remarks.is_empty()).then(|| remarks.join(" "))
+    Some(remarks.join(" "))
 }

@@ -38,11 +38,13 @@ pub(super) fn formation_table(
         return None;
     }
     Some(Table {
-        caption: format!("Formation equations, turned where the substance is consumed, in {unit}"),
+        caption: format!(
+            "Formation equations, turned where the substance is consumed; heats already multiplied, in {unit}"
+        ),
         columns: vec![
             mark("Times"),
             column(Rich::plain("Equation"), ColumnKind::Text),
-            mark("Value"),
+            mark("Row"),
             number(enthalpy("r")),
         ],
         rows,
@@ -134,6 +136,9 @@ fn reference_amounts(
         let Some(equation) = formation_equation(species, &problem.reference_states) else {
             continue;
         };
+        if is_identity(&equation) {
+            continue;
+        }
         let of_elements = equation.left.iter().map(|part| (part, false));
         // The electron of a cation's formation stands on the other side.
         let others = equation

@@ -132,6 +132,8 @@ pub struct ResultRow {
     pub id: String,
     /// "Heat of reaction as written, per mole of reaction"
     pub what: String,
+    /// The reaction, with the first of its results.
+    pub equation: Option<Rich>,
     /// Section of the working that made it (index into `working`).
     pub section: usize,
     /// Stated value with a true minus, e.g. `−552.6`; absent where it was not worked.
@@ -194,6 +196,7 @@ pub struct ValueRow {
     pub substance: Rich,
     /// Name of the substance in words where one is known.
     pub name: Option<String>,
+    pub cas: Option<String>,
     /// "formation enthalpy"
     pub quantity: String,
     /// As printed in the source, with a true minus and its uncertainty.

@@ -48,7 +48,7 @@ fn heading(part: ProsePart) -> &'static str {
 /// What stands in the place of a binding: a stated result or an input as given.
 fn bound(calculation: &Calculation, name: &str) -> String {
     if let Some(outcome) = calculation.working.outcome(name) {
-        return in_words(outcome);
+        return format!("{} ({})", in_words(outcome), outcome.direction().word());
     }
     match calculation.case.inputs.get(name) {
         Some(input) => printed(&input.value.value),

@@ -34,14 +34,21 @@ fn reference(head: &SourceHead, number: usize) -> Reference {
     Reference {
         number,
         id: head.id.clone(),
-        text: match &head.note {
-            Some(note) => format!("{} {note}", head.citation()),
-            None => head.citation(),
-        },
+        text: text(head),
         temperature: stated(&head.temperature),
         pressure: stated(&head.pressure),
         licence: head.licence.clone(),
         sha256: head.sha256.clone(),
         attachment: attachment_name(&head.id),
     }
+}
+
+/// Citation, what its uncertainties cover, and the note of the source file.
+fn text(head: &SourceHead) -> String {
+    let coverage = head.coverage_text.as_ref().map(|text| match text.as_str() {
+        "bounds" => "Its uncertainties (±) are bounds, read as u = a/√3.".to_string(),
+        k => format!("Its uncertainties (±) are read with k = {k}."),
+    });
+    let parts = [Some(head.citation()), coverage, head.note.clone()];
+    parts.into_iter().flatten().collect::<Vec<_>>().join(" ")
 }

@@ -6,6 +6,7 @@ use crate::quantity::two_digits;
 
 use super::numerals::{minus, unit};
 use super::pages::ResultRow;
+use super::working::equation;
 
 pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
     let mut rows = Vec::new();
@@ -17,9 +18,14 @@ pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
             .outcomes
             .iter()
             .filter(|o| o.id.starts_with(&prefix));
+        let first = rows.len();
         rows.extend(own.map(|outcome| result_row(calculation, outcome, section)));
         if reaction.hess.is_none() {
             rows.push(not_worked(id, section));
+        }
+        if let Some(row) = rows.get_mut(first) {
+            let reaction = &calculation.problem.reactions[reaction.reaction];
+            row.equation = Some(equation(&calculation.problem, reaction));
         }
     }
     rows
@@ -29,6 +35,7 @@ fn result_row(calculation: &Calculation, outcome: &Outcome, section: usize) -> R
     ResultRow {
         id: outcome.id.clone(),
         what: what(calculation, outcome),
+        equation: None,
         section,
         stated: Some(minus(&outcome.stated.value_text)),
         expanded: stated_uncertainty(outcome),
@@ -43,6 +50,7 @@ fn not_worked(id: &str, section: usize) -> ResultRow {
     ResultRow {
         id: format!("{id}.heat"),
         what: "Heat of reaction: not worked, see the findings".to_string(),
+        equation: None,
         section,
         stated: None,
         expanded: None,

@@ -46,10 +46,13 @@ fn rule(outcome: &Outcome) -> String {
              decide (ASTM E29): {}.",
             last_place(outcome.significance)
         ),
-        StatedBy::FixedDecimals => "A table with a fixed number of decimals is among the sources: \
-             its digits limit nothing, and the result is stated to 0.1 kJ/mol at the finest, or \
-             the like in its unit (practice of this program)."
-            .to_string(),
+        StatedBy::FixedDecimals => format!(
+            "The uncertainty does not cover every value, and a table with a fixed number of \
+             decimals is among the sources: its digits limit nothing, and the result is stated to \
+             0.1 kJ/mol or 1 kJ/kg at the finest (practice of this program). With the digits of \
+             the other values (ASTM E29), {}.",
+            last_place(outcome.significance)
+        ),
         StatedBy::Rounding => "The case names the place ([rounding]).".to_string(),
     }
 }

@@ -20,6 +20,7 @@ pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
             number: index + 1,
             substance: substance(value),
             name: value.name.clone(),
+            cas: value.cas.clone(),
             quantity: quantity(value.kind).to_string(),
             printed: printed_number(&value.printed),
             unit: unit(&value.printed.unit),
@@ -86,7 +87,15 @@ fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) ->
             .unwrap_or(0),
         locator: comparison.locator.clone(),
         difference: minus(&text),
-        judgement: judgement(comparison.judgement),
+        judgement: match &of.because {
+            Some(because) => {
+                format!(
+                    "{}; chosen by the case: {because}",
+                    judgement(comparison.judgement)
+                )
+            }
+            None => judgement(comparison.judgement),
+        },
     }
 }
 

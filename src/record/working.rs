@@ -44,7 +44,7 @@ fn section(calculation: &Calculation, working: &ReactionWorking) -> WorkingSecti
 }
 
 /// The reaction with names where the case declares them.
-fn equation(problem: &Problem, reaction: &ProblemReaction) -> Rich {
+pub(super) fn equation(problem: &Problem, reaction: &ProblemReaction) -> Rich {
     let side = |negative: bool| {
         let terms = reaction.terms.iter();
         let terms = terms.filter(|t| (t.nu < num_traits::Zero::zero()) == negative);
@@ -134,7 +134,7 @@ fn participants(problem: &Problem, hess: &Hess, unit: &str) -> Table {
         columns: vec![
             number(Rich::plain("ν")),
             text("Substance"),
-            mark("Value"),
+            mark("Row"),
             text("As printed"),
             number(enthalpy("f")),
             number(Rich::plain("ν·").with(enthalpy("f"))),
@@ -218,10 +218,32 @@ fn mass_steps(
         Step::Text { text: sum },
         displayed(per_mass_quotient()),
         Step::Text {
+            text: mass_substitution(per, by_mass, mass),
+        },
+        Step::Text {
             text: stating(by_mass),
         },
         result(calculation, by_mass),
     ]
+}
+
+/// Δ_rh = (−552.86 kJ/mol)/(123.111 g/mol) = −4490.7…·kJ/kg
+fn mass_substitution(per: &Outcome, by_mass: &Outcome, mass: &MolarMass) -> Rich {
+    let number = |outcome: &Outcome| {
+        let exact = outcome.value.to_exact();
+        exact.map_or_else(String::new, |value| in_full(&value, outcome.significance))
+    };
+    Rich::plain("Δ")
+        .run(Run::Sub("r".to_string()))
+        .run(Run::Italic("h".to_string()))
+        .and(format!(
+            " = ({} {})/({} g/mol) = {} {}. ",
+            number(per),
+            unit(&per.unit),
+            in_full(&mass.value, mass.significance),
+            number(by_mass),
+            unit(&by_mass.unit)
+        ))
 }
 
 fn result(calculation: &Calculation, outcome: &Outcome) -> Step {

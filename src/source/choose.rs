@@ -5,7 +5,7 @@ use crate::finding::{Fault, FaultCode, Finding, FindingCode, Severity, Span};
 use crate::notation::{PhaseLabel, Species};
 use crate::quantity::{Exact, Quantity};
 
-use super::matching::{Identity, Match, Wanted, are_isomers, identity, pick};
+use super::matching::{Identity, Match, Wanted, are_isomers, identity, passed_over, pick};
 use super::model::Entry;
 use super::resolve::Resolver;
 use super::suggest::{ambiguous, no_enthalpy, unknown_substance};
@@ -27,6 +27,14 @@ pub(super) struct Chosen {
     pub(super) others: Vec<Held>,
     /// What the case said where it chose.
     pub(super) because: Option<String>,
+}
+
+/// Compounds of two carbon atoms or more, with other elements, commonly have isomers.
+fn can_have_isomers(wanted: &Wanted) -> bool {
+    let counts = wanted.species.formula.counts();
+    let carbon = counts.iter().find(|(element, _)| element.symbol() == "C");
+    let two = Exact::from_integer(2.into());
+    counts.len() > 1 && carbon.is_some_and(|(_, count)| *count >= two)
 }
 
 /// Chooses the first source in order, or the one that the case chose.
@@ -59,6 +67,9 @@ fn look_up(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) -> Option<
     let mut without_value: Option<(usize, Entry)> = None;
     for source in 0..resolver.sources.len() {
         let entries = resolver.sources[source].of_composition(&hill);
+        if let Some(entry) = passed_over(wanted, &entries) {
+            note_passed_over(resolver, wanted, span, source, entry);
+        }
         match stable_only(wanted, pick(wanted, &entries)) {
             Match::None => {}
             Match::Several(several) => {
@@ -173,6 +184,30 @@ fn refuse_isomers(
     true
 }
 
+fn note_passed_over(
+    resolver: &mut Resolver<'_>,
+    wanted: &Wanted,
+    span: &Span,
+    source: usize,
+    entry: &Entry,
+) {
+    let number = |cas: &Option<String>| cas.clone().unwrap_or_default();
+    resolver.findings.push(Finding {
+        severity: Severity::Caution,
+        code: FindingCode::IdentityByFormula,
+        message: format!(
+            "{} lists {} under the name of `{}` with CAS number {}, the case says {}: passed over. \
+             One of the two numbers is likely to be wrong.",
+            resolver.sources[source].id(),
+            entry.species().map_or_else(String::new, Species::to_string),
+            wanted.label,
+            number(&entry.cas),
+            number(&wanted.cas),
+        ),
+        at: resolver.text.place(span.start),
+    });
+}
+
 /// What was taken for granted about the identity of a substance is said.
 fn note_identity(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span, entry: &Entry) {
     let form = entry.species().map_or_else(String::new, Species::to_string);
@@ -185,6 +220,20 @@ fn note_identity(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span, entr
             message: format!(
                 "`{}` was found by its formula alone: the source calls {form} \"{name}\". Give a \
                  name or a CAS number in [substances] that says they are the same.",
+                wanted.label
+            ),
+            at,
+        });
+        return;
+    }
+    if !wanted.is_declared() && can_have_isomers(wanted) && entry.name.is_some() {
+        let name = entry.name.as_deref().unwrap_or_default();
+        resolver.findings.push(Finding {
+            severity: Severity::Note,
+            code: FindingCode::IdentityByFormula,
+            message: format!(
+                "`{}` is taken as {name}, the one compound of this formula that the source lists. \
+                 A declaration in [substances] with its CAS number says which one is meant.",
                 wanted.label
             ),
             at,

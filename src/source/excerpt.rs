@@ -85,11 +85,7 @@ fn entries(
         .collect();
     let weights = problem.values.iter();
     let weights = weights.filter(|v| v.source == index && v.kind == ValueKind::AtomicWeight);
-    entries.extend(
-        weights
-            .filter_map(|v| source.of_symbol(&v.substance))
-            .cloned(),
-    );
+    entries.extend(weights.filter_map(|v| source.of_symbol(&v.substance)));
     entries
 }
 

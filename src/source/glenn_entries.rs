@@ -1,6 +1,5 @@
 //! Records of the NASA Glenn file as entries of a source.
 
-use crate::finding::Place;
 use crate::notation::Species;
 use crate::quantity::{Coverage, Decimal, Quantity, Unit};
 
@@ -37,12 +36,11 @@ pub(super) fn head(id: &str) -> SourceHead {
 }
 
 pub(super) fn of_composition(hill: &str) -> Vec<Entry> {
-    let records = GlennIndex::global().find(hill);
-    records.iter().filter_map(entry).collect()
+    glenn::find(hill).iter().filter_map(entry).collect()
 }
 
 pub(super) fn all() -> Vec<Entry> {
-    GlennIndex::global()
+    GlennIndex::build()
         .all()
         .filter_map(|r| entry(&r))
         .collect()
@@ -69,11 +67,6 @@ fn entry(record: &GlennRecord) -> Option<Entry> {
         value: None,
         heat_capacity: record.ranges.iter().filter_map(heat_capacity).collect(),
         transitions: Vec::new(),
-        place: Place {
-            file: "thermo.inp".to_string(),
-            line: record.line,
-            column: 1,
-        },
     })
 }
 
@@ -119,10 +112,10 @@ mod tests {
 
     #[test]
     fn every_record_becomes_an_entry_whose_key_is_its_own() {
-        let index = GlennIndex::global();
+        let index = GlennIndex::build();
         let mut count = 0;
         for key in index.keys() {
-            for record in index.find(key) {
+            for record in glenn::find(key) {
                 let entry = entry(&record).unwrap_or_else(|| panic!("{}", record.glenn_name));
                 let hill = entry.species().map(|s| s.formula.hill());
                 assert_eq!(hill.as_deref(), Some(key), "{}", record.glenn_name);

@@ -118,6 +118,17 @@ pub fn identity(wanted: &Wanted, entry: &Entry) -> Identity {
     }
 }
 
+/// An entry that would serve but for its CAS number, although its name is the wanted one: one of
+/// the two numbers is likely to be wrong.
+pub fn passed_over<'e>(wanted: &Wanted, entries: &'e [Entry]) -> Option<&'e Entry> {
+    let phase = wanted.species.phase.as_ref();
+    entries.iter().find(|entry| {
+        let name = entry.name.as_ref();
+        let named = name.is_some_and(|name| wanted.names.iter().any(|n| same_name(n, name)));
+        named && fits_phase(phase, entry) && identity(wanted, entry) == Identity::Different
+    })
+}
+
 /// Names are compared without regard to case, spaces and hyphens.
 fn same_name(a: &str, b: &str) -> bool {
     let plain = |text: &str| -> String {

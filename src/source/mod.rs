@@ -12,6 +12,9 @@ mod excerpt;
 mod glenn;
 mod glenn_entries;
 mod heat_capacity;
+mod index;
+#[cfg(test)]
+mod index_tests;
 mod matching;
 mod model;
 mod problem;

@@ -1,6 +1,5 @@
 //! Sources and their entries, as typed data.
 
-use crate::finding::Place;
 use crate::notation::{Element, Species};
 use crate::quantity::{Coverage, Decimal, Quantity, Unit};
 
@@ -59,7 +58,7 @@ impl SourceHead {
             .as_ref()
             .map(|edition| match edition.contains("edition") {
                 true => edition.clone(),
-                false => format!("edition {edition}"),
+                false => format!("Edition {edition}"),
             });
         for part in [&self.report, &edition, &self.publisher, &self.year] {
             parts.extend(part.as_ref().map(|p| format!("{p},")));
@@ -70,7 +69,7 @@ impl SourceHead {
 }
 
 /// What an entry is about.
-#[derive(Clone, Debug, PartialEq)]
+#[derive(Clone, Debug, PartialEq, Eq, PartialOrd, Ord)]
 pub enum Subject {
     Species(Species),
     /// An element (atomic weights) or a constant, by its symbol.
@@ -96,8 +95,6 @@ pub struct Entry {
     pub value: Option<Quantity>,
     pub heat_capacity: Vec<HeatCapacity>,
     pub transitions: Vec<Transition>,
-    /// Where the entry stands in its file.
-    pub place: Place,
 }
 
 impl Entry {

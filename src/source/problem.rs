@@ -37,6 +37,8 @@ pub struct Substance {
     /// Index of its formation enthalpy among the values used.
     pub value: usize,
     pub comparisons: Vec<Comparison>,
+    /// Why the case chose the source, where it did.
+    pub because: Option<String>,
 }
 
 /// The same value in another source that was consulted.
@@ -87,6 +89,7 @@ pub struct ValueUsed {
     pub substance: String,
     pub species: Option<Species>,
     pub name: Option<String>,
+    pub cas: Option<String>,
     pub printed: Quantity,
     pub significance: Significance,
     pub uncertainty: InputUncertainty,

@@ -1,10 +1,12 @@
 //! Reading a source file in the project's own format.
 
+use std::collections::BTreeMap;
+
 use sha2::{Digest, Sha256};
 
 use crate::document::{Document, Reader, Table, one_of, quantity, unit, value_fault};
 use crate::document::{species, with_document};
-use crate::finding::{FaultCode, Faults, Located, Text};
+use crate::finding::{FaultCode, Faults, Located, Span, Text};
 use crate::notation::Element;
 use crate::quantity::{Coverage, Decimal, Dimension, Quantity, StatedUncertainty, Unit, UnitKind};
 
@@ -54,13 +56,15 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
     };
     let head = read_head(&table, text);
     let rules = EntryRules::of(&head);
-    let entries = root.tables("entry");
-    let entries: Vec<Entry> = entries
-        .iter()
-        .filter_map(|t| read_entry(t, &rules))
-        .collect();
+    let tables = root.tables("entry");
+    let read = |table: &Table<'_, '_>| {
+        let span = table.get("substance").map_or(0..0, |value| value.span());
+        Some((span, read_entry(table, &rules)?))
+    };
+    let entries: Vec<(Span, Entry)> = tables.iter().filter_map(read).collect();
+    refuse_repeated(document.reader, &entries);
+    let entries: Vec<Entry> = entries.into_iter().map(|(_, entry)| entry).collect();
     require_for_entries(&table, &head, &entries);
-    refuse_repeated(document.reader, &root.tables("entry"), &entries);
     let correlations = root.tables("correlation");
     let correlations = correlations.iter().filter_map(read_correlation);
     let errata = root.tables("erratum");
@@ -71,6 +75,15 @@ fn read_document(document: &Document<'_, '_>, text: &Text) -> Option<Source> {
         correlations.collect(),
         errata.collect(),
     ))
+}
+
+/// Reads the `[source]` table of a text that holds nothing else.
+pub(super) fn read_head_alone(text: &Text) -> Option<SourceHead> {
+    let (head, _) = with_document(text, |document| {
+        let table = document.root.table("source")?;
+        Some(read_head(&table, text))
+    });
+    head
 }
 
 /// What the entries need the head to say, so that nothing about them is guessed.
@@ -104,25 +117,19 @@ fn require_for_entries(table: &Table<'_, '_>, head: &SourceHead, entries: &[Entr
 }
 
 /// Two entries that nothing tells apart would make each other useless.
-fn refuse_repeated(reader: &Reader<'_>, tables: &[Table<'_, '_>], entries: &[Entry]) {
-    for (index, entry) in entries.iter().enumerate() {
-        let same = |other: &&Entry| {
-            (&other.subject, &other.name, &other.cas) == (&entry.subject, &entry.name, &entry.cas)
-        };
-        let Some(first) = entries[..index].iter().find(same) else {
+fn refuse_repeated(reader: &Reader<'_>, entries: &[(Span, Entry)]) {
+    let mut seen = BTreeMap::new();
+    for (span, entry) in entries {
+        let told_apart_by = (&entry.subject, &entry.name, &entry.cas);
+        let Some(first) = seen.insert(told_apart_by, span) else {
             continue;
         };
-        let substances = tables.iter().filter_map(|table| table.get("substance"));
-        let mut spans = substances.map(|value| value.span());
-        let span = spans.find(|span| reader.text().place(span.start) == entry.place);
+        let line = reader.text().place(first.start).line;
         reader.fault(
             FaultCode::DuplicateId,
-            &span.unwrap_or(0..0),
+            span,
             "a second entry of this substance, name and CAS number",
-            format!(
-                "one entry for it: the first stands in line {}",
-                first.place.line
-            ),
+            format!("one entry for it: the first stands in line {line}"),
             "gather the values in one entry; tell isomers apart by name or CAS number",
         );
     }

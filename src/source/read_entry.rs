@@ -28,6 +28,7 @@ const ENTRY_KEYS: [&str; 14] = [
 ];
 
 /// What the head of a source settles for its entries.
+#[derive(Clone, Debug)]
 pub(super) struct EntryRules {
     energy_unit: Option<Unit>,
     standing: Standing,
@@ -87,7 +88,6 @@ pub(super) fn read_entry(table: &Table<'_, '_>, rules: &EntryRules) -> Option<En
             .iter()
             .filter_map(read_transition)
             .collect(),
-        place: reader.text().place(substance.span.start),
     })
 }
 

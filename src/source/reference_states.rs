@@ -13,14 +13,14 @@ pub struct ReferenceStates {
 }
 
 impl ReferenceStates {
-    /// The states that a source of conventions lists.
-    pub fn of(conventions: &Source) -> ReferenceStates {
-        let entries = conventions.all();
-        let states = entries
-            .iter()
-            .filter_map(|entry| Some((entry.reference_for?, entry.species()?.clone())));
+    /// The states that a source of conventions lists for some elements.
+    pub fn of(
+        conventions: &Source,
+        elements: impl IntoIterator<Item = Element>,
+    ) -> ReferenceStates {
+        let state = |element| Some((element, conventions.reference_state(element)?));
         ReferenceStates {
-            states: states.collect(),
+            states: elements.into_iter().filter_map(state).collect(),
         }
     }
 

@@ -1,11 +1,11 @@
 //! From a case and its sources to a problem.
 
 use std::cell::OnceCell;
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 use crate::case::{Case, DeclaredKind, Reaction};
 use crate::finding::{Fault, FaultCode, Faults, Finding, Span, Text};
-use crate::notation::{Formula, Participant, Species, Term, balanced_form, imbalance};
+use crate::notation::{Element, Formula, Participant, Species, Term, balanced_form, imbalance};
 use crate::quantity::{Correlations, Exact, Quantity, to_f64};
 
 use super::builtin::ATOMIC_WEIGHTS;
@@ -109,9 +109,11 @@ impl<'a> Resolver<'a> {
 
     fn problem(self, reactions: Vec<Option<ProblemReaction>>) -> Problem {
         let correlations = self.correlations();
+        let counts = self.substances.iter().map(|s| s.species.formula.counts());
+        let elements: BTreeSet<Element> = counts.flat_map(|c| c.keys().copied()).collect();
         Problem {
             // The conventions are always the first source.
-            reference_states: ReferenceStates::of(&self.sources[0]),
+            reference_states: ReferenceStates::of(&self.sources[0], elements),
             consulted: self.consulted,
             became: self.became,
             substances: self.substances,
@@ -189,14 +191,15 @@ impl<'a> Resolver<'a> {
                 let DeclaredKind::Compound { formula, phase } = &declared.kind else {
                     return None;
                 };
-                let names = std::iter::once(id.clone()).chain(declared.name.clone());
+                // A name that the case gives goes before the id, which is often a short form.
+                let name = declared.name.clone().unwrap_or_else(|| id.clone());
                 Some(Wanted {
                     label: id.clone(),
                     species: Species {
                         formula: formula.clone(),
                         phase: Some(phase.clone()),
                     },
-                    names: names.collect(),
+                    names: vec![name],
                     cas: declared.cas.clone(),
                 })
             }
@@ -219,6 +222,7 @@ impl<'a> Resolver<'a> {
             name: chosen.entry.name.clone(),
             value,
             comparisons,
+            because: chosen.because.clone(),
         });
         Some(self.substances.len() - 1)
     }
@@ -246,6 +250,7 @@ impl<'a> Resolver<'a> {
             substance,
             species: entry.species().cloned(),
             name: entry.name.clone(),
+            cas: entry.cas.clone(),
             significance,
             uncertainty: input_uncertainty(&printed, head),
             printed,
@@ -291,6 +296,7 @@ impl<'a> Resolver<'a> {
             substance: symbol.to_string(),
             species: None,
             name: entry.name.clone(),
+            cas: entry.cas.clone(),
             significance: printed.significance(),
             uncertainty: input_uncertainty(&printed, head),
             printed,

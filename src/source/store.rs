@@ -2,8 +2,13 @@
 
 use std::collections::BTreeMap;
 
-use super::glenn_entries;
 use super::model::{Entry, Erratum, SourceHead, StatedCorrelation, Subject};
+use super::read::read_source;
+use super::read_entry::{EntryRules, read_entry};
+use super::{glenn_entries, index};
+use crate::document::with_document;
+use crate::finding::Text;
+use crate::notation::{Element, Species};
 
 /// A source as it is consulted.
 #[derive(Clone, Debug)]
@@ -22,7 +27,12 @@ enum Store {
         entries: Vec<Entry>,
         by_composition: BTreeMap<String, Vec<usize>>,
     },
-    /// The NASA Glenn file, whose entries are read when they are asked for.
+    /// A source file that is part of the program; its entries are read when they are asked for.
+    Embedded {
+        text: &'static str,
+        rules: EntryRules,
+    },
+    /// The NASA Glenn file, likewise.
     Glenn,
 }
 
@@ -62,6 +72,15 @@ impl Source {
         }
     }
 
+    /// A source file that is part of the program.
+    pub(super) fn embedded(head: SourceHead, text: &'static str) -> Source {
+        let rules = EntryRules::of(&head);
+        Source {
+            store: Store::Embedded { text, rules },
+            ..Source::glenn(head)
+        }
+    }
+
     pub fn id(&self) -> &str {
         &self.head.id
     }
@@ -70,6 +89,7 @@ impl Source {
     pub fn of_composition(&self, hill: &str) -> Vec<Entry> {
         match &self.store {
             Store::Glenn => glenn_entries::of_composition(hill),
+            Store::Embedded { text, rules } => read_places(self.id(), hill, text, rules),
             Store::Listed {
                 entries,
                 by_composition,
@@ -81,19 +101,69 @@ impl Source {
     }
 
     /// The entry of an element or a constant by its symbol.
-    pub fn of_symbol(&self, symbol: &str) -> Option<&Entry> {
-        let Store::Listed { entries, .. } = &self.store else {
-            return None;
-        };
-        let wanted = Subject::Symbol(symbol.to_string());
-        entries.iter().find(|entry| entry.subject == wanted)
+    pub fn of_symbol(&self, symbol: &str) -> Option<Entry> {
+        match &self.store {
+            Store::Glenn => None,
+            Store::Embedded { text, rules } => {
+                let key = format!("={symbol}");
+                read_places(self.id(), &key, text, rules).pop()
+            }
+            Store::Listed { entries, .. } => {
+                let wanted = Subject::Symbol(symbol.to_string());
+                entries
+                    .iter()
+                    .find(|entry| entry.subject == wanted)
+                    .cloned()
+            }
+        }
     }
 
-    /// Every entry, for listings and for help with names; the Glenn file is read whole.
+    /// The form that the source calls the reference state of an element.
+    pub fn reference_state(&self, element: Element) -> Option<Species> {
+        let entry = match &self.store {
+            Store::Glenn => None,
+            Store::Embedded { text, rules } => {
+                let key = format!("@{}", element.symbol());
+                read_places(self.id(), &key, text, rules).pop()
+            }
+            Store::Listed { entries, .. } => {
+                let named = |entry: &&Entry| entry.reference_for == Some(element);
+                entries.iter().find(named).cloned()
+            }
+        };
+        entry?.species().cloned()
+    }
+
+    /// Every entry, for listings and for help with names; a built-in source is read whole.
     pub fn all(&self) -> Vec<Entry> {
         match &self.store {
             Store::Glenn => glenn_entries::all(),
+            Store::Embedded { text, .. } => {
+                let (source, _) = read_source(&Text::new(self.id(), *text));
+                source.map_or_else(Vec::new, |source| source.all())
+            }
             Store::Listed { entries, .. } => entries.clone(),
         }
     }
+}
+
+/// The entries that the index names under a key. A test reads all of them without fault.
+fn read_places(id: &str, key: &str, text: &str, rules: &EntryRules) -> Vec<Entry> {
+    let blocks = index::places(id, key).into_iter().filter_map(index::span);
+    let blocks = blocks.filter_map(|span| text.get(span));
+    blocks
+        .flat_map(|block| read_block(id, block, rules))
+        .collect()
+}
+
+fn read_block(id: &str, block: &str, rules: &EntryRules) -> Vec<Entry> {
+    let text = Text::new(id, block);
+    let (entries, _) = with_document(&text, |document| {
+        let tables = document.root.tables("entry");
+        tables
+            .iter()
+            .filter_map(|table| read_entry(table, rules))
+            .collect()
+    });
+    entries
 }

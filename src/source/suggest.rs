@@ -3,7 +3,7 @@
 use std::collections::BTreeSet;
 
 use crate::finding::{Fault, FaultCode, Span, nearest};
-use crate::notation::Species;
+use crate::notation::{PhaseLabel, Species};
 
 use super::builtin::{BUILT_IN, built_in};
 use super::matching::{Match, Wanted, pick};
@@ -42,9 +42,16 @@ fn source_ids<'r>(resolver: &'r Resolver<'_>) -> Vec<&'r str> {
 }
 
 fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
+    let ions = match is_neutral_in_water(wanted) {
+        true => {
+            ". A strong acid, base or salt in dilute solution is written as its ions: \
+                 H+(aq) + NO3-(aq)"
+        }
+        false => "",
+    };
     let forms = other_forms(resolver, wanted);
     if !forms.is_empty() {
-        return format!("the sources list: {}", forms.join(", "));
+        return format!("the sources list: {}{ions}", forms.join(", "));
     }
     if resolver.faults.len() >= MOST_SEARCHED {
         return OWN_VALUE.to_string();
@@ -64,6 +71,12 @@ fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
         "did you mean {}? Otherwise cite a value in a source file of your own",
         near.join(", ")
     )
+}
+
+fn is_neutral_in_water(wanted: &Wanted) -> bool {
+    let phase = wanted.species.phase.as_ref();
+    let in_water = phase.is_some_and(|phase| phase.label == PhaseLabel::Aqueous);
+    in_water && wanted.species.formula.charge() == 0
 }
 
 /// Entries of the same composition in other phases or forms, or of another identity.
@@ -149,10 +162,13 @@ pub(super) fn ambiguous(
     entries: &[Entry],
 ) -> Fault {
     let labels: Vec<String> = entries.iter().take(MOST).map(label).collect();
-    let same_notation = entries
+    // HCN(g) and HNC(g) are spelt apart, and still one composition in one phase: neither spelling
+    // chooses between them.
+    let phase = |entry: &Entry| entry.species().map(|species| species.phase.clone());
+    let same_phase = entries
         .windows(2)
-        .all(|pair| pair[0].species() == pair[1].species());
-    let advice = match same_notation {
+        .all(|pair| phase(&pair[0]) == phase(&pair[1]));
+    let advice = match same_phase {
         true => declare(wanted, entries),
         false => "name the form: write one of them in the equation".to_string(),
     };
@@ -208,19 +224,19 @@ pub(super) fn no_enthalpy(
     let why = entry
         .note
         .as_ref()
-        .map_or_else(String::new, |note| format!(" ({note})"));
+        .map_or_else(String::new, |note| format!("{note}. "));
     Fault::new(
         FaultCode::Source,
         resolver.text,
         span,
         format!(
-            "{} in {}, without a formation enthalpy at its reference temperature{why}",
+            "{} in {}, without a formation enthalpy at its reference temperature",
             label(entry),
             resolver.sources[source].id()
         ),
         "an entry with `formation-enthalpy`",
         format!(
-            "consult another source for `{}`, or cite a value of your own",
+            "{why}Consult another source for `{}`, or cite a value of your own",
             wanted.label
         ),
     )

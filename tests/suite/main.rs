@@ -3,5 +3,6 @@
 mod commands;
 mod faults;
 mod laws;
+mod outside;
 mod program;
 mod record;

@@ -1,19 +1,25 @@
-//! The index: which entries the file has for a composition, and where they begin.
-
-use std::sync::OnceLock;
+//! Finding the records of a composition: by the committed index, or by reading the whole file.
 
 use super::columns::{Place, field, places};
 use super::names::Named;
 use super::record::{GlennRecord, ranges};
-use super::{NAMES, THERMO, key};
+use super::{ID, NAMES, THERMO, key};
+use crate::source::index;
 
-/// All entries that are served, found by composition or by the file's own name.
+/// The entries of a composition, in the order of the file; none where it is unknown.
+///
+/// `key` is the formula in Hill order with its charge: `CCaO3`, `C2H4O`, `O4S^2-`. Isomers and the
+/// forms of a substance come together.
+pub fn find(key: &str) -> Vec<GlennRecord> {
+    let entries = index::places(ID, key).into_iter().filter_map(Entry::at);
+    entries.filter_map(|entry| entry.record()).collect()
+}
+
+/// The whole file: all entries that are served, in its order.
 #[derive(Debug)]
 pub struct GlennIndex {
-    /// In the order of the file.
-    entries: Vec<Entry>,
-    /// Composition keys in order, each with the number of its entry.
-    keys: Vec<(String, usize)>,
+    /// Each with its composition key and the byte of its row in `names.tsv`.
+    entries: Vec<(String, usize, Entry)>,
 }
 
 #[derive(Debug)]
@@ -24,56 +30,28 @@ struct Entry {
 }
 
 impl GlennIndex {
-    /// The index of the embedded file, built at the first call.
-    pub fn global() -> &'static GlennIndex {
-        static INDEX: OnceLock<GlennIndex> = OnceLock::new();
-        INDEX.get_or_init(|| GlennIndex::build(NAMES))
+    /// Reads the rows of `names.tsv` against the file. A row that does not fit it is passed over.
+    pub fn build() -> Self {
+        GlennIndex::of(NAMES)
     }
 
-    /// Reads the rows of `names` against the file. A row that does not fit it is passed over.
-    pub(super) fn build(names: &'static str) -> Self {
+    pub(super) fn of(names: &'static str) -> Self {
         let places = places(THERMO);
-        let mut index = GlennIndex {
-            entries: Vec::with_capacity(2000),
-            keys: Vec::with_capacity(2000),
-        };
-        for named in names.lines().filter_map(Named::read) {
-            index.add(named, &places);
+        let mut entries = Vec::with_capacity(2100);
+        let mut row = 0;
+        for line in names.split_inclusive('\n') {
+            let named = Named::read(line.trim_end_matches('\n'));
+            entries.extend(named.and_then(|named| Entry::of(named, row, &places)));
+            row += line.len();
         }
-        index.keys.sort_unstable();
-        index
-    }
-
-    fn add(&mut self, named: Named, places: &[Place]) -> Option<()> {
-        let own: Option<Vec<Place>> = named.lines().map(|line| at_line(places, line)).collect();
-        let own = own?;
-        let mut lines = THERMO.get(own.first()?.offset..)?.lines();
-        let first = lines.next()?;
-        if field(first, 0, 18) != named.glenn_name {
-            return None;
-        }
-        let key = key::composition(named.glenn_name, lines.next()?)?;
-        self.keys.push((key, self.entries.len()));
-        self.entries.push(Entry { named, places: own });
-        Some(())
-    }
-
-    /// The entries of a composition, in the order of the file; none where it is unknown.
-    ///
-    /// `key` is the formula in Hill order with its charge: `CCaO3`, `C2H4O`, `O4S^2-`. Isomers
-    /// and the forms of a substance come together.
-    pub fn find(&self, key: &str) -> Vec<GlennRecord> {
-        let start = self.keys.partition_point(|(known, _)| known.as_str() < key);
-        self.keys[start..]
-            .iter()
-            .take_while(|(known, _)| known == key)
-            .filter_map(|(_, number)| self.entries.get(*number)?.record())
-            .collect()
+        GlennIndex { entries }
     }
 
     /// All entries, in the order of the file.
     pub fn all(&self) -> impl Iterator<Item = GlennRecord> {
-        self.entries.iter().filter_map(Entry::record)
+        self.entries
+            .iter()
+            .filter_map(|(_, _, entry)| entry.record())
     }
 }
 
@@ -82,21 +60,62 @@ impl GlennIndex {
 impl GlennIndex {
     /// The entries under the file's own name; several where it uses one name for two forms.
     pub fn by_name(&self, glenn_name: &str) -> Vec<GlennRecord> {
-        let own = |entry: &&Entry| entry.named.glenn_name == glenn_name;
-        self.entries
-            .iter()
-            .filter(own)
-            .filter_map(Entry::record)
-            .collect()
+        let entries = self.entries.iter().map(|(_, _, entry)| entry);
+        let own = entries.filter(|entry| entry.named.glenn_name == glenn_name);
+        own.filter_map(Entry::record).collect()
     }
 
-    /// The composition keys in order; a key comes once for each of its entries.
+    /// The composition keys in the order of the file.
     pub fn keys(&self) -> impl Iterator<Item = &str> {
-        self.keys.iter().map(|(key, _)| key.as_str())
+        self.entries.iter().map(|(key, _, _)| key.as_str())
+    }
+
+    /// Key and place of each entry, as the committed index holds them.
+    pub fn rows(&self) -> impl Iterator<Item = (&str, String)> {
+        self.entries
+            .iter()
+            .map(|(key, row, entry)| (key.as_str(), entry.place(*row)))
     }
 }
 
 impl Entry {
+    fn of(named: Named, row: usize, places: &[Place]) -> Option<(String, usize, Entry)> {
+        let own: Option<Vec<Place>> = named.lines().map(|line| at_line(places, line)).collect();
+        let own = own?;
+        let mut lines = THERMO.get(own.first()?.offset..)?.lines();
+        let first = lines.next()?;
+        if field(first, 0, 18) != named.glenn_name {
+            return None;
+        }
+        let key = key::composition(named.glenn_name, lines.next()?)?;
+        let entry = Entry { named, places: own };
+        Some((key, row, entry))
+    }
+
+    /// The entry at a place of the committed index: `row;line@byte,line@byte`.
+    fn at(place: &str) -> Option<Entry> {
+        let (row, places) = place.split_once(';')?;
+        let row: usize = row.parse().ok()?;
+        let place = |text: &str| {
+            let (line, offset) = text.split_once('@')?;
+            Some(Place {
+                line: line.parse().ok()?,
+                offset: offset.parse().ok()?,
+            })
+        };
+        Some(Entry {
+            named: Named::read(NAMES.get(row..)?.lines().next()?)?,
+            places: places.split(',').map(place).collect::<Option<Vec<_>>>()?,
+        })
+    }
+
+    #[cfg(test)]
+    fn place(&self, row: usize) -> String {
+        let place = |place: &Place| format!("{}@{}", place.line, place.offset);
+        let places: Vec<String> = self.places.iter().map(place).collect();
+        format!("{row};{}", places.join(","))
+    }
+
     /// The entry with all ranges of its records; `None` where one of them is malformed.
     fn record(&self) -> Option<GlennRecord> {
         let (first, others) = self.places.split_first()?;

@@ -17,7 +17,7 @@ mod record;
 #[cfg(test)]
 mod tests;
 
-pub use index::GlennIndex;
+pub use index::{GlennIndex, find};
 pub use record::{GlennEnthalpy, GlennRange, GlennRecord};
 
 /// The id under which a case consults this source.

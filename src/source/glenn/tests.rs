@@ -49,13 +49,13 @@ fn printed(record: &GlennRecord) -> &str {
 }
 
 fn by_name(name: &str) -> GlennRecord {
-    let mut records = GlennIndex::global().by_name(name);
+    let mut records = GlennIndex::build().by_name(name);
     assert_eq!(records.len(), 1, "{name}");
     records.remove(0)
 }
 
 fn by_species(key: &str, species: &str) -> GlennRecord {
-    let records = GlennIndex::global().find(key);
+    let records = find(key);
     records.into_iter().find(|r| r.species == species).unwrap()
 }
 
@@ -74,7 +74,7 @@ fn the_file_is_the_one_we_pinned() {
 #[test]
 fn every_row_of_names_is_served() {
     let rows = NAMES.lines().skip(1).count();
-    let records: Vec<_> = GlennIndex::global().all().collect();
+    let records: Vec<_> = GlennIndex::build().all().collect();
     assert_eq!(records.len(), rows);
     assert_eq!(rows, 2065);
     let gases = records.iter().filter(|r| r.species.ends_with("(g)"));
@@ -93,7 +93,7 @@ fn agrees_with_the_independent_reading_row_by_row() {
     let mut summary = summary();
     assert_eq!(summary.len(), 2111);
     for named in NAMES.lines().filter_map(names::Named::read) {
-        let records = GlennIndex::global().by_name(named.glenn_name);
+        let records = GlennIndex::build().by_name(named.glenn_name);
         let lines: Vec<usize> = named.lines().map(|line| line as usize).collect();
         let record = records.iter().find(|r| r.line == lines[0]).unwrap();
         let rows: Vec<Row> = lines.iter().map(|l| summary.remove(l).unwrap()).collect();
@@ -124,8 +124,9 @@ fn upside_down_at(line: usize) -> usize {
 #[test]
 fn keys_are_those_of_the_independent_reading() {
     let summary = summary();
-    for key in GlennIndex::global().keys().collect::<BTreeSet<_>>() {
-        for record in GlennIndex::global().find(key) {
+    let index = GlennIndex::build();
+    for key in index.keys().collect::<BTreeSet<_>>() {
+        for record in find(key) {
             let hill = match summary[&record.line].hill {
                 // The element field has two decimals; the name is followed.
                 "Fe0.95O" => "Fe0.947O",
@@ -140,7 +141,7 @@ fn keys_are_those_of_the_independent_reading() {
 #[test]
 fn the_functions_give_the_printed_enthalpy_where_it_is_said_to_hold() {
     let summary = summary();
-    for record in GlennIndex::global().all() {
+    for record in GlennIndex::build().all() {
         let row = &summary[&record.line];
         let stated: f64 = printed(&record).parse().unwrap();
         match (&record.enthalpy, row.h298) {
@@ -167,7 +168,7 @@ fn a_lambda_transition_does_not_make_two_entries() {
 
 #[test]
 fn one_name_of_the_file_can_be_two_forms() {
-    let species: Vec<String> = GlennIndex::global()
+    let species: Vec<String> = GlennIndex::build()
         .by_name("SnS(cr)")
         .into_iter()
         .map(|r| r.species)
@@ -249,8 +250,9 @@ fn reads_every_column() {
 
 #[test]
 fn gases_of_one_composition_differ_by_name() {
-    for key in GlennIndex::global().keys().collect::<BTreeSet<_>>() {
-        let records = GlennIndex::global().find(key);
+    let index = GlennIndex::build();
+    for key in index.keys().collect::<BTreeSet<_>>() {
+        let records = find(key);
         let gases = records.iter().filter(|r| r.species.ends_with("(g)"));
         let names: Vec<_> = gases.map(|r| r.name.as_deref()).collect();
         let distinct: BTreeSet<_> = names.iter().flatten().collect();
@@ -264,8 +266,9 @@ fn gases_of_one_composition_differ_by_name() {
 #[test]
 fn species_are_canonical_and_lead_back_to_their_key() {
     use crate::notation::Species;
-    for key in GlennIndex::global().keys().collect::<BTreeSet<_>>() {
-        for record in GlennIndex::global().find(key) {
+    let index = GlennIndex::build();
+    for key in index.keys().collect::<BTreeSet<_>>() {
+        for record in find(key) {
             let species = Species::parse(&record.species).unwrap();
             assert_eq!(species.to_string(), record.species);
             assert_eq!(species.formula.hill(), key, "{}", record.species);
@@ -275,9 +278,9 @@ fn species_are_canonical_and_lead_back_to_their_key() {
 
 #[test]
 fn an_unknown_composition_finds_nothing() {
-    let index = GlennIndex::global();
+    let index = GlennIndex::build();
     for key in ["", "Xx", "C60", "H2O^+^", "zzz"] {
-        assert!(index.find(key).is_empty(), "{key}");
+        assert!(find(key).is_empty(), "{key}");
     }
     assert!(index.by_name("FeCL4").is_empty());
 }
@@ -286,5 +289,5 @@ fn an_unknown_composition_finds_nothing() {
 fn a_row_that_does_not_fit_the_file_is_passed_over() {
     let rows = "H2O(L)\tH2O(l)\t\t\t298.15\t99999\nH2O(L)\tH2O(l)\t\t\t298.15\t12476\n\
                 H2O(L)\tH2O(l)\t\t\t298.15\t\nH2O(L)\tH2O(l)\t\t\t298.15\t12481\nshort\trow\n";
-    assert_eq!(GlennIndex::build(rows).all().count(), 1);
+    assert_eq!(GlennIndex::of(rows).all().count(), 1);
 }

@@ -188,6 +188,7 @@ fn results() -> Vec<ResultRow> {
     let row = |id: &str, what: &str, stated: Option<&str>, expanded: Option<&str>| ResultRow {
         id: s(id),
         what: s(what),
+        equation: (id == "hydrogenation.heat").then(sulfate),
         section: 0,
         stated: stated.map(s),
         expanded: expanded.map(s),
@@ -265,6 +266,7 @@ fn values_used() -> Vec<ValueRow> {
         number,
         substance,
         name: name.map(s),
+        cas: name.map(|_| s("7732-18-5")),
         quantity: s("formation enthalpy"),
         printed: s(printed),
         unit: s("kJ/mol"),

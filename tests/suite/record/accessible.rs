@@ -224,6 +224,8 @@ fn links_say_where_they_lead_and_stand_in_the_structure() {
             for annotation in array::<Dict<'_>>(page.raw(), "Annots") {
                 assert_eq!(name(&annotation, "Subtype"), "Link");
                 assert!(!string(&annotation, "Contents").is_empty());
+                // Printed, and none of the flags that hide it (ISO 32000-1, table 165).
+                assert_eq!(annotation.get::<i32>("F"), Some(4));
                 let key = annotation.get::<i32>("StructParent").expect("a key");
                 let Some(Object::Dict(owner)) = parents.get(&key) else {
                     panic!("the parent tree has no annotation {key}")

@@ -110,7 +110,7 @@ fn findings_inputs_assumptions_and_holds_are_there() {
         for assumption in &case.assumptions {
             says(&body, [assumption.text.value.clone()]);
             says(&body, assumption.basis.clone());
-            for hold in &assumption.hold {
+            if let Some(hold) = &assumption.hold {
                 says(&body, [hold.owner.clone(), hold.closed_by.clone()]);
             }
         }

@@ -1,0 +1,16 @@
+//! The program held against outsiders: published heats, an independent thermochemistry library,
+//! worked examples of standards, constants of another package, and other readers of the file.
+//!
+//! No expected value here was computed by the program. What is held against what, and how far
+//! each figure was verified, stands in `tests/outside/README.md`.
+
+mod cantera;
+mod case;
+mod correlation;
+mod ferric_chloride;
+mod judges;
+mod published;
+mod rational;
+mod rounding;
+mod tools;
+mod units;
