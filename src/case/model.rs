@@ -147,6 +147,8 @@ pub struct Input {
     pub id: Located<String>,
     pub value: Located<Quantity>,
     pub tolerance: Option<Quantity>,
+    /// Temperature and pressure that a gas volume refers to, as written.
+    pub reference: Option<String>,
     pub source: Option<String>,
     pub confirmed: bool,
     pub hold: Option<Hold>,

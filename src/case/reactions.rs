@@ -125,7 +125,7 @@ impl Context<'_, '_, '_> {
             let Participant::Declared(id) = &term.participant else {
                 continue;
             };
-            let span = reader.text().inside(&text.span, &text.value, &term.span);
+            let span = reader.text().inside(&text.span, &term.span);
             match self.substances.get(id).map(|s| &s.kind) {
                 Some(DeclaredKind::Compound { .. }) => {}
                 Some(DeclaredKind::Inert) => value_fault(

@@ -1,6 +1,6 @@
 //! `source list|show|find|validate`: what the sources hold.
 
-use std::path::PathBuf;
+use std::path::{Path, PathBuf};
 
 use clap::{Args, Subcommand};
 use serde_json::{Value, json};
@@ -123,7 +123,7 @@ impl SourceCommand {
         Exit::Well
     }
 
-    fn validate(&self, file: &PathBuf) -> Exit {
+    fn validate(&self, file: &Path) -> Exit {
         let name = file.display().to_string();
         match load_file(&name) {
             Ok(source) => {

@@ -43,7 +43,7 @@ fn quantity_fault<T>(
 /// The place of a part of a string; the whole literal where the part is not known.
 fn inside(reader: &Reader<'_>, text: &Located<String>, part: Option<Span>) -> Span {
     match part {
-        Some(part) => reader.text().inside(&text.span, &text.value, &part),
+        Some(part) => reader.text().inside(&text.span, &part),
         None => text.span.clone(),
     }
 }
@@ -79,7 +79,7 @@ pub fn species(reader: &Reader<'_>, text: &Located<String>) -> Option<Species> {
 
 /// Reports what is wrong with a formula or an equation, at its place in the literal.
 pub fn notation_fault(reader: &Reader<'_>, text: &Located<String>, error: &NotationError) {
-    let span = reader.text().inside(&text.span, &text.value, &error.span);
+    let span = reader.text().inside(&text.span, &error.span);
     reader.fault(
         FaultCode::Notation,
         &span,

@@ -2,6 +2,7 @@
 //! judge a finished working. Both name a place in a file. Rendering is left to the command line.
 
 mod fault;
+mod literal;
 mod nearest;
 mod place;
 mod severity;

@@ -1,5 +1,6 @@
 //! A file's text, with its name and the starts of its lines.
 
+use super::literal::Decoder;
 use super::place::{Place, Span};
 
 /// The text of a case or a source file, so that byte offsets can be told as lines and columns.
@@ -58,13 +59,24 @@ impl Text {
         self.text.get(span.clone()).unwrap_or("")
     }
 
-    /// Where byte `offset` of a decoded string stands, given the span of its literal. Exact where
-    /// the literal holds the string without escapes, otherwise the start of the literal.
-    pub fn inside(&self, literal: &Span, decoded: &str, within: &Span) -> Span {
-        match self.slice(literal).find(decoded) {
-            Some(at) => literal.start + at + within.start..literal.start + at + within.end,
-            None => literal.clone(),
-        }
+    /// Where a part of a decoded string stands in the file, given the span of its literal.
+    pub fn inside(&self, literal: &Span, within: &Span) -> Span {
+        let mut decoder = Decoder::new(self.slice(literal));
+        literal.start + decoder.pass(within.start)..literal.start + decoder.pass(within.end)
+    }
+
+    /// The same for many parts that follow each other, in one pass: a long text can hold
+    /// thousands.
+    pub fn inside_each<'s>(
+        &self,
+        literal: &Span,
+        parts: impl IntoIterator<Item = &'s Span>,
+    ) -> Vec<Span> {
+        let mut decoder = Decoder::new(self.slice(literal));
+        let place = |part: &Span| {
+            literal.start + decoder.pass(part.start)..literal.start + decoder.pass(part.end)
+        };
+        parts.into_iter().map(place).collect()
     }
 
     fn floor_char_boundary(&self, offset: usize) -> usize {
@@ -107,8 +119,10 @@ mod tests {
     #[test]
     fn a_part_of_a_string_is_found_inside_its_literal() {
         let text = Text::new("a", "k = \"60 °X\"");
-        let span = text.inside(&(4..12), "60 °X", &(3..6));
+        let span = text.inside(&(4..12), &(3..6));
         assert_eq!(text.slice(&span), "°X");
-        assert_eq!(text.inside(&(4..12), "escaped", &(0..1)), 4..12);
+        let text = Text::new("a", "k = \"60\\u0020°X\"");
+        let span = text.inside(&(4..17), &(3..6));
+        assert_eq!(text.slice(&span), "°X");
     }
 }

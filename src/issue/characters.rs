@@ -47,7 +47,7 @@ fn in_text(text: &Text) -> Vec<Fault> {
         Some(Fault::new(
             FaultCode::Character,
             text,
-            &text.inside(&string.span, &string.value, &(at..end)),
+            &text.inside(&string.span, &(at..end)),
             name(character),
             "characters that the record's fonts can show",
             "write it in other words or letters; a control character may have come in by copying",

@@ -58,10 +58,10 @@ fn assumption_row(number: usize, assumption: &Assumption, holds: &mut Holds) -> 
 }
 
 fn input_row(input: &Input, holds: &mut Holds) -> InputRow {
-    let what = format!("Input {}: {}", input.id.value, printed(&input.value.value));
+    let what = format!("Input {}: {}", input.id.value, with_reference(input));
     InputRow {
         id: input.id.value.clone(),
-        value: printed(&input.value.value),
+        value: with_reference(input),
         tolerance: input.tolerance.as_ref().map(|t| format!("±{}", printed(t))),
         source: input
             .source
@@ -69,5 +69,14 @@ fn input_row(input: &Input, holds: &mut Holds) -> InputRow {
             .unwrap_or_else(|| "none stated".to_string()),
         confirmed: input.confirmed,
         hold: holds.number(what, input.hold.as_ref()),
+    }
+}
+
+/// The value, a gas volume with what it refers to.
+fn with_reference(input: &Input) -> String {
+    let value = printed(&input.value.value);
+    match &input.reference {
+        Some(reference) => format!("{value} (at {reference})"),
+        None => value,
     }
 }

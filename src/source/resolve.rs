@@ -4,7 +4,7 @@ use std::cell::OnceCell;
 use std::collections::{BTreeMap, BTreeSet};
 
 use crate::case::{Case, DeclaredKind, Reaction};
-use crate::finding::{Fault, FaultCode, Faults, Finding, Located, Span, Text};
+use crate::finding::{Fault, FaultCode, Faults, Finding, Span, Text};
 use crate::notation::{Element, Formula, Participant, Species, Term, balanced_form, imbalance};
 use crate::quantity::{Correlations, Exact, Quantity, to_f64};
 
@@ -135,7 +135,7 @@ impl<'a> Resolver<'a> {
             .iter()
             .flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
         {
-            let place = self.term_span(equation, term);
+            let place = self.text.inside(&equation.span, &term.span);
             let Some(substance) = self.participant(&term.participant, &place) else {
                 complete = false;
                 continue;
@@ -163,30 +163,6 @@ impl<'a> Resolver<'a> {
             temperature: reaction.temperature.clone().map(|t| (t.value, t.span)),
             span: equation.span.clone(),
         })
-    }
-
-    /// The place of a term inside the literal that holds the equation.
-    fn term_span(&self, equation: &Located<crate::notation::Equation>, term: &Term) -> Span {
-        // The literal starts with one quote, or with three.
-        let literal = self.text.slice(&equation.span);
-        let quote = if literal.starts_with("\"\"\"") || literal.starts_with("'''") {
-            3
-        } else {
-            1
-        };
-        // TOML trims a line end right after three quotes.
-        let trimmed = match literal.get(quote..) {
-            Some(text) if quote == 3 && text.starts_with("\r\n") => 2,
-            Some(text) if quote == 3 && text.starts_with('\n') => 1,
-            _ => 0,
-        };
-        let quote = quote + trimmed;
-        let start = equation.span.start + quote + term.span.start;
-        let end = equation.span.start + quote + term.span.end;
-        match end < equation.span.end {
-            true => start..end,
-            false => equation.span.clone(),
-        }
     }
 
     fn participant(&mut self, participant: &Participant, span: &Span) -> Option<usize> {

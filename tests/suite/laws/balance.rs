@@ -30,7 +30,7 @@ proptest! {
 fn charge_has_to_balance_as_well() {
     // The atoms balance: one hydrogen on each side. The charge is +1 and 0.
     let text = case(&["codata-1989"], &reaction("a", "H+(aq) -> 1/2 H2(g)"));
-    let faults = calculation(&text, &Files::default()).unwrap_err();
+    let faults = calculation(&text, &Files::of(&[])).unwrap_err();
     assert_eq!(codes(&faults), [FaultCode::Unbalanced]);
     assert!(
         faults[0].found.starts_with("charge: "),
@@ -42,7 +42,7 @@ fn charge_has_to_balance_as_well() {
 #[test]
 fn every_unbalanced_equation_of_a_case_is_named() {
     let rest = reaction("a", "H2(g) + O2(g) -> H2O(l)") + &reaction("b", "H2(g) -> H2O(g)");
-    let faults = calculation(&case(&["codata-1989"], &rest), &Files::default()).unwrap_err();
+    let faults = calculation(&case(&["codata-1989"], &rest), &Files::of(&[])).unwrap_err();
     assert_eq!(codes(&faults), [FaultCode::Unbalanced; 2]);
     assert_eq!(
         faults[0].advice,

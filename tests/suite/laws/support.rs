@@ -6,10 +6,10 @@ use hesswright::calculation::Calculation;
 use hesswright::engine::Outcome;
 use hesswright::finding::{Fault, FaultCode, Text};
 use hesswright::quantity::{Exact, Real};
-use hesswright::source::SourceFiles;
+use hesswright::source::{Provenance, SourceFiles};
 
 /// Source files by the name that a case consults.
-#[derive(Clone, Debug, Default)]
+#[derive(Clone, Debug)]
 pub struct Files(pub BTreeMap<String, String>, Provenance);
 
 impl Files {

@@ -73,7 +73,7 @@ pub fn reissued(pdf: &[u8]) -> Vec<u8> {
             text(file.as_str().expect("the name of an attachment")),
         )
     });
-    let files = Files(sources.collect());
+    let files = Files::extracted(sources);
     Issued::of(Text::new("case.toml", text("case.toml")), &files)
         .issue
         .pdf
