@@ -107,6 +107,7 @@ pub(super) fn read_prose(
     for (word, part) in PARTS {
         if let Some(markdown) = table.string(word) {
             check_bindings(table.reader(), &markdown, ids, reactions);
+            check_nesting(table.reader(), &markdown);
             prose.push(ProseText { part, markdown });
         }
     }
@@ -142,6 +143,32 @@ fn check_bindings(
             "{reaction.heat} or {input}, on one line",
             "close it; for a brace itself put a backslash before it",
         );
+    }
+}
+
+/// Lists and quotes inside one another beyond this depth cannot be set on a page.
+const DEEPEST: usize = 12;
+
+fn check_nesting(reader: &Reader<'_>, markdown: &Located<String>) {
+    let mut depth = 0_usize;
+    for (event, range) in Parser::new_ext(&markdown.value, MARKDOWN).into_offset_iter() {
+        match event {
+            Event::Start(_) => depth += 1,
+            Event::End(_) => depth = depth.saturating_sub(1),
+            _ => {}
+        }
+        if depth > DEEPEST {
+            value_fault(
+                reader,
+                &reader
+                    .text()
+                    .inside(&markdown.span, &(range.start..range.start)),
+                format!("prose of more than {DEEPEST} levels inside one another"),
+                format!("at most {DEEPEST} levels of lists, quotes and emphasis"),
+                "make the text flatter",
+            );
+            return;
+        }
     }
 }
 

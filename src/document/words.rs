@@ -2,16 +2,16 @@
 
 use std::fmt::Display;
 
-use crate::finding::{FaultCode, Located, Span, nearest};
+use crate::finding::{FaultCode, Located, Span, nearest, shorten};
 use crate::notation::{NotationError, Species};
-use crate::quantity::{Quantity, QuantityError, Unit};
+use crate::quantity::{Quantity, QuantityError, StatedUncertainty, Unit, order_of_magnitude};
 
 use super::reader::Reader;
 
 /// A quantity with its unit, `"-285.830 kJ/mol"`.
 pub fn quantity(reader: &Reader<'_>, text: &Located<String>) -> Option<Located<Quantity>> {
     match Quantity::parse(&text.value) {
-        Ok(quantity) => Some(Located::new(quantity, text.span.clone())),
+        Ok(quantity) => sizeable(reader, text, quantity),
         Err(error) => quantity_fault(reader, text, &error),
     }
 }
@@ -19,9 +19,35 @@ pub fn quantity(reader: &Reader<'_>, text: &Located<String>) -> Option<Located<Q
 /// A number without a unit, `"-285.830 ± 0.040"`.
 pub fn number(reader: &Reader<'_>, text: &Located<String>) -> Option<Located<Quantity>> {
     match Quantity::parse_number(&text.value) {
-        Ok(quantity) => Some(Located::new(quantity, text.span.clone())),
+        Ok(quantity) => sizeable(reader, text, quantity),
         Err(error) => quantity_fault(reader, text, &error),
     }
+}
+
+/// Powers of ten beyond which results and their uncertainties would leave floating point.
+const FARTHEST: i64 = 100;
+
+fn sizeable(
+    reader: &Reader<'_>,
+    text: &Located<String>,
+    quantity: Quantity,
+) -> Option<Located<Quantity>> {
+    let widths = quantity.uncertainty.iter().map(StatedUncertainty::width);
+    let sizes = widths
+        .cloned()
+        .chain([quantity.value_in_si(), quantity.decimal.value()]);
+    let mut orders = sizes.filter_map(|size| order_of_magnitude(&size));
+    if orders.all(|order| order.abs() <= FARTHEST) {
+        return Some(Located::new(quantity, text.span.clone()));
+    }
+    value_fault(
+        reader,
+        &text.span,
+        format!("\"{}\"", shorten(&text.value, 60)),
+        format!("sizes between 1e-{FARTHEST} and 1e{FARTHEST}"),
+        "check the exponent",
+    );
+    None
 }
 
 fn quantity_fault<T>(

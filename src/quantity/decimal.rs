@@ -13,7 +13,7 @@ use super::exact::{Exact, times_power_of_ten};
 /// No table prints a number with more digits; it bounds the work that a text can ask for.
 const MOST_DIGITS: usize = 100;
 /// The largest power of ten accepted, either way.
-const LARGEST_EXPONENT: i64 = 200;
+const LARGEST_EXPONENT: i64 = 400;
 
 /// A decimal number that keeps the digits it was printed with.
 ///
@@ -32,7 +32,7 @@ impl Decimal {
     /// Reads `-285.830`, `1.200e3`, `+0.5`, `1200.`; U+2212 counts as a minus sign.
     ///
     /// # Errors
-    /// Anything else, more than 100 digits, or an exponent beyond ±200.
+    /// Anything else, more than 100 digits, or an exponent beyond ±400.
     pub fn parse(text: &str) -> Result<Self, DecimalError> {
         let (negative, start) = sign(text);
         let exponent_at = text[start..]
@@ -252,7 +252,7 @@ mod tests {
             ),
             (
                 "1e401",
-                "found the exponent “401”; expected an exponent between -200 and 200; \
+                "found the exponent “401”; expected an exponent between -400 and 400; \
                  check the exponent, or choose another unit",
             ),
         ] {

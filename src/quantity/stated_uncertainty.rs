@@ -22,6 +22,14 @@ pub enum StatedUncertainty {
 }
 
 impl StatedUncertainty {
+    /// The half-width or the standard uncertainty as it is stated, in the unit of the value.
+    pub fn width(&self) -> &Exact {
+        match self {
+            Self::Expanded { half_width, .. } | Self::Tolerance { half_width } => half_width,
+            Self::StandardLastDigits { standard, .. } => standard,
+        }
+    }
+
     /// The standard uncertainty, in the unit of the value. `coverage` is that of the source; it
     /// touches only uncertainties printed with ±.
     pub fn standard(&self, coverage: &Coverage) -> f64 {

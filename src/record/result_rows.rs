@@ -92,7 +92,7 @@ pub fn coverage(outcome: &Outcome) -> String {
             two_digits(expanded),
             unit(&outcome.unit)
         ),
-        (None, _) => format!("not stated by any of {of} values used"),
+        (None, _) => format!("uncertainty not stated by any of {of} values used"),
     }
 }
 
