@@ -78,17 +78,7 @@ fn inside(reader: &Reader<'_>, text: &Located<String>, part: Option<Span>) -> Sp
 pub fn unit(reader: &Reader<'_>, text: &Located<String>) -> Option<Unit> {
     match Unit::parse(&text.value) {
         Ok(unit) => Some(unit),
-        Err(error) => {
-            let span = inside(reader, text, error.span());
-            reader.fault(
-                FaultCode::Quantity,
-                &span,
-                error.found(),
-                error.expected(),
-                error.advice(),
-            );
-            None
-        }
+        Err(error) => quantity_fault(reader, text, &QuantityError::from(error)),
     }
 }
 

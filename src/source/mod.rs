@@ -17,6 +17,7 @@ mod index;
 mod index_tests;
 mod matching;
 mod model;
+mod molar_mass;
 mod problem;
 mod read;
 mod read_entry;

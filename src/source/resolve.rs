@@ -5,7 +5,7 @@ use std::collections::{BTreeMap, BTreeSet};
 
 use crate::case::{Case, DeclaredKind, Reaction};
 use crate::finding::{Fault, FaultCode, Faults, Finding, Span, Text};
-use crate::notation::{Element, Formula, Participant, Species, Term, balanced_form, imbalance};
+use crate::notation::{Element, Participant, Species};
 use crate::quantity::{Correlations, Exact, Quantity, to_f64};
 
 use super::builtin::ATOMIC_WEIGHTS;
@@ -13,11 +13,10 @@ use super::choose::{Chosen, choose};
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
-use super::model::{Digits, Entry};
+use super::model::{Digits, Entry, SourceHead, Subject};
 use super::problem::{Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed};
 use super::reference_states::ReferenceStates;
 use super::store::Source;
-use super::unbalanced::unbalanced;
 use crate::quantity::{InputUncertainty, Significance};
 
 /// Resolves every substance of a case. All faults are reported; the problem is there only where
@@ -57,9 +56,9 @@ pub(super) struct Resolver<'a> {
     /// By the label of the case; none where it could not be resolved, so that the fault is
     /// reported once.
     known: BTreeMap<String, Option<usize>>,
-    substances: Vec<Substance>,
-    values: Vec<ValueUsed>,
-    atomic_weights: BTreeMap<String, usize>,
+    pub(super) substances: Vec<Substance>,
+    pub(super) values: Vec<ValueUsed>,
+    pub(super) atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
     /// All entries of the sources, gathered at the first unknown substance.
@@ -178,7 +177,7 @@ impl<'a> Resolver<'a> {
     }
 
     /// What the case asks for; none where the reading of the case has reported it already.
-    fn wanted(&self, participant: &Participant) -> Option<Wanted> {
+    pub(super) fn wanted(&self, participant: &Participant) -> Option<Wanted> {
         match participant {
             Participant::Species(species) => Some(Wanted {
                 label: species.to_string(),
@@ -247,144 +246,18 @@ impl<'a> Resolver<'a> {
             (false, Digits::Significant) => printed.significance(),
         };
         let value = ValueUsed {
-            source: chosen.source,
-            kind: ValueKind::FormationEnthalpy,
-            substance,
-            species: entry.species().cloned(),
-            name: entry.name.clone(),
-            cas: entry.cas.clone(),
             significance,
-            uncertainty: input_uncertainty(&printed, head),
-            printed,
-            locator: entry.locator.clone(),
-            note: entry.note.clone(),
-            standing: entry.standing,
-            used_at: span.clone(),
+            ..value_of(
+                chosen.source,
+                head,
+                ValueKind::FormationEnthalpy,
+                entry,
+                printed,
+                span,
+            )
         };
         self.values.push(value);
         self.values.len() - 1
-    }
-
-    /// The atomic weights that make up a molar mass, with the counts of atoms.
-    fn molar_mass(&mut self, reaction: &Reaction, species: &Species) -> Vec<(usize, Exact)> {
-        let span = &reaction.equation.span;
-        if species.formula.charge() != 0 {
-            self.refuse_mass_of_ion(reaction, species);
-            return Vec::new();
-        }
-        let counts = species.formula.counts().clone();
-        let weights = counts.into_iter().filter_map(|(element, count)| {
-            Some((self.atomic_weight(element.symbol(), span)?, count))
-        });
-        weights.collect()
-    }
-
-    /// A result that cannot be there must not be asked for.
-    fn refuse_mass_of_ion(&mut self, reaction: &Reaction, species: &Species) {
-        let name = format!("{}.heat-per-mass", reaction.id.value);
-        let rounded = self
-            .case
-            .rounding
-            .iter()
-            .find(|rule| rule.result.value == name);
-        let bound = self
-            .case
-            .prose
-            .iter()
-            .find(|p| p.markdown.value.contains(&format!("{{{name}}}")));
-        let span = rounded.map(|rule| rule.result.span.clone());
-        let Some(span) = span.or_else(|| bound.map(|prose| prose.markdown.span.clone())) else {
-            return;
-        };
-        self.faults.push(Fault::new(
-            FaultCode::Value,
-            self.text,
-            &span,
-            format!("`{name}`"),
-            format!(
-                "a result that is there: {species} is an ion, and no mass of it alone is weighed"
-            ),
-            format!(
-                "use {}.heat-per, or name a neutral substance in `per`",
-                reaction.id.value
-            ),
-        ));
-    }
-
-    fn atomic_weight(&mut self, symbol: &str, span: &Span) -> Option<usize> {
-        if let Some(index) = self.atomic_weights.get(symbol) {
-            return Some(*index);
-        }
-        let source = self.sources.iter().position(|s| s.id() == ATOMIC_WEIGHTS)?;
-        let head = &self.sources[source].head;
-        let Some(entry) = self.sources[source].of_symbol(symbol) else {
-            self.faults.push(Fault::new(
-                FaultCode::UnknownSubstance,
-                self.text,
-                span,
-                format!("the element {symbol}"),
-                format!("an element with a standard atomic weight in {ATOMIC_WEIGHTS}"),
-                "leave `per` out: its molar mass is not known here",
-            ));
-            return None;
-        };
-        let printed = entry.atomic_weight.clone()?;
-        self.values.push(ValueUsed {
-            source,
-            kind: ValueKind::AtomicWeight,
-            substance: symbol.to_string(),
-            species: None,
-            name: entry.name.clone(),
-            cas: entry.cas.clone(),
-            significance: printed.significance(),
-            uncertainty: input_uncertainty(&printed, head),
-            printed,
-            locator: entry.locator.clone(),
-            note: entry.note.clone(),
-            standing: entry.standing,
-            used_at: span.clone(),
-        });
-        self.atomic_weights
-            .insert(symbol.to_string(), self.values.len() - 1);
-        Some(self.values.len() - 1)
-    }
-
-    fn check_balance(&mut self, reaction: &Reaction) {
-        let equation = &reaction.equation;
-        let sides = [&equation.value.left, &equation.value.right];
-        let [left, right] = sides.map(|side| {
-            side.iter()
-                .filter_map(|t| self.formula_of(t))
-                .collect::<Vec<_>>()
-        });
-        if left.len() != equation.value.left.len() || right.len() != equation.value.right.len() {
-            return;
-        }
-        let signed = |side: &[(Exact, Formula)], sign: i32| -> Vec<(Exact, Formula)> {
-            let sign = Exact::from_integer(sign.into());
-            side.iter().map(|(c, f)| (c * &sign, f.clone())).collect()
-        };
-        let mut terms = signed(&left, -1);
-        terms.extend(signed(&right, 1));
-        let terms: Vec<(Exact, &Formula)> = terms.iter().map(|(c, f)| (c.clone(), f)).collect();
-        let off = imbalance(&terms);
-        if off.is_empty() {
-            return;
-        }
-        let formulas =
-            |side: &'_ [(Exact, Formula)]| side.iter().map(|(_, f)| f.clone()).collect::<Vec<_>>();
-        let (left, right) = (formulas(&left), formulas(&right));
-        let form = balanced_form(
-            &left.iter().collect::<Vec<_>>(),
-            &right.iter().collect::<Vec<_>>(),
-        );
-        self.faults
-            .push(unbalanced(self.text, reaction, &off, form.as_deref()));
-    }
-
-    fn formula_of(&self, term: &Term) -> Option<(Exact, Formula)> {
-        let formula = self.wanted(&term.participant)?.species.formula;
-        Some((term.coefficient.clone(), formula))
     }
 
     /// A choice for a substance that no reaction names is a slip that should not pass.
@@ -461,7 +334,36 @@ impl<'a> Resolver<'a> {
     }
 }
 
-fn input_uncertainty(printed: &Quantity, head: &super::model::SourceHead) -> InputUncertainty {
+/// An entry's value with its origin; its digits are those that it prints.
+pub(super) fn value_of(
+    source: usize,
+    head: &SourceHead,
+    kind: ValueKind,
+    entry: &Entry,
+    printed: Quantity,
+    span: &Span,
+) -> ValueUsed {
+    ValueUsed {
+        source,
+        kind,
+        substance: match &entry.subject {
+            Subject::Species(species) => species.to_string(),
+            Subject::Symbol(symbol) => symbol.clone(),
+        },
+        species: entry.species().cloned(),
+        name: entry.name.clone(),
+        cas: entry.cas.clone(),
+        significance: printed.significance(),
+        uncertainty: input_uncertainty(&printed, head),
+        printed,
+        locator: entry.locator.clone(),
+        note: entry.note.clone(),
+        standing: entry.standing,
+        used_at: span.clone(),
+    }
+}
+
+fn input_uncertainty(printed: &Quantity, head: &SourceHead) -> InputUncertainty {
     match &printed.uncertainty {
         _ if printed.exact => InputUncertainty::Exact,
         None => InputUncertainty::NotStated,

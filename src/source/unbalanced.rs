@@ -1,21 +1,59 @@
-//! The fault of an equation that does not balance.
+//! Whether an equation balances, and the fault of one that does not.
 
 use num_bigint::BigInt;
 use num_traits::Zero;
 
 use crate::case::Reaction;
 use crate::finding::{Fault, FaultCode, Text};
-use crate::notation::{Conserved, Surplus, Term};
-use crate::quantity::exact_text;
+use crate::notation::{Conserved, Formula, Surplus, Term, balanced_form, imbalance};
+use crate::quantity::{Exact, exact_text};
+
+use super::resolve::Resolver;
+
+impl Resolver<'_> {
+    /// Reports an equation that does not balance, where all its formulas are known.
+    pub(super) fn check_balance(&mut self, reaction: &Reaction) {
+        let equation = &reaction.equation;
+        let sides = [&equation.value.left, &equation.value.right];
+        let [left, right] = sides.map(|side| {
+            side.iter()
+                .filter_map(|t| self.formula_of(t))
+                .collect::<Vec<_>>()
+        });
+        if left.len() != equation.value.left.len() || right.len() != equation.value.right.len() {
+            return;
+        }
+        let signed = |side: &[(Exact, Formula)], sign: i32| -> Vec<(Exact, Formula)> {
+            let sign = Exact::from_integer(sign.into());
+            side.iter().map(|(c, f)| (c * &sign, f.clone())).collect()
+        };
+        let mut terms = signed(&left, -1);
+        terms.extend(signed(&right, 1));
+        let terms: Vec<(Exact, &Formula)> = terms.iter().map(|(c, f)| (c.clone(), f)).collect();
+        let off = imbalance(&terms);
+        if off.is_empty() {
+            return;
+        }
+        let formulas =
+            |side: &'_ [(Exact, Formula)]| side.iter().map(|(_, f)| f.clone()).collect::<Vec<_>>();
+        let (left, right) = (formulas(&left), formulas(&right));
+        let form = balanced_form(
+            &left.iter().collect::<Vec<_>>(),
+            &right.iter().collect::<Vec<_>>(),
+        );
+        self.faults
+            .push(unbalanced(self.text, reaction, &off, form.as_deref()));
+    }
+
+    fn formula_of(&self, term: &Term) -> Option<(Exact, Formula)> {
+        let formula = self.wanted(&term.participant)?.species.formula;
+        Some((term.coefficient.clone(), formula))
+    }
+}
 
 /// Says which element or the charge is off and by how much, and the balanced form where there is
 /// exactly one.
-pub(super) fn unbalanced(
-    text: &Text,
-    reaction: &Reaction,
-    off: &[Surplus],
-    form: Option<&[BigInt]>,
-) -> Fault {
+fn unbalanced(text: &Text, reaction: &Reaction, off: &[Surplus], form: Option<&[BigInt]>) -> Fault {
     let found: Vec<String> = off.iter().map(describe).collect();
     let advice = match form {
         Some(coefficients) => format!("balanced it reads: {}", balanced(reaction, coefficients)),
