@@ -131,7 +131,8 @@ impl SourceCommand {
                     print(&format!("{}\n", head_json(&source)));
                 }
                 let count = source.all().len();
-                tell(&format!("{name}: {count} entries, no fault\n"));
+                let entries = if count == 1 { "entry" } else { "entries" };
+                tell(&format!("{name}: {count} {entries}, no fault\n"));
                 Exit::Well
             }
             Err(found) => faults::report(file, &found, self.json),

@@ -1,6 +1,6 @@
 //! Numbers of a working in full, before anything is rounded.
 
-use super::exact::{Exact, round_to_place, terminating_decimal};
+use super::exact::{Exact, power_of_ten, round_to_place, terminating_decimal};
 use super::significance::Significance;
 
 /// Digits shown beyond the last significant place of a number whose decimals do not end.
@@ -17,7 +17,9 @@ pub fn full_text(value: &Exact, significance: Significance) -> String {
         Some(decimal) => padded(decimal, place),
         None => {
             let digits = place.min(-1) - GUARD_DIGITS;
-            format!("{}…", round_to_place(value, digits).text)
+            // Cut, not rounded: the ellipsis says that more digits follow these.
+            let cut = (value * power_of_ten(-digits)).trunc() * power_of_ten(digits);
+            format!("{}…", round_to_place(&cut, digits).text)
         }
     }
 }
@@ -58,5 +60,7 @@ mod tests {
         let third = Exact::new(1.into(), 3.into());
         assert_eq!(full_text(&third, Significance::Place(-2)), "0.33333…");
         assert_eq!(full_text(&third, Significance::Exact), "0.3333…");
+        let two_thirds = Exact::new((-2).into(), 3.into());
+        assert_eq!(full_text(&two_thirds, Significance::Exact), "-0.6666…");
     }
 }

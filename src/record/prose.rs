@@ -51,7 +51,12 @@ fn bound(calculation: &Calculation, name: &str) -> String {
         return format!("{} ({})", in_words(outcome), outcome.direction().word());
     }
     match calculation.case.inputs.get(name) {
-        Some(input) => printed(&input.value.value),
+        Some(input) => {
+            let tolerance = input.tolerance.as_ref();
+            let tolerance =
+                tolerance.map_or(String::new(), |t| format!(" (tolerance ±{})", printed(t)));
+            format!("{}{tolerance}", printed(&input.value.value))
+        }
         None => format!("({name}: not worked)"),
     }
 }

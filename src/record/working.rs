@@ -2,6 +2,7 @@
 
 use crate::calculation::Calculation;
 use crate::engine::{Hess, MolarMass, Outcome, ReactionWorking};
+use crate::quantity::{exact_text, terminating_decimal};
 use crate::source::{Problem, ProblemReaction};
 
 use super::formation_table::{cancelled, formation_table};
@@ -81,6 +82,7 @@ fn heat_steps(
         ),
     });
     steps.push(Step::Table(participants(problem, hess, &unit)));
+    steps.extend(conversions(problem, hess, outcome).map(|text| Step::Text { text }));
     steps.push(Step::Text {
         text: substitution(hess, &unit),
     });
@@ -151,6 +153,29 @@ fn participants(problem: &Problem, hess: &Hess, unit: &str) -> Table {
     }
 }
 
+/// The factors between the units that sources print and that of the result.
+fn conversions(problem: &Problem, hess: &Hess, outcome: &Outcome) -> Option<Rich> {
+    let mut said: Vec<String> = Vec::new();
+    for term in &hess.terms {
+        let from = &problem.values[term.value].printed.unit;
+        if from.symbol() == outcome.unit.symbol() {
+            continue;
+        }
+        let factor = from.factor() / outcome.unit.factor();
+        let line = match terminating_decimal(&factor) {
+            Some(factor) => format!("1 {} = {factor} {}", unit(from), unit(&outcome.unit)),
+            None => {
+                let back = exact_text(&factor.recip());
+                format!("1 {} = {back} {}", unit(&outcome.unit), unit(from))
+            }
+        };
+        if !said.contains(&line) {
+            said.push(line);
+        }
+    }
+    (!said.is_empty()).then(|| Rich::plain(format!("By definition, {}.", said.join("; "))))
+}
+
 /// Δ_rH° = 2·(−285.830) + 31.3 − … = −552.56 kJ/mol
 fn substitution(hess: &Hess, unit: &str) -> Rich {
     let terms: Vec<String> = hess
@@ -167,7 +192,7 @@ fn substitution(hess: &Hess, unit: &str) -> Rich {
     enthalpy("r").and(format!(
         " = {} = {} {unit}, exactly: nothing is rounded here.",
         terms.join(" + "),
-        minus(&crate::quantity::exact_text(&hess.sum)),
+        minus(&exact_text(&hess.sum)),
     ))
 }
 

@@ -27,6 +27,7 @@ pub(super) struct Chosen {
     pub(super) others: Vec<Held>,
     /// What the case said where it chose.
     pub(super) because: Option<String>,
+    pub(super) chosen_at: Option<Span>,
 }
 
 /// Compounds of two carbon atoms or more, with other elements, commonly have isomers.
@@ -56,6 +57,7 @@ pub(super) fn choose(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) 
         entry: first.entry,
         value: first.value,
         others: found,
+        chosen_at: choice.as_ref().map(|choice| choice.substance.span.clone()),
         because: choice.map(|choice| choice.because),
     })
 }
@@ -232,8 +234,15 @@ fn note_identity(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span, entr
     }
     if !wanted.is_declared() && can_have_isomers(wanted) && entry.name.is_some() {
         let name = entry.name.as_deref().unwrap_or_default();
+        let carbon_and_hydrogen = ["C", "H"];
+        let mut elements = wanted.species.formula.counts().keys();
+        // With a third element the isomers are common substances of other kinds.
+        let severity = match elements.all(|e| carbon_and_hydrogen.contains(&e.symbol())) {
+            true => Severity::Note,
+            false => Severity::Caution,
+        };
         resolver.findings.push(Finding {
-            severity: Severity::Note,
+            severity,
             code: FindingCode::IdentityByFormula,
             message: format!(
                 "`{}` is taken as {name}, the one compound of this formula that the source lists. \

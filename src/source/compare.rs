@@ -113,7 +113,9 @@ fn judge(
         severity,
         code,
         message,
-        at: resolver.text.place(span.start),
+        at: resolver
+            .text
+            .place(chosen.chosen_at.as_ref().unwrap_or(span).start),
     };
     let (beyond, remark) = match comparison.judgement {
         Judgement::Within { .. } | Judgement::NotJudged { equal: true } => return None,

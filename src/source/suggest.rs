@@ -5,7 +5,7 @@ use std::collections::BTreeSet;
 use crate::finding::{Fault, FaultCode, Span, nearest};
 use crate::notation::{PhaseLabel, Species};
 
-use super::builtin::{BUILT_IN, built_in};
+use super::builtin::{ATOMIC_WEIGHTS, BUILT_IN, built_in};
 use super::matching::{Match, Wanted, pick};
 use super::model::Entry;
 use super::resolve::Resolver;
@@ -38,7 +38,12 @@ fn describe(wanted: &Wanted) -> String {
 }
 
 fn source_ids<'r>(resolver: &'r Resolver<'_>) -> Vec<&'r str> {
-    resolver.sources.iter().map(|source| source.id()).collect()
+    // Atomic weights are no substances.
+    let listing = resolver
+        .sources
+        .iter()
+        .filter(|source| source.id() != ATOMIC_WEIGHTS);
+    listing.map(|source| source.id()).collect()
 }
 
 fn advice(resolver: &Resolver<'_>, wanted: &Wanted) -> String {
