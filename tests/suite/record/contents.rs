@@ -1,6 +1,11 @@
 //! What a calculation record has to say, looked for in the text of its pages (R1, R4, R6, R9 to
 //! R12 of the ledger as far as they concern pages).
 
+use std::path::Path;
+
+use hesswright::finding::Text;
+use hesswright::folder::CaseFolder;
+
 use super::issued::{Issued, shipped};
 use super::words::{PageText, body, pages, plain};
 
@@ -160,4 +165,24 @@ fn cautions_references_program_and_attachments_are_there() {
         );
         says(&body, head.equipment.iter().chain(&head.related).cloned());
     }
+}
+
+#[test]
+fn a_part_without_rows_keeps_its_heading() {
+    let text = Text::new(
+        "case.toml",
+        "[record]\nnumber = \"T-2\"\nrevision = \"A\"\ntitle = \"Nothing but a reaction\"\n\
+         date = 2026-01-02\npreparer = \"N. N.\"\nstatus = \"for-check\"\n\
+         [sources]\nconsult = [\"codata-1989\"]\n\
+         [reactions.water]\nequation = \"2 H2(g) + O2(g) -> 2 H2O(l)\"\n",
+    );
+    let folder = CaseFolder::of(Path::new("case.toml"), &text);
+    let body = body(&Issued::of(text, &folder).pdf());
+    let headings = [
+        "Inputs",
+        "Assumptions",
+        "Holds",
+        "Comparison with other sources",
+    ];
+    says(&body, headings.map(str::to_string));
 }
