@@ -198,7 +198,7 @@ fn limited(
         return significance;
     }
     let house = Significance::Place(house_place(unit));
-    Significance::sum([significance, house].into_iter())
+    Significance::sum([significance, house])
 }
 
 /// The place of 0.1 kJ/mol (0.1 kJ per 0.018 kg would be no rule: per mass it is 1 kJ/kg).

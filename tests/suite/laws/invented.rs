@@ -167,5 +167,5 @@ pub fn expected_uncertainty(compounds: &[Compound], numbers: &[Exact]) -> Option
         }
     }
     let sum: Exact = squares.values().cloned().sum();
-    (!squares.is_empty()).then(|| hesswright::quantity::to_f64(&sum).sqrt())
+    (!squares.is_empty()).then(|| libm::sqrt(hesswright::quantity::to_f64(&sum)))
 }
