@@ -2,7 +2,7 @@
 
 use chrono::NaiveDate;
 
-use crate::document::{Reader, Table, filled, one_of, value_fault};
+use crate::document::{Reader, Table, filled, is_file_word, one_of, value_fault};
 use crate::finding::Located;
 
 use super::model::{RecordHead, Revision, Role, Status};
@@ -87,9 +87,7 @@ fn required_date(table: &Table<'_, '_>, key: &str) -> Option<NaiveDate> {
 
 /// Numbers and revisions become part of a file name.
 fn file_word(reader: &Reader<'_>, text: Located<String>) -> Option<Located<String>> {
-    let fits = |c: char| c.is_ascii_alphanumeric() || "._-".contains(c);
-    let plain = text.value.starts_with(|c: char| c.is_ascii_alphanumeric());
-    if plain && text.value.chars().all(fits) && text.value.len() <= 64 {
+    if is_file_word(&text.value) {
         return Some(text);
     }
     value_fault(

@@ -7,6 +7,7 @@ use super::Output;
 use super::draft_text::draft_text;
 use super::exit::Exit;
 use super::terminal::{print, tell};
+use crate::document::is_file_word;
 use crate::output::{why, write_new};
 
 #[derive(Args)]
@@ -19,9 +20,7 @@ pub struct Draft {
 
 impl Draft {
     pub fn run(&self) -> Exit {
-        let fits = |c: char| c.is_ascii_alphanumeric() || "._-".contains(c);
-        let plain = self.number.starts_with(|c: char| c.is_ascii_alphanumeric());
-        if !plain || !self.number.chars().all(fits) || self.number.len() > 64 {
+        if !is_file_word(&self.number) {
             return self.refused(format!(
                 "\"{}\" is no number for a record: use letters, digits, points, underscores and \
                  hyphens, begun by a letter or digit",

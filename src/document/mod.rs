@@ -18,5 +18,6 @@ pub use reader::{Document, Reader, with_document};
 pub use table::Table;
 pub use value::Value;
 pub use words::{
-    filled, is_id, notation_fault, number, one_of, quantity, species, unit, value_fault,
+    filled, is_file_word, is_id, notation_fault, number, one_of, quantity, species, unit,
+    value_fault,
 };

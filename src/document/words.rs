@@ -157,3 +157,11 @@ pub fn is_id(text: &str) -> bool {
         && text != "exact"
         && text.len() <= 64
 }
+
+/// What can stand in the name of a record's file: letters, digits, points, underscores and
+/// hyphens, begun by a letter or digit, at most 64.
+pub fn is_file_word(text: &str) -> bool {
+    let fits = |c: char| c.is_ascii_alphanumeric() || "._-".contains(c);
+    let begun = text.starts_with(|c: char| c.is_ascii_alphanumeric());
+    begun && text.chars().all(fits) && text.len() <= 64
+}

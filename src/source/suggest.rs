@@ -226,10 +226,12 @@ pub(super) fn no_enthalpy(
     source: usize,
     entry: &Entry,
 ) -> Fault {
-    let why = entry
-        .note
-        .as_ref()
-        .map_or_else(String::new, |note| format!("{note}. "));
+    let function = !entry.heat_capacity.is_empty();
+    let why = match &entry.note {
+        Some(note) => format!("{note}. "),
+        None if function => "its function of temperature is not worked by this version. ".into(),
+        None => String::new(),
+    };
     Fault::new(
         FaultCode::Source,
         resolver.text,
