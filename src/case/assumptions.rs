@@ -2,24 +2,31 @@
 
 use crate::document::{Table, filled, value_fault};
 
+use super::allowances::read_allowances;
+use super::ids::Ids;
 use super::model::{Assumption, Hold};
 
-pub(super) fn read_assumptions(root: &Table<'_, '_>) -> Vec<Assumption> {
+pub(super) fn read_assumptions(root: &Table<'_, '_>, ids: &Ids) -> Vec<Assumption> {
     let tables = root.tables("assumptions");
-    tables.iter().filter_map(read_assumption).collect()
+    tables
+        .iter()
+        .filter_map(|table| read_assumption(table, ids))
+        .collect()
 }
 
-fn read_assumption(table: &Table<'_, '_>) -> Option<Assumption> {
-    table.only(&["text", "basis", "confirmed", "hold"]);
+fn read_assumption(table: &Table<'_, '_>, ids: &Ids) -> Option<Assumption> {
+    table.only(&["text", "basis", "confirmed", "hold", "allows"]);
     let text = table.required_string("text", "say what is assumed");
     let text = text.and_then(|text| filled(table.reader(), text));
     let basis = table.string("basis").map(|t| t.value);
     let (confirmed, hold) = read_standing(table);
+    let allows = read_allowances(table, ids);
     Some(Assumption {
         text: text?,
         basis,
         confirmed,
         hold,
+        allows,
     })
 }
 

@@ -3,6 +3,7 @@
 //! Reading is complete in one go: all faults of the file are reported together. What the names in
 //! the case mean in the sources is the business of [`crate::source`], not of this module.
 
+mod allowances;
 mod assumptions;
 mod ids;
 mod inputs;
@@ -15,6 +16,7 @@ mod record;
 mod sources;
 mod substances;
 
+pub use allowances::{Allowance, AllowedKind};
 pub use ids::IdKind;
 pub use model::{
     Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText,

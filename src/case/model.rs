@@ -7,6 +7,8 @@ use crate::finding::Located;
 use crate::notation::{Equation, Formula, Phase};
 use crate::quantity::{Quantity, Unit};
 
+use super::allowances::Allowance;
+
 /// Everything that a case states.
 #[derive(Clone, Debug)]
 pub struct Case {
@@ -104,6 +106,7 @@ pub struct Assumption {
     pub basis: Option<String>,
     pub confirmed: bool,
     pub hold: Option<Hold>,
+    pub allows: Vec<Allowance>,
 }
 
 /// Something not yet confirmed on which the record rests.

@@ -90,13 +90,17 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
         );
     }
     let mut choices = read_choices(sources.as_ref());
+    let mut assumptions = read_assumptions(root, &ids);
     if reactions.len() < stated {
         // They may be for a substance of a reaction that could not be read.
         choices.clear();
+        for assumption in &mut assumptions {
+            assumption.allows.clear();
+        }
     }
     Some(Case {
         prose: read_prose(root.table("prose").as_ref(), &ids, &reactions),
-        assumptions: read_assumptions(root),
+        assumptions,
         consult: read_consult(sources.as_ref()),
         choices,
         rounding: read_rounding(root.table("rounding").as_ref(), &ids, &reactions),

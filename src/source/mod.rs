@@ -4,6 +4,7 @@
 //! `source/data/`; a user's own come from files in the same format. Reading a case is not done
 //! here, working it neither.
 
+mod allowances;
 mod builtin;
 mod choose;
 mod compare;

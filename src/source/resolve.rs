@@ -40,6 +40,7 @@ pub fn resolve(
         .map(|reaction| resolver.reaction(reaction))
         .collect();
     resolver.check_choices();
+    resolver.check_allowances();
     resolver.check_correlations();
     let faults = std::mem::take(&mut resolver.faults);
     let problem = faults.is_empty().then(|| resolver.problem(reactions));
@@ -81,6 +82,16 @@ impl<'a> Resolver<'a> {
             faults: Faults::default(),
             listed: OnceCell::new(),
         }
+    }
+
+    /// Whether the case names a substance in what it works.
+    pub(super) fn is_participant(&self, label: &str) -> bool {
+        self.known.contains_key(label)
+    }
+
+    /// The substances that the case names in what it works, each as it writes it.
+    pub(super) fn participants(&self) -> impl Iterator<Item = &str> {
+        self.known.keys().map(String::as_str)
     }
 
     /// All entries of the sources.
@@ -267,8 +278,8 @@ impl<'a> Resolver<'a> {
                 .map_or(choice.substance.value.clone(), |species| {
                     species.to_string()
                 });
-            if !self.known.contains_key(&label) {
-                let known: Vec<&str> = self.known.keys().map(String::as_str).collect();
+            if !self.is_participant(&label) {
+                let known: Vec<&str> = self.participants().collect();
                 self.faults.push(Fault::new(
                     FaultCode::UnknownId,
                     self.text,
