@@ -16,6 +16,13 @@ pub enum IdKind {
 }
 
 impl IdKind {
+    /// The kinds of which a case has results.
+    pub(super) const WITH_RESULTS: [IdKind; 1] = [IdKind::Reaction];
+
+    pub(super) fn has_results(self) -> bool {
+        IdKind::WITH_RESULTS.contains(&self)
+    }
+
     /// The word with its article.
     fn word(self) -> &'static str {
         match self {

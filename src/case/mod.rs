@@ -5,6 +5,7 @@
 
 mod allowances;
 mod assumptions;
+mod given;
 mod ids;
 mod inputs;
 mod model;
@@ -13,10 +14,12 @@ mod prose;
 mod reactions;
 mod read;
 mod record;
+mod results;
 mod sources;
 mod substances;
 
 pub use allowances::{Allowance, AllowedKind};
+pub use given::Given;
 pub use ids::IdKind;
 pub use model::{
     Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText,

@@ -3,6 +3,7 @@
 use chrono::NaiveDate;
 use indexmap::IndexMap;
 
+use super::given::Given;
 use crate::finding::Located;
 use crate::notation::{Equation, Formula, Phase};
 use crate::quantity::{Quantity, Unit};
@@ -161,7 +162,7 @@ pub struct Input {
 pub struct Reaction {
     pub id: Located<String>,
     pub equation: Located<Equation>,
-    pub temperature: Option<Located<Quantity>>,
+    pub temperature: Option<Given>,
     pub per: Option<Located<String>>,
     /// Whether the case says `per`, be it rightly or not.
     pub says_per: bool,

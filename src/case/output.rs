@@ -1,6 +1,5 @@
 //! Reading `[units]` and `[rounding]`: how results are given.
 
-use indexmap::IndexMap;
 use num_traits::One;
 
 use crate::document::{Reader, Table, quantity, unit, value_fault};
@@ -8,9 +7,8 @@ use crate::finding::{FaultCode, Located};
 use crate::quantity::{Exact, Unit, order_of_magnitude, power_of_ten};
 
 use super::ids::Ids;
-use super::model::{Reaction, ResultUnits, RoundingRule};
-use super::prose::check_result;
-use super::reactions::{RESULT_QUANTITIES, result_dimension};
+use super::model::{ResultUnits, RoundingRule};
+use super::results::Results;
 
 pub(super) fn read_units(table: Option<&Table<'_, '_>>) -> ResultUnits {
     if let Some(table) = table {
@@ -68,7 +66,7 @@ fn simple(reader: &Reader<'_>, text: &Located<String>, given: Unit) -> Option<Un
 pub(super) fn read_rounding(
     table: Option<&Table<'_, '_>>,
     ids: &Ids,
-    reactions: &IndexMap<String, Reaction>,
+    results: &Results,
 ) -> Vec<RoundingRule> {
     let Some(table) = table else {
         return Vec::new();
@@ -80,9 +78,9 @@ pub(super) fn read_rounding(
             continue;
         }
         let reader = table.reader();
-        check_result(reader, &result, ids, reactions, NAME_ADVICE);
+        results.check(reader, &result, ids, NAME_ADVICE);
         let text = value.string();
-        rules.extend(text.and_then(|text| read_rule(reader, result, &text)));
+        rules.extend(text.and_then(|text| read_rule(reader, results, result, &text)));
     }
     rules
 }
@@ -102,6 +100,7 @@ fn dotted(table: &Table<'_, '_>, result: &Located<String>) {
 
 fn read_rule(
     reader: &Reader<'_>,
+    results: &Results,
     result: Located<String>,
     text: &Located<String>,
 ) -> Option<RoundingRule> {
@@ -116,12 +115,8 @@ fn read_rule(
         );
         return None;
     };
-    let quantity = result
-        .value
-        .split_once('.')
-        .map_or("", |(_, quantity)| quantity);
-    let dimension = result_dimension(quantity);
-    if RESULT_QUANTITIES.contains(&quantity) && place.unit.dimension() != dimension {
+    let dimension = results.dimension(&result.value);
+    if let Some(dimension) = dimension.filter(|d| place.unit.dimension() != *d) {
         reader.fault(
             FaultCode::Quantity,
             &text.span,

@@ -1,14 +1,13 @@
 //! Reading `[prose]`, and the results that it is bound to.
 
-use indexmap::IndexMap;
 use pulldown_cmark::{Event, Options, Parser, Tag, TagEnd};
 
-use crate::document::{Reader, Table, is_id, value_fault};
-use crate::finding::{FaultCode, Located, Span, nearest};
+use crate::document::{Reader, Table, value_fault};
+use crate::finding::{Located, Span};
 
 use super::ids::{IdKind, Ids};
-use super::model::{ProsePart, ProseText, Reaction};
-use super::reactions::RESULT_QUANTITIES;
+use super::model::{ProsePart, ProseText};
+use super::results::Results;
 
 const PARTS: [(&str, ProsePart); 5] = [
     ("purpose", ProsePart::Purpose),
@@ -97,7 +96,7 @@ pub fn is_escaped(markdown: &str, span: &Span) -> bool {
 pub(super) fn read_prose(
     table: Option<&Table<'_, '_>>,
     ids: &Ids,
-    reactions: &IndexMap<String, Reaction>,
+    results: &Results,
 ) -> Vec<ProseText> {
     let Some(table) = table else {
         return Vec::new();
@@ -106,7 +105,7 @@ pub(super) fn read_prose(
     let mut prose = Vec::new();
     for (word, part) in PARTS {
         if let Some(markdown) = table.string(word) {
-            check_bindings(table.reader(), &markdown, ids, reactions);
+            check_bindings(table.reader(), &markdown, ids, results);
             check_nesting(table.reader(), &markdown);
             prose.push(ProseText { part, markdown });
         }
@@ -114,25 +113,14 @@ pub(super) fn read_prose(
     prose
 }
 
-fn check_bindings(
-    reader: &Reader<'_>,
-    markdown: &Located<String>,
-    ids: &Ids,
-    reactions: &IndexMap<String, Reaction>,
-) {
+fn check_bindings(reader: &Reader<'_>, markdown: &Located<String>, ids: &Ids, results: &Results) {
     let braces = Braces::of(&markdown.value);
     let text = reader.text();
     let places = text.inside_each(&markdown.span, braces.bindings.iter().map(|b| &b.span));
     for (binding, place) in braces.bindings.into_iter().zip(places) {
         let name = Located::new(binding.name, place);
         if ids.kind(&name.value) != Some(IdKind::Input) {
-            check_result(
-                reader,
-                &name,
-                ids,
-                reactions,
-                "write {reaction.heat} or {input}",
-            );
+            results.check(reader, &name, ids, "write {reaction.heat} or {input}");
         }
     }
     for place in text.inside_each(&markdown.span, &braces.open) {
@@ -170,57 +158,6 @@ fn check_nesting(reader: &Reader<'_>, markdown: &Located<String>) {
             return;
         }
     }
-}
-
-/// Reports a name that is not the name of a result of this case.
-pub(super) fn check_result(
-    reader: &Reader<'_>,
-    name: &Located<String>,
-    ids: &Ids,
-    reactions: &IndexMap<String, Reaction>,
-    advice: &str,
-) {
-    let Located { value: name, span } = name;
-    let (id, quantity) = name.split_once('.').unwrap_or((name.as_str(), ""));
-    if !is_id(id) || quantity.is_empty() {
-        reader.fault(
-            FaultCode::Value,
-            span,
-            format!("`{name}`"),
-            "the name of a result: id.quantity",
-            advice,
-        );
-    } else if ids.kind(id) != Some(IdKind::Reaction) {
-        ids.unknown(reader, id, span, &[IdKind::Reaction]);
-    } else if let Some(reaction) = reactions.get(id) {
-        check_quantity(reader, reaction, quantity, span);
-    }
-}
-
-fn check_quantity(reader: &Reader<'_>, reaction: &Reaction, quantity: &str, span: &Span) {
-    if RESULT_QUANTITIES.contains(&quantity) {
-        if quantity != "heat" && !reaction.says_per {
-            reader.fault(
-                FaultCode::Value,
-                span,
-                format!("`{}.{quantity}`", reaction.id.value),
-                "a reaction that names a substance in `per`",
-                format!("add per = \"…\" to [reactions.{}]", reaction.id.value),
-            );
-        }
-        return;
-    }
-    let advice = match nearest(quantity, RESULT_QUANTITIES, 1).first() {
-        Some(near) => format!("did you mean `{}.{near}`?", reaction.id.value),
-        None => "use one of these".to_string(),
-    };
-    reader.fault(
-        FaultCode::UnknownId,
-        span,
-        format!("`{quantity}` of a reaction"),
-        format!("one of: {}", RESULT_QUANTITIES.join(", ")),
-        advice,
-    );
 }
 
 #[cfg(test)]

@@ -1,25 +1,33 @@
 //! Reading `[reactions]`.
 
 use indexmap::IndexMap;
-use num_traits::Signed;
 
-use crate::document::{Table, is_id, notation_fault, quantity, value_fault};
+use crate::document::{Table, is_id, notation_fault, value_fault};
 use crate::finding::{FaultCode, Located};
 use crate::notation::{Equation, Participant};
-use crate::quantity::{Dimension, Quantity, UnitKind};
+use crate::quantity::Dimension;
 
+use super::given::{Given, read_temperature};
 use super::ids::{IdKind, Ids};
 use super::model::{DeclaredKind, DeclaredSubstance, Input, Reaction};
+use super::results::ResultQuantity;
 
 /// The results that a reaction can have.
 pub const RESULT_QUANTITIES: [&str; 3] = ["heat", "heat-per", "heat-per-mass"];
 
-/// What a result of a reaction measures.
-pub(super) fn result_dimension(quantity: &str) -> Dimension {
-    match quantity {
-        "heat-per-mass" => Dimension::ENERGY.over(Dimension::MASS),
-        _ => Dimension::ENERGY.over(Dimension::AMOUNT),
-    }
+/// What they measure, and what they need.
+pub(super) fn result_quantities() -> [ResultQuantity; 3] {
+    let quantity = |name, per, needs| ResultQuantity {
+        name,
+        dimension: Dimension::ENERGY.over(per),
+        needs,
+    };
+    let [heat, per, mass] = RESULT_QUANTITIES;
+    [
+        quantity(heat, Dimension::AMOUNT, None),
+        quantity(per, Dimension::AMOUNT, Some("per")),
+        quantity(mass, Dimension::MASS, Some("per")),
+    ]
 }
 
 pub(super) fn read_reactions(
@@ -78,45 +86,9 @@ impl Context<'_, '_, '_> {
     }
 
     /// A temperature, or the id of an input that is one.
-    fn read_temperature(&self) -> Option<Located<Quantity>> {
-        let reader = self.table.reader();
+    fn read_temperature(&self) -> Option<Given> {
         let text = self.table.string("temperature")?;
-        let found = if is_id(&text.value) {
-            let Some(input) = self.inputs.get(&text.value) else {
-                self.ids
-                    .unknown(reader, &text.value, &text.span, &[IdKind::Input]);
-                return None;
-            };
-            Located::new(input.value.value.clone(), text.span.clone())
-        } else {
-            quantity(reader, &text)?
-        };
-        if found.value.unit.dimension() != Dimension::TEMPERATURE
-            || found.value.unit.kind() == UnitKind::Difference
-        {
-            let advice = "write it as \"25 °C\" or \"298.15 K\"";
-            reader.fault(
-                FaultCode::Quantity,
-                &text.span,
-                quoted(&text),
-                "a temperature",
-                advice,
-            );
-            return None;
-        }
-        if !found.value.value_in_si().is_positive() {
-            let advice = "check the number and its unit";
-            let expected = "a temperature above absolute zero";
-            reader.fault(
-                FaultCode::Quantity,
-                &text.span,
-                quoted(&text),
-                expected,
-                advice,
-            );
-            return None;
-        }
-        Some(found)
+        read_temperature(self.table.reader(), self.ids, self.inputs, &text)
     }
 
     fn check_participants(&self, equation: &Located<Equation>, text: &Located<String>) {
@@ -162,10 +134,6 @@ impl Context<'_, '_, '_> {
         );
         None
     }
-}
-
-fn quoted(text: &Located<String>) -> String {
-    format!("\"{}\"", text.value)
 }
 
 /// A participant in the one way that equations print it.

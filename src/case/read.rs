@@ -13,6 +13,7 @@ use super::output::{read_rounding, read_units};
 use super::prose::read_prose;
 use super::reactions::read_reactions;
 use super::record::read_record;
+use super::results::Results;
 use super::sources::{read_choices, read_consult};
 use super::substances::read_substances;
 
@@ -81,6 +82,8 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
             IndexMap::new()
         }
     };
+    let mut results = Results::default();
+    results.add_reactions(&reactions);
     let units = read_units(root.table("units").as_ref());
     let sources = root.table("sources");
     if sources.is_none() {
@@ -99,11 +102,11 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
         }
     }
     Some(Case {
-        prose: read_prose(root.table("prose").as_ref(), &ids, &reactions),
+        prose: read_prose(root.table("prose").as_ref(), &ids, &results),
         assumptions,
         consult: read_consult(sources.as_ref()),
         choices,
-        rounding: read_rounding(root.table("rounding").as_ref(), &ids, &reactions),
+        rounding: read_rounding(root.table("rounding").as_ref(), &ids, &results),
         record: record?,
         substances,
         inputs,

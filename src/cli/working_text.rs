@@ -5,10 +5,10 @@ use std::path::Path;
 use super::findings;
 use super::terminal::{Style, Tone, plain, wrap};
 use crate::calculation::Calculation;
-use crate::engine::{Outcome, ReactionWorking};
-use crate::quantity::{exact_text, full_text};
+use crate::engine::{HeatAt, Hess, Outcome, ReactionWorking, Worked};
+use crate::quantity::{exact_text, full_text, working_text};
 use crate::record::coverage;
-use crate::source::Problem;
+use crate::source::{Problem, ProblemReaction};
 
 /// The working of a case as text.
 pub fn shown(case: &Path, calculation: &Calculation, style: Style) -> String {
@@ -71,38 +71,67 @@ fn stated(outcome: &Outcome) -> String {
 fn reaction(calculation: &Calculation, working: &ReactionWorking) -> String {
     let problem = &calculation.problem;
     let reaction = &problem.reactions[working.reaction];
-    let mut text = wrap(
+    let text = wrap(
         &format!("{}: ", reaction.id),
         &reaction.equation.to_string(),
     );
-    let Some(hess) = &working.hess else {
-        return text + "  not worked, see the findings\n";
-    };
     let unit = calculation
         .working
         .outcome(&format!("{}.heat", reaction.id));
     let unit = unit.map_or("", |outcome| outcome.unit.symbol());
-    let rows: Vec<[String; 4]> = hess
-        .terms
-        .iter()
-        .map(|term| {
-            [
-                exact_text(&term.nu),
-                problem.substances[term.substance].label.clone(),
-                format!(
-                    "[{}] {}",
-                    term.value + 1,
-                    full_text(&term.molar, term.molar_significance)
-                ),
-                full_text(&term.contribution, term.contribution_significance),
-            ]
-        })
-        .collect();
-    text += &table(&rows);
-    text + &wrap(
-        "  sum ",
-        &format!("{} {unit}", full_text(&hess.sum, hess.significance)),
-    )
+    match (&working.heat, &working.hess) {
+        (Some(heat), _) => text + &at_temperature(problem, heat, reaction, unit),
+        (None, Some(hess)) => text + &sum(problem, hess, unit),
+        (None, None) => text + "  not worked, see the findings\n",
+    }
+}
+
+fn sum(problem: &Problem, hess: &Hess, unit: &str) -> String {
+    let rows = hess.terms.iter().map(|term| {
+        [
+            exact_text(&term.nu),
+            problem.substances[term.substance].label.clone(),
+            format!(
+                "[{}] {}",
+                term.value + 1,
+                full_text(&term.molar, term.molar_significance)
+            ),
+            full_text(&term.contribution, term.contribution_significance),
+        ]
+    });
+    let rows: Vec<[String; 4]> = rows.collect();
+    let sum = full_text(&hess.sum, hess.significance);
+    table(&rows) + &wrap("  sum ", &format!("{sum} {unit}"))
+}
+
+/// Each participant with its molar enthalpy at the temperature in J/mol, and what it adds.
+fn at_temperature(
+    problem: &Problem,
+    heat: &HeatAt,
+    reaction: &ProblemReaction,
+    unit: &str,
+) -> String {
+    let rows = heat.terms.iter().map(|term| {
+        let marks = problem.paths[term.path].values();
+        let marks: Vec<String> = marks
+            .iter()
+            .map(|value| format!("[{}]", value + 1))
+            .collect();
+        [
+            exact_text(&term.nu),
+            problem.substances[term.substance].label.clone(),
+            format!("{} {}", marks.join(""), number(&term.molar)),
+            number(&term.contribution),
+        ]
+    });
+    let rows: Vec<[String; 4]> = rows.collect();
+    let at = format!("  at {} K, H in J/mol:\n", exact_text(&reaction.kelvin));
+    let sum = format!("{} {unit}", number(&heat.sum));
+    at + &table(&rows) + &wrap("  sum ", &sum)
+}
+
+fn number(worked: &Worked) -> String {
+    working_text(&worked.value, worked.significance)
 }
 
 /// Four columns, numbers flush right; a long cell takes its row with it.
@@ -126,11 +155,15 @@ fn values(problem: &Problem) -> String {
     let mut text = String::new();
     for (index, value) in problem.values.iter().enumerate() {
         let head = &problem.sources[value.source].head;
+        let unit = match value.printed.unit.symbol() {
+            "1" => String::new(),
+            symbol => format!(" {symbol}"),
+        };
         let line = format!(
-            "{} {} {} ({}; {}; {})",
+            "{} {} {}{unit} ({}; {}; {})",
             value.substance,
             value.kind.word(),
-            value.printed,
+            value.printed_text(),
             head.id,
             plain(&value.locator),
             value.standing.word()

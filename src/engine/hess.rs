@@ -3,6 +3,8 @@
 use crate::quantity::{Exact, LinearForm, Real, Significance, Unit};
 use crate::source::{Problem, ProblemReaction};
 
+use super::worked::Worked;
+
 /// What one participant adds to the sum.
 #[derive(Clone, Debug)]
 pub struct HessTerm {
@@ -30,6 +32,17 @@ pub struct Hess {
     pub form: LinearForm,
 }
 
+impl Hess {
+    /// The sum with its digits and what it depends on.
+    pub fn worked(&self) -> Worked {
+        Worked {
+            value: Real::Exact(self.sum.clone()),
+            significance: self.significance,
+            form: self.form.clone(),
+        }
+    }
+}
+
 /// Δ_rH° = Σ ν_i·Δ_fH°_i at the reference temperature of the formation enthalpies, in `unit`
 /// (energy per amount of substance). G. H. Hess, Ann. Phys. Chem. 50 (1840) 385; in today's
 /// notation IUPAC Green Book, 3rd ed. (2007), section 2.11 (both from memory).
@@ -38,12 +51,14 @@ pub struct Hess {
 /// last significant place follows ASTM E29 (a product by an exact number keeps the number of
 /// significant digits, a sum takes the coarsest last place). Limits: participants in their
 /// standard states at the reference temperature; nothing about kinetics, mixing or pressure.
-pub fn hess_sum(problem: &Problem, reaction: &ProblemReaction, unit: &Unit) -> Hess {
+///
+/// None where a participant has no printed formation enthalpy.
+pub fn hess_sum(problem: &Problem, reaction: &ProblemReaction, unit: &Unit) -> Option<Hess> {
     let terms = reaction.terms.iter().map(|term| {
-        let value = problem.substances[term.substance].value;
-        hess_term(problem, term.substance, value, &term.nu, unit)
+        let value = problem.substances[term.substance].value?;
+        Some(hess_term(problem, term.substance, value, &term.nu, unit))
     });
-    let terms: Vec<HessTerm> = terms.collect();
+    let terms: Vec<HessTerm> = terms.collect::<Option<_>>()?;
     let sum = terms.iter().map(|term| &term.contribution).sum();
     let significance = Significance::sum(terms.iter().map(|term| term.contribution_significance));
     let mut form = LinearForm::default();
@@ -52,12 +67,12 @@ pub fn hess_sum(problem: &Problem, reaction: &ProblemReaction, unit: &Unit) -> H
         let sensitivity = &term.nu * conversion(&used.printed.unit, unit);
         form.add_scaled(term.value, &Real::Exact(sensitivity));
     }
-    Hess {
+    Some(Hess {
         terms,
         sum,
         significance,
         form,
-    }
+    })
 }
 
 fn hess_term(

@@ -5,14 +5,18 @@
 
 mod formation;
 mod hess;
+mod kirchhoff;
 mod outcome;
 mod per;
 mod reference;
 mod standing;
 mod work;
+mod worked;
 
 pub use formation::{FormationEquation, formation_equation};
 pub use hess::{Hess, HessTerm};
+pub use kirchhoff::{HeatAt, HeatTerm, heat_at, molar_enthalpy};
 pub use outcome::{COVERAGE, Direction, Outcome, StatedBy};
 pub use per::MolarMass;
 pub use work::{ReactionWorking, WorkOptions, Working, work};
+pub use worked::Worked;

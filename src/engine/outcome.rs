@@ -9,6 +9,7 @@ use crate::quantity::{
 use crate::source::Problem;
 
 use super::work::WorkOptions;
+use super::worked::Worked;
 
 /// The coverage factor of expanded uncertainties (about 95 % where the distribution is about
 /// normal; JCGM 100:2008, 6.2.2 and 6.3.3).
@@ -69,11 +70,14 @@ impl Outcome {
         problem: &Problem,
         options: &WorkOptions,
         id: String,
-        value: Real,
+        worked: Worked,
         unit: Unit,
-        significance: Significance,
-        form: LinearForm,
     ) -> Outcome {
+        let Worked {
+            value,
+            significance,
+            form,
+        } = worked;
         let uncertainty = |index: usize| problem.values[index].uncertainty;
         let combined = combine(&form, &uncertainty, &problem.correlations);
         let expanded = combined.standard.map(|u| u * f64::from(COVERAGE));

@@ -5,7 +5,7 @@ use num_traits::{Signed, Zero};
 use crate::quantity::{Exact, LinearForm, Real, Significance, Unit};
 use crate::source::{Problem, ProblemReaction};
 
-use super::hess::Hess;
+use super::worked::Worked;
 
 /// A molar mass as the sum of standard atomic weights.
 #[derive(Clone, Debug)]
@@ -15,13 +15,6 @@ pub struct MolarMass {
     /// g/mol
     pub value: Exact,
     pub significance: Significance,
-}
-
-/// A heat divided by an exact number or by a molar mass.
-pub(super) struct Per {
-    pub(super) value: Exact,
-    pub(super) significance: Significance,
-    pub(super) form: LinearForm,
 }
 
 /// M = Σ n_i·A_r(i)·(1 g/mol), from standard atomic weights (IUPAC/CIAAW), in g/mol. Ions have none
@@ -46,40 +39,33 @@ pub(super) fn molar_mass(problem: &Problem, reaction: &ProblemReaction) -> Optio
 }
 
 /// Δ_rH°/|ν| for the participant named by `per`, in the unit of the heat.
-pub(super) fn per_mole(hess: &Hess, nu: &Exact) -> Option<Per> {
-    if nu.is_zero() {
-        return None;
-    }
-    let factor = nu.abs().recip();
-    Some(Per {
-        value: &hess.sum * &factor,
-        significance: hess.significance.times_exact(&hess.sum, &factor),
-        form: hess.form.scaled(&Real::Exact(factor)),
-    })
+pub(super) fn per_mole(heat: &Worked, nu: &Exact) -> Option<Worked> {
+    (!nu.is_zero()).then(|| heat.times_exact(&nu.abs().recip()))
 }
 
 /// (Δ_rH°/|ν|)/M in `unit` (energy per mass), `from` being the unit of the heat per mole.
-pub(super) fn per_mass(heat: &Per, mass: &MolarMass, from: &Unit, unit: &Unit) -> Option<Per> {
-    if mass.value.is_zero() {
-        return None;
-    }
+pub(super) fn per_mass(
+    heat: &Worked,
+    mass: &MolarMass,
+    from: &Unit,
+    unit: &Unit,
+) -> Option<Worked> {
     // from.factor / (10^-3 kg per g) / unit.factor, exactly.
     let scale = from.factor() * Exact::from_integer(1000.into()) / unit.factor();
-    let value = &heat.value / &mass.value * &scale;
-    let mut form = heat.form.scaled(&Real::Exact(&scale / &mass.value));
-    for (index, count) in &mass.parts {
-        let sensitivity = -(&value / &mass.value * count);
-        form.add_scaled(*index, &Real::Exact(sensitivity));
+    Some(heat.over(&mass.worked())?.times_exact(&scale))
+}
+
+impl MolarMass {
+    /// The molar mass in g/mol with what it depends on.
+    pub fn worked(&self) -> Worked {
+        let mut form = LinearForm::default();
+        for (index, count) in &self.parts {
+            form.add_scaled(*index, &Real::Exact(count.clone()));
+        }
+        Worked {
+            value: Real::Exact(self.value.clone()),
+            significance: self.significance,
+            form,
+        }
     }
-    let significance = Significance::quotient(
-        &heat.value,
-        heat.significance,
-        &mass.value,
-        mass.significance,
-    )?;
-    Some(Per {
-        significance: significance.times_exact(&(&heat.value / &mass.value), &scale),
-        value,
-        form,
-    })
 }

@@ -19,7 +19,7 @@ fn conventional_temperature() -> Exact {
 /// All findings about mixed references, one for each reaction and kind.
 pub(super) fn check(problem: &Problem, working: &Working, text: &Text) -> Vec<Finding> {
     let mut findings = pressure(problem, text);
-    for reaction in working.reactions.iter().filter(|r| r.hess.is_some()) {
+    for reaction in working.reactions.iter().filter(|r| r.is_worked()) {
         let reaction = &problem.reactions[reaction.reaction];
         let place = text.place(reaction.span.start);
         for (severity, code, message) in temperature(problem, reaction)
@@ -170,7 +170,10 @@ fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
     let mut names = Vec::new();
     let mut unknown = Vec::new();
     for term in &reaction.terms {
-        let value = &problem.values[problem.substances[term.substance].value];
+        let Some(value) = problem.substances[term.substance].value else {
+            continue;
+        };
+        let value = &problem.values[value];
         let head = &problem.sources[value.source].head;
         let Some(reference) = head.temperature.as_ref() else {
             continue;
@@ -278,7 +281,7 @@ fn net_atoms(
     let atoms = reaction.terms.iter().map(|term| {
         let substance = &problem.substances[term.substance];
         let count = substance.species.formula.counts().get(&element);
-        match (problem.values[substance.value].source == source, count) {
+        match (substance.source == source, count) {
             (true, Some(count)) => &term.nu * count,
             _ => Exact::zero(),
         }

@@ -109,8 +109,9 @@ pub(super) fn fixed_decimals(problem: &Problem, outcomes: &[Outcome], text: &Tex
         severity: Severity::Note,
         code: FindingCode::FixedDecimals,
         message: format!(
-            "{} {verb} a fixed number of decimals whatever is known, which limits no digits: {} \
-             stated to 0.1 kJ/mol or 1 kJ/kg at the finest. [rounding] states another place.",
+            "{} {verb} a fixed number of decimals, or coefficients of functions, whatever is known; \
+             they limit no digits: {} stated to 0.1 kJ/mol or 1 kJ/kg at the finest. [rounding] \
+             states another place.",
             tables.join(", "),
             named(&decided),
         ),

@@ -4,12 +4,14 @@ use std::collections::BTreeMap;
 
 use crate::case::{ResultUnits, RoundingRule};
 use crate::finding::{Finding, FindingCode, Severity, Text};
-use crate::quantity::{Exact, Real, Unit};
-use crate::source::{Problem, ProblemReaction};
+use crate::quantity::{Exact, InputUncertainty, LinearForm, Real, Unit, exact_text, to_f64};
+use crate::source::{Problem, ProblemReaction, reference_kelvin};
 
 use super::hess::{Hess, hess_sum};
+use super::kirchhoff::{HeatAt, heat_at, heat_capacity_change};
 use super::outcome::{Outcome, place_in};
 use super::per::{MolarMass, molar_mass, per_mass, per_mole};
+use super::worked::Worked;
 use super::{reference, standing};
 
 /// How results are to be given.
@@ -46,6 +48,12 @@ pub struct Working {
 }
 
 impl Working {
+    /// Adds a result, which others can rest on from then on.
+    pub(super) fn push(&mut self, outcome: Outcome) {
+        self.by_id.insert(outcome.id.clone(), self.outcomes.len());
+        self.outcomes.push(outcome);
+    }
+
     pub fn outcome(&self, id: &str) -> Option<&Outcome> {
         let index = self.by_id.get(id)?;
         self.outcomes.get(*index)
@@ -64,9 +72,17 @@ impl Working {
 pub struct ReactionWorking {
     /// Index among the reactions of the problem.
     pub reaction: usize,
-    /// The sum, where the reaction could be worked.
+    /// The sum at 298.15 K, where every participant has a printed formation enthalpy.
     pub hess: Option<Hess>,
+    /// The heat along the paths of the participants, where that is not the sum alone.
+    pub heat: Option<HeatAt>,
     pub molar_mass: Option<MolarMass>,
+}
+
+impl ReactionWorking {
+    pub fn is_worked(&self) -> bool {
+        self.hess.is_some() || self.heat.is_some()
+    }
 }
 
 /// Works a problem.
@@ -80,10 +96,6 @@ pub fn work(problem: &Problem, options: &WorkOptions<'_>) -> Working {
     for (index, reaction) in problem.reactions.iter().enumerate() {
         work_reaction(problem, options, index, reaction, &mut working);
     }
-    let ids = working.outcomes.iter().enumerate();
-    working.by_id = ids
-        .map(|(index, outcome)| (outcome.id.clone(), index))
-        .collect();
     let text = options.text;
     working
         .findings
@@ -121,88 +133,107 @@ fn work_reaction(
     working: &mut Working,
 ) {
     let unit = options.unit(&options.units.amount);
-    if let Some(finding) = other_temperature(reaction, options.text) {
-        working.findings.push(finding);
-        working.reactions.push(ReactionWorking {
-            reaction: index,
-            hess: None,
-            molar_mass: None,
-        });
-        return;
+    let paths = paths(reaction);
+    let hess = paths
+        .as_ref()
+        .and_then(|_| hess_sum(problem, reaction, &unit));
+    let at_reference = reaction.kelvin == reference_kelvin() && hess.is_some();
+    let heat = paths.as_ref().filter(|_| !at_reference);
+    let heat = heat.map(|terms| heat_at(problem, terms, &unit));
+    let mut worked = match (&heat, &hess) {
+        (Some(heat), _) => Some(heat.sum.clone()),
+        (None, Some(hess)) => Some(hess.worked()),
+        (None, None) => None,
+    };
+    if let (Some(worked), Some(terms)) = (&mut worked, &paths) {
+        let said = temperature_error(problem, reaction, terms, &unit, &mut worked.form);
+        let said = said.map(|message| uncertain(reaction, message, options.text));
+        working.findings.extend(said);
     }
-    let hess = hess_sum(problem, reaction, &unit);
-    working.outcomes.push(Outcome::new(
-        problem,
-        options,
-        format!("{}.heat", reaction.id),
-        Real::Exact(hess.sum.clone()),
-        unit.clone(),
-        hess.significance,
-        hess.form.clone(),
-    ));
-    let mass = molar_mass(problem, reaction);
-    work_per(
-        problem,
-        options,
-        reaction,
-        &hess,
-        mass.as_ref(),
-        &unit,
-        working,
-    );
+    let molar_mass = match worked {
+        Some(worked) => work_results(problem, options, reaction, worked, &unit, working),
+        None => None,
+    };
     working.reactions.push(ReactionWorking {
         reaction: index,
-        hess: Some(hess),
-        molar_mass: mass,
+        hess,
+        heat,
+        molar_mass,
     });
 }
 
-fn work_per(
+/// The paths of the participants with their stoichiometric numbers; none where one is missing.
+fn paths(reaction: &ProblemReaction) -> Option<Vec<(usize, Exact)>> {
+    if reaction.terms.is_empty() {
+        return None;
+    }
+    let terms = reaction.terms.iter();
+    terms
+        .map(|term| Some((term.path?, term.nu.clone())))
+        .collect()
+}
+
+/// Adds the uncertainty of the temperature: ∂Δ_rH/∂T = ΔC_p (Kirchhoff). A sentence where the
+/// heat capacities for it are not known.
+fn temperature_error(
     problem: &Problem,
-    options: &WorkOptions<'_>,
     reaction: &ProblemReaction,
-    hess: &Hess,
-    mass: Option<&MolarMass>,
+    terms: &[(usize, Exact)],
     unit: &Unit,
-    working: &mut Working,
-) {
-    let nu = reaction.per.map(|index| &reaction.terms[index].nu);
-    let Some(per) = nu.and_then(|nu| per_mole(hess, nu)) else {
-        return;
-    };
-    let by_mass = options.unit(&options.units.mass);
-    let mass = mass.and_then(|mass| per_mass(&per, mass, unit, &by_mass));
-    let mut push = |quantity: &str, per: super::per::Per, unit: Unit| {
-        working.outcomes.push(Outcome::new(
-            problem,
-            options,
-            format!("{}.{quantity}", reaction.id),
-            Real::Exact(per.value),
-            unit,
-            per.significance,
-            per.form,
+    form: &mut LinearForm,
+) -> Option<String> {
+    let value = reaction.temperature_value?;
+    let used = &problem.values[value];
+    if used.uncertainty == InputUncertainty::Exact {
+        return None;
+    }
+    let Some(change) = heat_capacity_change(problem, terms, &reaction.kelvin) else {
+        return Some(format!(
+            "the uncertainty of its temperature, `{}`, is not carried: the heat capacities at {} \
+             K are not all known",
+            used.substance,
+            exact_text(&reaction.kelvin)
         ));
     };
-    push("heat-per", per, unit.clone());
-    if let Some(mass) = mass {
-        push("heat-per-mass", mass, by_mass);
+    let per_kelvin = change * to_f64(&(used.printed.unit.factor() / unit.factor()));
+    form.add_scaled(value, &Real::Float(per_kelvin));
+    None
+}
+
+fn uncertain(reaction: &ProblemReaction, message: String, text: &Text) -> Finding {
+    Finding {
+        severity: Severity::Caution,
+        code: FindingCode::TemperatureUncertainty,
+        message: format!("{}: {message}.", reaction.id),
+        at: text.place(reaction.span.start),
     }
 }
 
-/// The formation enthalpies hold at 298.15 K; a heat at another temperature is not that sum.
-fn other_temperature(reaction: &ProblemReaction, text: &Text) -> Option<Finding> {
-    let (asked, span) = reaction.temperature.as_ref()?;
-    if asked.value_in_si() == Exact::new(29815.into(), 100.into()) {
-        return None;
+/// The heat, and what it is per mole and per mass of the substance that `per` names.
+fn work_results(
+    problem: &Problem,
+    options: &WorkOptions<'_>,
+    reaction: &ProblemReaction,
+    heat: Worked,
+    unit: &Unit,
+    working: &mut Working,
+) -> Option<MolarMass> {
+    let mut push = |quantity: &str, worked: Worked, unit: Unit| {
+        let id = format!("{}.{quantity}", reaction.id);
+        working.push(Outcome::new(problem, options, id, worked, unit));
+    };
+    let nu = reaction.per.map(|index| &reaction.terms[index].nu);
+    let per = nu.and_then(|nu| per_mole(&heat, nu));
+    push("heat", heat, unit.clone());
+    let mass = molar_mass(problem, reaction);
+    let per = per?;
+    let by_mass = options.unit(&options.units.mass);
+    let worked = mass
+        .as_ref()
+        .and_then(|mass| per_mass(&per, mass, unit, &by_mass));
+    push("heat-per", per, unit.clone());
+    if let Some(worked) = worked {
+        push("heat-per-mass", worked, by_mass);
     }
-    Some(Finding {
-        severity: Severity::Stop,
-        code: FindingCode::TemperatureNotWorked,
-        message: format!(
-            "{}: asked for at {asked}, and this version works heats at 298.15 K (25 °C) only. No \
-             result is given rather than one at another temperature.",
-            reaction.id
-        ),
-        at: text.place(span.start),
-    })
+    mass
 }

@@ -1,6 +1,7 @@
 //! Numbers of a working in full, before anything is rounded.
 
-use super::exact::{Exact, power_of_ten, round_to_place, terminating_decimal};
+use super::exact::{Exact, order_of_magnitude, power_of_ten, round_to_place, terminating_decimal};
+use super::real::Real;
 use super::significance::Significance;
 
 /// Digits shown beyond the last significant place of a number whose decimals do not end.
@@ -22,6 +23,33 @@ pub fn full_text(value: &Exact, significance: Significance) -> String {
             format!("{}…", round_to_place(&cut, digits).text)
         }
     }
+}
+
+/// The longest number that a working shows in full.
+const LONGEST: usize = 14;
+
+/// Significant digits of a number that is too long to be shown in full.
+const SHOWN_DIGITS: i64 = 10;
+
+/// The number as a working shows it: in full where that is short, otherwise its first ten digits
+/// and an ellipsis.
+pub fn working_text(value: &Real, significance: Significance) -> String {
+    if let Some(exact) = value.exact() {
+        let full = full_text(exact, significance);
+        if full.chars().count() <= LONGEST && !full.ends_with('…') {
+            return full;
+        }
+    }
+    let Some(exact) = value.to_exact() else {
+        return "not a number".to_string();
+    };
+    let Some(order) = order_of_magnitude(&exact) else {
+        return "0".to_string();
+    };
+    let place = order + 1 - SHOWN_DIGITS;
+    let cut = (&exact * power_of_ten(-place)).trunc() * power_of_ten(place);
+    let more = if cut == exact { "" } else { "…" };
+    format!("{}{more}", round_to_place(&cut, place).text)
 }
 
 /// Zeros up to a decimal place.

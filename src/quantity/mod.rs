@@ -56,7 +56,7 @@ pub use exact::{
     Exact, Rounded, exact_text, order_of_magnitude, power_of_ten, round_to_place,
     terminating_decimal,
 };
-pub use full_text::full_text;
+pub use full_text::{full_text, working_text};
 pub use linear_form::LinearForm;
 pub use nearest_float::to_f64;
 pub use printed_quantity::Quantity;

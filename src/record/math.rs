@@ -23,6 +23,8 @@ pub enum Math {
     Fraction { over: Box<Math>, under: Box<Math> },
     /// A sum sign over the index below it.
     Sum { index: Box<Math> },
+    /// An integral sign between two bounds.
+    Integral { from: Box<Math>, to: Box<Math> },
     /// A square root.
     Root { of: Box<Math> },
     /// Nodes one after another.

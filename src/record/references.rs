@@ -2,8 +2,9 @@
 
 use std::collections::BTreeMap;
 
+use crate::case::CASE_NAME;
 use crate::quantity::Quantity;
-use crate::source::{Problem, SourceHead, attachment_name};
+use crate::source::{CASE, Problem, SourceHead, attachment_name};
 
 use super::pages::Reference;
 
@@ -39,7 +40,14 @@ fn reference(head: &SourceHead, number: usize) -> Reference {
         pressure: stated(&head.pressure),
         licence: head.licence.clone(),
         sha256: head.sha256.clone(),
-        attachment: attachment_name(&head.id),
+        attachment: attachment(&head.id),
+    }
+}
+
+fn attachment(id: &str) -> String {
+    match id {
+        CASE => CASE_NAME.to_string(),
+        _ => attachment_name(id),
     }
 }
 

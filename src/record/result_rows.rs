@@ -3,7 +3,7 @@
 use crate::calculation::Calculation;
 use crate::case::RESULT_QUANTITIES;
 use crate::engine::{COVERAGE, Outcome};
-use crate::quantity::two_digits;
+use crate::quantity::{exact_text, two_digits};
 
 use super::numerals::{minus, unit};
 use super::pages::ResultRow;
@@ -18,7 +18,7 @@ pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
             .filter_map(|quantity| calculation.working.outcome(&format!("{id}.{quantity}")));
         let first = rows.len();
         rows.extend(own.map(|outcome| result_row(calculation, outcome, section)));
-        if reaction.hess.is_none() {
+        if !reaction.is_worked() {
             rows.push(not_worked(id, section));
         }
         if let Some(row) = rows.get_mut(first) {
@@ -65,11 +65,18 @@ pub(super) fn what(calculation: &Calculation, outcome: &Outcome) -> String {
     let per = reaction
         .and_then(|r| r.per.as_ref())
         .map_or("", |per| per.value.as_str());
+    let at = kelvin(calculation, id);
     match quantity {
-        "heat" => "Heat of reaction at 298.15 K, per mole of reaction as written".to_string(),
-        "heat-per" => format!("Heat of reaction at 298.15 K, per mole of {per}"),
-        _ => format!("Heat of reaction at 298.15 K, per mass of {per}"),
+        "heat" => format!("Heat of reaction at {at} K, per mole of reaction as written"),
+        "heat-per" => format!("Heat of reaction at {at} K, per mole of {per}"),
+        _ => format!("Heat of reaction at {at} K, per mass of {per}"),
     }
+}
+
+fn kelvin(calculation: &Calculation, id: &str) -> String {
+    let mut reactions = calculation.problem.reactions.iter();
+    let reaction = reactions.find(|reaction| reaction.id == id);
+    reaction.map_or(String::new(), |r| minus(&exact_text(&r.kelvin)))
 }
 
 /// The expanded uncertainty where it covers every value used, otherwise none.

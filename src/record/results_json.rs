@@ -110,7 +110,7 @@ fn value_used(problem: &Problem, index: usize, value: &ValueUsed) -> Value {
         "number": index + 1,
         "substance": value.substance,
         "quantity": value.kind.word(),
-        "printed": value.printed.printed_number(),
+        "printed": value.printed_text(),
         "unit": value.printed.unit.symbol(),
         "source": head.id,
         "locator": value.locator,

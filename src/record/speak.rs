@@ -26,6 +26,9 @@ fn said(math: &Math) -> String {
             )
         }
         Math::Sum { index } => format!("the sum over {} of", said(index)),
+        Math::Integral { from, to } => {
+            format!("the integral from {} to {} of", said(from), said(to))
+        }
         Math::Root { of } => format!("the square root of {}, end of root", said(of)),
         Math::Row { of } => of.iter().map(said).collect::<Vec<_>>().join(" "),
     }

@@ -60,6 +60,53 @@ pub(super) fn hess_law() -> Math {
     ])
 }
 
+/// H_i(T) = Δ_fH°_i + ∫ C_p,i dT + Σ Δ_trsH_i
+pub(super) fn enthalpy_at_temperature() -> Math {
+    let transition = row(vec![
+        with_sub(upright("Δ"), upright("trs")),
+        with_sub(symbol("H"), symbol("i")),
+    ]);
+    row(vec![
+        with_sub(symbol("H"), symbol("i")),
+        upright("("),
+        symbol("T"),
+        upright(")"),
+        upright("="),
+        enthalpy("f", Some("i")),
+        upright("+"),
+        Math::Integral {
+            from: Box::new(with_sub(symbol("T"), upright("0"))),
+            to: Box::new(symbol("T")),
+        },
+        with_sub(
+            symbol("C"),
+            row(vec![symbol("p"), upright(","), symbol("i")]),
+        ),
+        upright("d"),
+        symbol("T"),
+        upright("+"),
+        upright("Σ"),
+        transition,
+    ])
+}
+
+/// Δ_rH°(T) = Σ_i ν_i H_i(T)
+pub(super) fn heat_at_temperature() -> Math {
+    row(vec![
+        enthalpy("r", None),
+        upright("("),
+        symbol("T"),
+        upright(")"),
+        upright("="),
+        sum("i"),
+        with_sub(symbol("ν"), symbol("i")),
+        with_sub(symbol("H"), symbol("i")),
+        upright("("),
+        symbol("T"),
+        upright(")"),
+    ])
+}
+
 /// u²(y) = Σ_i (c_i u_i)² + Σ_i≠j r_ij c_i c_j u_i u_j; U = 2 u
 pub(super) fn combined_uncertainty() -> Math {
     let indexed = |base: &str, index: &str| with_sub(symbol(base), symbol(index));

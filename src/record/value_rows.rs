@@ -21,8 +21,8 @@ pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
             substance: substance(value),
             name: value.name.clone(),
             cas: value.cas.clone(),
-            quantity: quantity(value.kind).to_string(),
-            printed: printed_number(&value.printed),
+            quantity: quantity(value.kind),
+            printed: printed_value(value),
             unit: unit(&value.printed.unit),
             // Every source of a value used is in the reference list.
             reference: numbers.get(&value.source).copied().unwrap_or(0),
@@ -43,37 +43,47 @@ pub(super) fn substance(value: &ValueUsed) -> Rich {
     }
 }
 
-fn quantity(kind: ValueKind) -> &'static str {
-    match kind {
-        ValueKind::FormationEnthalpy => "formation enthalpy",
-        ValueKind::AtomicWeight => "atomic weight",
+fn quantity(kind: ValueKind) -> String {
+    kind.word().replace('-', " ")
+}
+
+/// As the source prints it; a function with its form, its range and its coefficients.
+fn printed_value(value: &ValueUsed) -> String {
+    match &value.function {
+        Some(_) => minus(&value.printed_text()),
+        None => printed_number(&value.printed),
     }
 }
 
 pub(super) fn comparison_rows(problem: &Problem) -> Vec<ComparisonRow> {
     let rows = |substance: &Substance| -> Vec<ComparisonRow> {
         let row = |comparison: &Comparison| comparison_row(problem, substance, comparison);
-        substance.comparisons.iter().map(row).collect()
+        substance.comparisons.iter().filter_map(row).collect()
     };
     let mut shown: Vec<usize> = Vec::new();
     let mut all = Vec::new();
     for substance in &problem.substances {
         // Two names for one value are compared once.
-        if !shown.contains(&substance.value) {
-            shown.push(substance.value);
+        if let Some(value) = substance.value.filter(|value| !shown.contains(value)) {
+            shown.push(value);
             all.extend(rows(substance));
         }
     }
     all
 }
 
-fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) -> ComparisonRow {
-    let value = &problem.values[of.value];
+fn comparison_row(
+    problem: &Problem,
+    of: &Substance,
+    comparison: &Comparison,
+) -> Option<ComparisonRow> {
+    let index = of.value?;
+    let value = &problem.values[index];
     let difference = &comparison.difference;
     let text = terminating_decimal(difference).unwrap_or_else(|| two_digits(to_f64(difference)));
-    ComparisonRow {
+    Some(ComparisonRow {
         substance: substance(value),
-        value_used: of.value + 1,
+        value_used: index + 1,
         used: printed_number(&value.printed),
         other: format!(
             "{} {}",
@@ -96,7 +106,7 @@ fn comparison_row(problem: &Problem, of: &Substance, comparison: &Comparison) ->
             }
             None => judgement(comparison.judgement),
         },
-    }
+    })
 }
 
 /// U is the combined expanded uncertainty of the two values, or the one that is stated.

@@ -6,6 +6,7 @@ use crate::quantity::{exact_text, terminating_decimal};
 use crate::source::{Problem, ProblemReaction};
 
 use super::formation_table::{cancelled, formation_table};
+use super::heat_working::heat_steps;
 use super::math::Math;
 use super::numerals::{exact_fraction, in_full, minus, printed, signed, unit};
 use super::pages::{Step, Table, WorkingSection};
@@ -28,8 +29,11 @@ fn section(calculation: &Calculation, working: &ReactionWorking) -> WorkingSecti
     let mut steps = vec![Step::Reaction {
         text: equation(&calculation.problem, reaction),
     }];
-    match &working.hess {
-        Some(hess) => heat_steps(calculation, reaction, hess, &mut steps),
+    match calculation
+        .working
+        .outcome(&format!("{}.heat", reaction.id))
+    {
+        Some(outcome) => result_steps(calculation, reaction, working, outcome, &mut steps),
         None => steps.push(Step::Text {
             text: Rich::plain("Not worked: see the findings."),
         }),
@@ -46,6 +50,9 @@ fn section(calculation: &Calculation, working: &ReactionWorking) -> WorkingSecti
 
 /// The reaction with names where the case declares them.
 pub(super) fn equation(problem: &Problem, reaction: &ProblemReaction) -> Rich {
+    if reaction.terms.is_empty() {
+        return Rich::plain(reaction.equation.to_string());
+    }
     let side = |negative: bool| {
         let terms = reaction.terms.iter();
         let terms = terms.filter(|t| (t.nu < num_traits::Zero::zero()) == negative);
@@ -60,19 +67,45 @@ pub(super) fn equation(problem: &Problem, reaction: &ProblemReaction) -> Rich {
     side(true).and(" → ").with(side(false))
 }
 
-fn heat_steps(
+/// The sum at 298.15 K, the way to the temperature where it is another, and what is stated.
+fn result_steps(
+    calculation: &Calculation,
+    reaction: &ProblemReaction,
+    working: &ReactionWorking,
+    outcome: &Outcome,
+    steps: &mut Vec<Step>,
+) {
+    if let Some(hess) = &working.hess {
+        if working.heat.is_some() {
+            steps.push(Step::Heading {
+                text: "At 298.15 K".to_string(),
+            });
+        }
+        hess_steps(calculation, reaction, hess, outcome, steps);
+    }
+    if let Some(heat) = &working.heat {
+        heat_steps(calculation, reaction, heat, outcome, steps);
+    }
+    steps.push(Step::Heading {
+        text: "Uncertainty and stated digits".to_string(),
+    });
+    if outcome.combined.standard.is_some() {
+        steps.push(displayed(combined_uncertainty()));
+    }
+    steps.push(Step::Text {
+        text: stating(outcome),
+    });
+    steps.push(result(calculation, outcome));
+}
+
+fn hess_steps(
     calculation: &Calculation,
     reaction: &ProblemReaction,
     hess: &Hess,
+    outcome: &Outcome,
     steps: &mut Vec<Step>,
 ) {
     let problem = &calculation.problem;
-    let Some(outcome) = calculation
-        .working
-        .outcome(&format!("{}.heat", reaction.id))
-    else {
-        return;
-    };
     let unit = unit(&outcome.unit);
     steps.push(displayed(hess_law()));
     steps.push(Step::Text {
@@ -95,19 +128,9 @@ fn heat_steps(
             text: cancelled(problem, reaction),
         });
     }
-    steps.push(Step::Heading {
-        text: "Uncertainty and stated digits".to_string(),
-    });
-    if outcome.combined.standard.is_some() {
-        steps.push(displayed(combined_uncertainty()));
-    }
-    steps.push(Step::Text {
-        text: stating(outcome),
-    });
-    steps.push(result(calculation, outcome));
 }
 
-fn displayed(math: Math) -> Step {
+pub(super) fn displayed(math: Math) -> Step {
     let alt = speak(&math);
     Step::Equation { math, alt }
 }

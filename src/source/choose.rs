@@ -1,21 +1,29 @@
 //! Which entry of which source serves for a substance.
 
 use crate::case::Choice;
-use crate::finding::{Fault, FaultCode, Finding, FindingCode, Severity, Span};
+use crate::finding::{Fault, FaultCode, Finding, FindingCode, Place, Severity, Span};
 use crate::notation::{PhaseLabel, Species};
-use crate::quantity::{Exact, Quantity};
+use crate::quantity::{Exact, Quantity, exact_text};
 
 use super::matching::{Identity, Match, Wanted, are_isomers, identity, passed_over, pick};
 use super::model::Entry;
+use super::path::on_formation_scale;
 use super::resolve::Resolver;
+use super::stable::{is_stable, no_stable_form, stable_form};
 use super::suggest::{ambiguous, no_enthalpy, unknown_substance};
 
-/// An entry that holds a formation enthalpy of the wanted substance.
+/// An entry that gives the enthalpy of the wanted substance on the scale of formation enthalpies.
 #[derive(Clone, Debug)]
 pub(super) struct Held {
     pub(super) source: usize,
     pub(super) entry: Entry,
-    pub(super) value: Quantity,
+}
+
+impl Held {
+    /// The printed formation enthalpy; none where a function gives it.
+    pub(super) fn value(&self) -> Option<&Quantity> {
+        self.entry.formation_enthalpy.as_ref()
+    }
 }
 
 /// The entry that serves, and what the other consulted sources hold.
@@ -23,7 +31,6 @@ pub(super) struct Held {
 pub(super) struct Chosen {
     pub(super) source: usize,
     pub(super) entry: Entry,
-    pub(super) value: Quantity,
     pub(super) others: Vec<Held>,
     /// What the case said where it chose.
     pub(super) because: Option<String>,
@@ -39,8 +46,16 @@ fn can_have_isomers(wanted: &Wanted) -> bool {
 }
 
 /// Chooses the first source in order, or the one that the case chose.
-pub(super) fn choose(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) -> Option<Chosen> {
-    let found = look_up(resolver, wanted, span)?;
+///
+/// `kelvin` decides which form `(stable)` stands for. Where nothing serves, a fault or a `stop`
+/// says why.
+pub(super) fn choose(
+    resolver: &mut Resolver<'_>,
+    wanted: &Wanted,
+    kelvin: &Exact,
+    span: &Span,
+) -> Option<Chosen> {
+    let found = look_up(resolver, wanted, kelvin, span)?;
     let choice = choice_for(resolver, wanted).cloned();
     let index = match &choice {
         Some(choice) => chosen_index(resolver, choice, &found)?,
@@ -51,11 +66,10 @@ pub(super) fn choose(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) 
     if refuse_isomers(resolver, wanted, span, &first, &found) {
         return None;
     }
-    note_identity(resolver, wanted, span, &first.entry);
+    note_identity(resolver, wanted, kelvin, span, &first.entry);
     Some(Chosen {
         source: first.source,
         entry: first.entry,
-        value: first.value,
         others: found,
         chosen_at: choice.as_ref().map(|choice| choice.substance.span.clone()),
         because: choice.map(|choice| choice.because),
@@ -63,16 +77,33 @@ pub(super) fn choose(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) 
 }
 
 /// All consulted entries that hold the value, in the order of the sources; never empty.
-fn look_up(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) -> Option<Vec<Held>> {
+fn look_up(
+    resolver: &mut Resolver<'_>,
+    wanted: &Wanted,
+    kelvin: &Exact,
+    span: &Span,
+) -> Option<Vec<Held>> {
     let hill = wanted.species.formula.hill();
     let mut found = Vec::new();
     let mut without_value: Option<(usize, Entry)> = None;
+    let mut no_form: Option<String> = None;
     for source in 0..resolver.sources.len() {
         let entries = resolver.sources[source].of_composition(&hill);
         if let Some(entry) = passed_over(wanted, &entries) {
             note_passed_over(resolver, wanted, span, source, entry);
         }
-        match stable_only(wanted, pick(wanted, &entries)) {
+        let matched = match is_stable(wanted) {
+            true => match stable_form(pick(wanted, &entries), kelvin) {
+                Ok(matched) => matched,
+                Err(why) => {
+                    let id = resolver.sources[source].id();
+                    no_form.get_or_insert(format!("{id}: {why}"));
+                    continue;
+                }
+            },
+            false => pick(wanted, &entries),
+        };
+        match matched {
             Match::None => {}
             Match::Several(several) => {
                 if found.is_empty() || tells_isomers(wanted) {
@@ -81,15 +112,17 @@ fn look_up(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) -> Option<
                     return None;
                 }
             }
-            Match::One(entry) => match entry.formation_enthalpy.clone() {
-                Some(value) => found.push(Held {
-                    source,
-                    entry: *entry,
-                    value,
-                }),
-                None => without_value = Some((source, *entry)),
-            },
+            Match::One(entry) if gives_enthalpy(&entry) => found.push(Held {
+                source,
+                entry: *entry,
+            }),
+            Match::One(entry) => without_value = Some((source, *entry)),
         }
+    }
+    if let (true, Some(why)) = (found.is_empty(), no_form) {
+        let finding = no_stable_form(resolver, wanted, &why, span);
+        resolver.say(finding);
+        return None;
     }
     if found.is_empty() {
         let fault = match without_value {
@@ -102,30 +135,10 @@ fn look_up(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) -> Option<
     Some(found)
 }
 
-/// Of several condensed forms, those that the source gives at the reference temperature.
-fn stable_only(wanted: &Wanted, found: Match) -> Match {
-    let stable = wanted
-        .species
-        .phase
-        .as_ref()
-        .is_some_and(|p| p.label == PhaseLabel::Stable);
-    let entries = match found {
-        Match::Several(entries) => entries,
-        // One form whose range ends elsewhere is not the one that is stable here.
-        Match::One(entry) if stable && !entry.heat_capacity.is_empty() => vec![*entry],
-        found => return found,
-    };
-    if !stable {
-        return Match::Several(entries);
-    }
-    let reference = Exact::new(29815.into(), 100.into());
-    let serving = |e: &Entry| e.heat_capacity.iter().any(|cp| cp.serves(&reference));
-    let mut serving: Vec<Entry> = entries.iter().filter(|e| serving(e)).cloned().collect();
-    match serving.len() {
-        1 => Match::One(Box::new(serving.remove(0))),
-        0 if entries.len() == 1 => Match::None,
-        _ => Match::Several(entries),
-    }
+/// A printed formation enthalpy, or a function that carries its integration constant.
+fn gives_enthalpy(entry: &Entry) -> bool {
+    let functions = &entry.heat_capacity;
+    entry.formation_enthalpy.is_some() || functions.iter().any(|f| on_formation_scale(f.form))
 }
 
 /// In a gas, a liquid or a solution several entries of one formula are different compounds.
@@ -215,7 +228,13 @@ fn note_passed_over(
 }
 
 /// What was taken for granted about the identity of a substance is said.
-fn note_identity(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span, entry: &Entry) {
+fn note_identity(
+    resolver: &mut Resolver<'_>,
+    wanted: &Wanted,
+    kelvin: &Exact,
+    span: &Span,
+    entry: &Entry,
+) {
     let form = entry.species().map_or_else(String::new, Species::to_string);
     let at = resolver.text.place(span.start);
     if identity(wanted, entry) == Identity::Open {
@@ -255,7 +274,9 @@ fn note_identity(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span, entr
     }
     let asked = &wanted.species.phase;
     let listed = entry.notations().any(|species| species.phase == *asked);
-    if !listed {
+    if is_stable(wanted) {
+        note_stable(resolver, wanted, &form, kelvin, at);
+    } else if !listed {
         resolver.findings.push(Finding {
             severity: Severity::Note,
             code: FindingCode::IdentityByFormula,
@@ -266,4 +287,23 @@ fn note_identity(resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span, entr
             at,
         });
     }
+}
+
+fn note_stable(
+    resolver: &mut Resolver<'_>,
+    wanted: &Wanted,
+    form: &str,
+    kelvin: &Exact,
+    at: Place,
+) {
+    resolver.say(Finding {
+        severity: Severity::Note,
+        code: FindingCode::StableForm,
+        message: format!(
+            "`{}` is {form} at {} K, by the ranges of its source.",
+            wanted.label,
+            exact_text(kelvin)
+        ),
+        at,
+    });
 }

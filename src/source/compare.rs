@@ -25,10 +25,13 @@ pub(super) fn compare(
 ) -> Vec<Comparison> {
     let mut comparisons = Vec::new();
     for other in &chosen.others {
-        if used.printed.exact && other.value.decimal.value().is_zero() {
+        let Some(theirs) = other.value() else {
+            continue;
+        };
+        if used.printed.exact && theirs.decimal.value().is_zero() {
             continue;
         }
-        let Some(comparison) = compare_one(resolver, used, other) else {
+        let Some(comparison) = compare_one(resolver, used, other, theirs) else {
             continue;
         };
         if let Some(finding) = judge(resolver, wanted, chosen, used, &comparison, span) {
@@ -39,15 +42,20 @@ pub(super) fn compare(
     comparisons
 }
 
-fn compare_one(resolver: &Resolver<'_>, used: &ValueUsed, other: &Held) -> Option<Comparison> {
+fn compare_one(
+    resolver: &Resolver<'_>,
+    used: &ValueUsed,
+    other: &Held,
+    value: &Quantity,
+) -> Option<Comparison> {
     let head = &resolver.sources[other.source].head;
     // Units of the two sources are both of energy per amount; anything else was refused.
-    let theirs = other.value.value_in(&used.printed.unit).ok()?;
+    let theirs = value.value_in(&used.printed.unit).ok()?;
     let difference = theirs - used.printed.decimal.value();
-    let judgement = judgement(&difference, used, &other.value, head);
+    let judgement = judgement(&difference, used, value, head);
     Some(Comparison {
         source: other.source,
-        printed: other.value.clone(),
+        printed: value.clone(),
         locator: other.entry.locator.clone(),
         difference,
         judgement,

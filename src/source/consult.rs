@@ -5,7 +5,7 @@ use crate::finding::{Fault, FaultCode, Faults, Located, Text, nearest};
 
 use super::builtin::{BUILT_IN, CONVENTIONS, built_in};
 use super::read::{Provenance, read_source};
-use super::store::Source;
+use super::store::{CASE, Source};
 
 /// The one door through which source files come in: a folder, or the attachments of a record.
 pub trait SourceFiles {
@@ -73,7 +73,9 @@ fn load(
             let (source, found) = read_source(&text, files.provenance());
             faults.extend(found);
             let source = source?;
-            if files.provenance() == Provenance::Original && BUILT_IN.contains(&source.id()) {
+            if files.provenance() == Provenance::Original
+                && (BUILT_IN.contains(&source.id()) || source.id() == CASE)
+            {
                 faults.push(borrowed_id(name, case, source.id()));
                 return None;
             }

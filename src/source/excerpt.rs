@@ -34,7 +34,9 @@ pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
         let entries = entries(problem, index, source, &wanted);
         (attachment_name(source.id()), text(source, &entries))
     };
-    problem.sources.iter().enumerate().map(excerpt).collect()
+    let sources = problem.sources.iter().enumerate();
+    let sources = sources.filter(|(index, _)| *index != problem.case_source);
+    sources.map(excerpt).collect()
 }
 
 /// What a source counts from another reference state costs the enthalpy of that state, which

@@ -103,6 +103,7 @@ fn heat_capacity(range: &GlennRange) -> Option<HeatCapacity> {
         range: Some([kelvin(&range.low)?, kelvin(&range.high)?]),
         coefficients: coefficients.collect::<Option<Vec<_>>>()?,
         points: Vec::new(),
+        uncertainty: None,
     })
 }
 

@@ -6,6 +6,7 @@
 
 mod allowances;
 mod builtin;
+mod case_values;
 mod choose;
 mod compare;
 mod consult;
@@ -19,28 +20,37 @@ mod index_tests;
 mod matching;
 mod model;
 mod molar_mass;
+mod path;
+mod path_findings;
+mod path_values;
 mod problem;
 mod read;
 mod read_entry;
+mod read_heat_capacity;
 mod reference_states;
 mod resolve;
 mod search;
+mod stable;
 mod standing;
 mod store;
 mod suggest;
+mod transitions;
 mod unbalanced;
+mod walk;
 
 pub use builtin::{BUILT_IN, built_in};
 pub use consult::{Consultation, SourceFiles, consult};
 pub use excerpt::{attachment_name, excerpts};
-pub use heat_capacity::{Form, HeatCapacity};
+pub use heat_capacity::{Form, FunctionTerm, HeatCapacity};
 pub use model::{Digits, Entry, SourceHead, Subject};
+pub use path::reference_kelvin;
 pub use problem::{
-    Comparison, Judgement, Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
+    Comparison, EnthalpyPath, Judgement, Leg, Problem, ProblemReaction, ProblemTerm, Start,
+    Substance, ValueKind, ValueUsed,
 };
 pub use read::{Provenance, read_source, sha256_hex};
 pub use reference_states::ReferenceStates;
 pub use resolve::resolve;
 pub use search::{Hit, search};
 pub use standing::Standing;
-pub use store::Source;
+pub use store::{CASE, Source};

@@ -7,16 +7,17 @@ use super::heat_capacity::HeatCapacity;
 use super::standing::Standing;
 
 /// What the table says with its digits.
-#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq)]
 pub enum Digits {
     /// The printed digits are significant (ASTM E29).
+    #[default]
     Significant,
     /// The table prints a fixed number of decimals whatever is known.
     FixedDecimals,
 }
 
 /// A published table, report, standard or laboratory sheet: what is said once for all entries.
-#[derive(Clone, Debug)]
+#[derive(Clone, Debug, Default)]
 pub struct SourceHead {
     pub id: String,
     pub title: String,

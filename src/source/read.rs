@@ -2,13 +2,16 @@
 
 use std::collections::{BTreeMap, BTreeSet};
 
+use num_traits::Signed;
 use sha2::{Digest, Sha256};
 
 use crate::document::{Document, Reader, Table, one_of, quantity, unit, value_fault};
 use crate::document::{species, with_document};
 use crate::finding::{FaultCode, Faults, Located, Span, Text};
 use crate::notation::Element;
-use crate::quantity::{Coverage, Decimal, Dimension, Quantity, StatedUncertainty, Unit, UnitKind};
+use crate::quantity::{
+    Coverage, Decimal, Dimension, Exact, Quantity, StatedUncertainty, Unit, UnitKind,
+};
 
 use super::model::{Digits, Entry, Erratum, SourceHead, StatedCorrelation};
 use super::read_entry::{EntryRules, read_entry};
@@ -138,17 +141,33 @@ fn require_for_entries(table: &Table<'_, '_>, head: &SourceHead, entries: &[Entr
             "state the reference temperature: temperature = \"298.15 K\"",
         );
     }
-    let stated = entries
-        .iter()
-        .flat_map(|e| [&e.formation_enthalpy, &e.atomic_weight]);
-    let mut stated = stated.flatten().filter_map(|q| q.uncertainty.as_ref());
-    let expanded = stated.any(|u| matches!(u, StatedUncertainty::Expanded { .. }));
-    if expanded && head.coverage_text.is_none() {
+    if entries.iter().any(states_expanded) && head.coverage_text.is_none() {
         table.missing(
             "coverage",
             "say what ± covers in this table: coverage = \"2\" for about 95 %",
         );
     }
+    let mut functions = entries.iter().flat_map(|entry| &entry.heat_capacity);
+    let fitted = functions.any(|function| function.form.needs_gas_constant());
+    if fitted && head.gas_constant.is_none() && table.get("gas-constant").is_none() {
+        table.missing(
+            "gas-constant",
+            "state the R that the functions were fitted with (NASA TM-4513: 8.31451)",
+        );
+    }
+}
+
+/// Whether an entry states an uncertainty that needs the coverage of the table.
+fn states_expanded(entry: &Entry) -> bool {
+    let values = [
+        &entry.formation_enthalpy,
+        &entry.combustion_enthalpy,
+        &entry.atomic_weight,
+    ];
+    let heats = entry.transitions.iter().map(|t| &t.enthalpy);
+    let mut stated = values.into_iter().flatten().chain(heats);
+    let expanded = |q: &Quantity| matches!(q.uncertainty, Some(StatedUncertainty::Expanded { .. }));
+    stated.any(expanded) || entry.heat_capacity.iter().any(|f| f.uncertainty.is_some())
 }
 
 /// Two entries that nothing tells apart would make each other useless.
@@ -200,7 +219,7 @@ fn read_head(table: &Table<'_, '_>, text: &Text) -> SourceHead {
             .as_ref()
             .map_or(Coverage::default(), |text| read_coverage(reader, text)),
         coverage_text: coverage.map(|text| text.value),
-        gas_constant: constant.and_then(|text| read_decimal(reader, &text)),
+        gas_constant: constant.and_then(|text| read_gas_constant(reader, &text)),
         digits: read_digits(table),
         standing: read_standing(table).unwrap_or(Standing::EnteredOnce),
         reference_states: read_reference_states(table),
@@ -220,7 +239,26 @@ pub(super) fn read_temperature(reader: &Reader<'_>, text: &Located<String>) -> O
         );
         return None;
     }
-    Some(read)
+    above_zero_kelvin(reader, text, &read.value_in_si()).then_some(read)
+}
+
+/// Whether a temperature is above absolute zero; reported where it is not.
+pub(super) fn above_zero_kelvin(
+    reader: &Reader<'_>,
+    text: &Located<String>,
+    kelvin: &Exact,
+) -> bool {
+    let above = kelvin.is_positive();
+    if !above {
+        value_fault(
+            reader,
+            &text.span,
+            format!("\"{}\"", text.value),
+            "a temperature above 0 K",
+            "check the sign and the unit; leave out a point at 0 K",
+        );
+    }
+    above
 }
 
 /// A quantity that measures what is asked for.
@@ -318,6 +356,24 @@ pub(super) fn read_decimal(reader: &Reader<'_>, text: &Located<String>) -> Optio
     decimal.ok()
 }
 
+/// R in J/(mol K). The oldest tables that give joules have 8.3136 (from memory), so the bounds leave
+/// room for every one that was in use and for none in another unit.
+fn read_gas_constant(reader: &Reader<'_>, text: &Located<String>) -> Option<Decimal> {
+    let read = read_decimal(reader, text)?;
+    let bounds = [830, 833].map(|hundredths: i32| Exact::new(hundredths.into(), 100.into()));
+    if (&bounds[0]..=&bounds[1]).contains(&&read.value()) {
+        return Some(read);
+    }
+    value_fault(
+        reader,
+        &text.span,
+        format!("\"{}\"", text.value),
+        "a gas constant in J/(mol K), near 8.314",
+        "give the R that the functions were fitted with (NASA TM-4513: 8.31451)",
+    );
+    None
+}
+
 fn read_digits(table: &Table<'_, '_>) -> Digits {
     const CHOICES: [(&str, Digits); 2] = [
         ("significant", Digits::Significant),
@@ -390,7 +446,7 @@ fn read_correlation(table: &Table<'_, '_>) -> Option<StatedCorrelation> {
         .collect();
     let coefficient = table.required_string("coefficient", "state r, between -1 and 1")?;
     let decimal = read_decimal(reader, &coefficient)?;
-    let one = crate::quantity::Exact::from_integer(1.into());
+    let one = Exact::from_integer(1.into());
     if decimal.value() > one || decimal.value() < -one {
         value_fault(
             reader,

@@ -3,21 +3,25 @@
 use std::cell::OnceCell;
 use std::collections::{BTreeMap, BTreeSet};
 
-use crate::case::{Case, DeclaredKind, Reaction};
+use crate::case::{Case, DeclaredKind, Given, Reaction};
 use crate::finding::{Fault, FaultCode, Faults, Finding, Span, Text};
 use crate::notation::{Element, Participant, Species};
-use crate::quantity::{Correlations, Exact, Quantity, to_f64};
+use crate::quantity::{Correlations, Decimal, Exact, Quantity, to_f64};
 
 use super::builtin::ATOMIC_WEIGHTS;
-use super::choose::{Chosen, choose};
+use super::choose::choose;
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
-use super::model::{Digits, Entry, SourceHead, Subject};
-use super::problem::{Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed};
+use super::model::{Entry, SourceHead, Subject};
+use super::path::{Candidate, reference_kelvin};
+use super::problem::{
+    EnthalpyPath, Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
+};
 use super::reference_states::ReferenceStates;
+use super::stable::is_stable;
 use super::store::Source;
-use crate::quantity::{InputUncertainty, Significance};
+use crate::quantity::InputUncertainty;
 
 /// Resolves every substance of a case. All faults are reported; the problem is there only where
 /// there are none.
@@ -52,13 +56,22 @@ pub(super) struct Resolver<'a> {
     pub(super) case: &'a Case,
     pub(super) text: &'a Text,
     pub(super) sources: Vec<Source>,
-    consulted: usize,
+    pub(super) consulted: usize,
     became: Vec<(String, usize)>,
     /// By the label of the case; none where it could not be resolved, so that the fault is
     /// reported once.
-    known: BTreeMap<String, Option<usize>>,
+    known: BTreeMap<(String, Option<Exact>), Option<usize>>,
     pub(super) substances: Vec<Substance>,
+    /// For each substance the entry that serves, and what was asked for.
+    pub(super) serving: Vec<Serving>,
+    pub(super) paths: Vec<EnthalpyPath>,
+    pub(super) known_paths: BTreeMap<(usize, Exact), Option<usize>>,
     pub(super) values: Vec<ValueUsed>,
+    /// Values that were entered, by source, kind and what tells them apart.
+    pub(super) entered: BTreeMap<(usize, &'static str, String), usize>,
+    /// What was said, so that it is said once.
+    pub(super) said: BTreeSet<String>,
+    pub(super) case_source: usize,
     pub(super) atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
@@ -66,13 +79,30 @@ pub(super) struct Resolver<'a> {
     listed: OnceCell<Vec<Entry>>,
 }
 
+/// What serves for a substance.
+#[derive(Clone, Debug)]
+pub(super) struct Serving {
+    pub(super) source: usize,
+    pub(super) entry: Entry,
+    pub(super) wanted: Wanted,
+}
+
 impl<'a> Resolver<'a> {
     fn new(case: &'a Case, text: &'a Text, consultation: Consultation) -> Resolver<'a> {
+        let mut sources = consultation.sources;
+        let consulted = sources.len();
+        sources.push(Source::case(text, &case.record.preparer));
         Resolver {
             case,
             text,
-            consulted: consultation.sources.len(),
-            sources: consultation.sources,
+            consulted,
+            case_source: consulted,
+            sources,
+            serving: Vec::new(),
+            paths: Vec::new(),
+            known_paths: BTreeMap::new(),
+            entered: BTreeMap::new(),
+            said: BTreeSet::new(),
             became: consultation.became,
             known: BTreeMap::new(),
             substances: Vec::new(),
@@ -86,12 +116,12 @@ impl<'a> Resolver<'a> {
 
     /// Whether the case names a substance in what it works.
     pub(super) fn is_participant(&self, label: &str) -> bool {
-        self.known.contains_key(label)
+        self.known.keys().any(|(known, _)| known == label)
     }
 
     /// The substances that the case names in what it works, each as it writes it.
     pub(super) fn participants(&self) -> impl Iterator<Item = &str> {
-        self.known.keys().map(String::as_str)
+        self.known.keys().map(|(known, _)| known.as_str())
     }
 
     /// All entries of the sources.
@@ -125,6 +155,8 @@ impl<'a> Resolver<'a> {
             // The conventions are always the first source.
             reference_states: ReferenceStates::of(&self.sources[0], elements),
             consulted: self.consulted,
+            case_source: self.case_source,
+            paths: self.paths,
             became: self.became,
             substances: self.substances,
             values: self.values,
@@ -138,6 +170,7 @@ impl<'a> Resolver<'a> {
     fn reaction(&mut self, reaction: &Reaction) -> Option<ProblemReaction> {
         let equation = &reaction.equation;
         self.check_balance(reaction);
+        let (kelvin, temperature_value) = self.temperature(reaction.temperature.as_ref());
         let sides = [(&equation.value.left, -1), (&equation.value.right, 1)];
         let mut terms = Vec::new();
         let mut complete = true;
@@ -146,20 +179,27 @@ impl<'a> Resolver<'a> {
             .flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
         {
             let place = self.text.inside(&equation.span, &term.span);
-            let Some(substance) = self.participant(&term.participant, &place) else {
+            let Some(substance) = self.participant(&term.participant, &kelvin, &place) else {
                 complete = false;
                 continue;
             };
             let nu = &term.coefficient * Exact::from_integer((*sign).into());
-            terms.push(ProblemTerm { substance, nu });
+            let path = self.path(substance, &kelvin, &place);
+            terms.push(ProblemTerm {
+                substance,
+                nu,
+                path,
+            });
         }
         if !complete {
-            return None;
+            // A fault says why, and then there is no problem; or a `stop`.
+            terms.clear();
         }
         let all = equation.value.left.iter().chain(&equation.value.right);
         let names: Vec<String> = all.map(|term| term.participant.to_string()).collect();
         let per = reaction.per.as_ref();
         let per = per.and_then(|per| names.iter().position(|name| *name == per.value));
+        let per = per.filter(|_| complete);
         let molar_mass = per.map_or_else(Vec::new, |index| {
             let species = self.substances[terms[index].substance].species.clone();
             self.molar_mass(reaction, &species)
@@ -170,20 +210,43 @@ impl<'a> Resolver<'a> {
             terms,
             per,
             molar_mass,
-            temperature: reaction.temperature.clone().map(|t| (t.value, t.span)),
+            kelvin,
+            temperature_value,
             span: equation.span.clone(),
         })
     }
 
-    fn participant(&mut self, participant: &Participant, span: &Span) -> Option<usize> {
+    /// The temperature of a heat in K, and the input that states it where there is one.
+    pub(super) fn temperature(&mut self, given: Option<&Given>) -> (Exact, Option<usize>) {
+        let quantity = given.and_then(|given| given.quantity(&self.case.inputs));
+        let kelvin = quantity.map_or_else(reference_kelvin, Quantity::value_in_si);
+        let value = match given {
+            // An exact temperature is the question, not a value that the answer rests on.
+            Some(Given::Input(id)) if quantity.is_some_and(|q| !q.exact) => {
+                self.input_value(&id.value)
+            }
+            _ => None,
+        };
+        (kelvin, value)
+    }
+
+    /// A participant as the case writes it, in the form that it has at a temperature in K.
+    pub(super) fn participant(
+        &mut self,
+        participant: &Participant,
+        kelvin: &Exact,
+        span: &Span,
+    ) -> Option<usize> {
         let label = participant.to_string();
-        if let Some(known) = self.known.get(&label) {
+        let wanted = self.wanted(participant);
+        // Which form is stable depends on the temperature.
+        let stable = wanted.as_ref().is_some_and(is_stable);
+        let key = (label, stable.then(|| kelvin.clone()));
+        if let Some(known) = self.known.get(&key) {
             return *known;
         }
-        let found = self
-            .wanted(participant)
-            .and_then(|wanted| self.substance(&wanted, span));
-        self.known.insert(label, found);
+        let found = wanted.and_then(|wanted| self.substance(&wanted, kelvin, span));
+        self.known.insert(key, found);
         found
     }
 
@@ -216,10 +279,22 @@ impl<'a> Resolver<'a> {
         }
     }
 
-    fn substance(&mut self, wanted: &Wanted, span: &Span) -> Option<usize> {
-        let chosen = choose(self, wanted, span)?;
-        let value = self.value_used(&chosen, span);
-        let comparisons = compare(self, wanted, &chosen, &self.values[value].clone(), span);
+    fn substance(&mut self, wanted: &Wanted, kelvin: &Exact, span: &Span) -> Option<usize> {
+        let chosen = choose(self, wanted, kelvin, span)?;
+        let candidate = Candidate {
+            source: chosen.source,
+            entry: chosen.entry.clone(),
+        };
+        let value = self.formation_value(&candidate, span);
+        let comparisons = match value {
+            Some(value) => compare(self, wanted, &chosen, &self.values[value].clone(), span),
+            None => Vec::new(),
+        };
+        self.serving.push(Serving {
+            source: chosen.source,
+            entry: chosen.entry.clone(),
+            wanted: wanted.clone(),
+        });
         // `choose` returns entries of species alone.
         let species = chosen
             .entry
@@ -230,45 +305,12 @@ impl<'a> Resolver<'a> {
             label: wanted.label.clone(),
             species,
             name: chosen.entry.name.clone(),
+            source: chosen.source,
             value,
             comparisons,
             because: chosen.because.clone(),
         });
         Some(self.substances.len() - 1)
-    }
-
-    /// The same entry under two labels is one value.
-    fn value_used(&mut self, chosen: &Chosen, span: &Span) -> usize {
-        let printed = chosen.value.clone();
-        let entry = &chosen.entry;
-        let substance = entry.species().map_or_else(String::new, Species::to_string);
-        let same = |v: &ValueUsed| {
-            v.source == chosen.source
-                && v.substance == substance
-                && (&v.name, &v.cas, &v.locator) == (&entry.name, &entry.cas, &entry.locator)
-        };
-        if let Some(index) = self.values.iter().position(same) {
-            return index;
-        }
-        let head = &self.sources[chosen.source].head;
-        let significance = match (printed.exact, head.digits) {
-            (true, _) => Significance::Exact,
-            (false, Digits::FixedDecimals) => Significance::Unlimited,
-            (false, Digits::Significant) => printed.significance(),
-        };
-        let value = ValueUsed {
-            significance,
-            ..value_of(
-                chosen.source,
-                head,
-                ValueKind::FormationEnthalpy,
-                entry,
-                printed,
-                span,
-            )
-        };
-        self.values.push(value);
-        self.values.len() - 1
     }
 
     /// A choice for a substance that no reaction names is a slip that should not pass.
@@ -331,9 +373,11 @@ impl<'a> Resolver<'a> {
             for stated in &source.correlations {
                 let of = |wanted: &Species| {
                     let name = wanted.to_string();
-                    self.values
-                        .iter()
-                        .position(|v| v.source == index && v.substance == name)
+                    self.values.iter().position(|v| {
+                        v.source == index
+                            && v.substance == name
+                            && v.kind == ValueKind::FormationEnthalpy
+                    })
                 };
                 if let (Some(a), Some(b)) = (of(&stated.between[0]), of(&stated.between[1])) {
                     // The reader of sources has checked that the coefficient is one.
@@ -367,11 +411,19 @@ pub(super) fn value_of(
         significance: printed.significance(),
         uncertainty: input_uncertainty(&printed, head),
         printed,
+        function: None,
         locator: entry.locator.clone(),
         note: entry.note.clone(),
         standing: entry.standing,
         used_at: span.clone(),
     }
+}
+
+/// The R that the functions of a source were fitted with, J/(mol K); where it states none it has
+/// no function that needs one.
+pub(super) fn gas_constant(head: &SourceHead) -> Exact {
+    let stated = head.gas_constant.as_ref();
+    stated.map_or_else(|| Exact::from_integer(0.into()), Decimal::value)
 }
 
 fn input_uncertainty(printed: &Quantity, head: &SourceHead) -> InputUncertainty {

@@ -1,7 +1,7 @@
 //! How far an entry was verified.
 
 /// The standing of an entry, from the weakest to the strongest.
-#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq, PartialOrd, Ord)]
 pub enum Standing {
     FromMemory,
     EnteredOnce,
@@ -9,9 +9,13 @@ pub enum Standing {
     ComparedWithOriginal,
     /// Not measured but agreed: reference states, exact constants.
     ByDefinition,
+    /// Stated by the case itself; what confirms it stands among the inputs and assumptions.
+    #[default]
+    Stated,
 }
 
 impl Standing {
+    /// Those that an entry of a source can have.
     pub const ALL: [Standing; 5] = [
         Standing::FromMemory,
         Standing::EnteredOnce,
@@ -27,6 +31,7 @@ impl Standing {
             Standing::DoubleEntered => "double-entered",
             Standing::ComparedWithOriginal => "compared with the original",
             Standing::ByDefinition => "by definition",
+            Standing::Stated => "stated in the case",
         }
     }
 

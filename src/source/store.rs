@@ -3,12 +3,15 @@
 use std::collections::BTreeMap;
 
 use super::model::{Entry, Erratum, SourceHead, StatedCorrelation, Subject};
-use super::read::{Provenance, read_source};
+use super::read::{Provenance, read_source, sha256_hex};
 use super::read_entry::{EntryRules, read_entry};
 use super::{glenn_entries, index};
 use crate::document::with_document;
 use crate::finding::Text;
 use crate::notation::{Element, Species};
+
+/// The id of the source that stands for the case.
+pub const CASE: &str = "case";
 
 /// A source as it is consulted.
 #[derive(Clone, Debug)]
@@ -60,6 +63,18 @@ impl Source {
                 by_composition,
             },
         }
+    }
+
+    /// The source that stands for what the case itself states.
+    pub(super) fn case(text: &Text, preparer: &str) -> Source {
+        let head = SourceHead {
+            id: CASE.to_string(),
+            title: "Stated in this case".to_string(),
+            authors: Some(preparer.to_string()),
+            sha256: sha256_hex(text.as_str().as_bytes()),
+            ..SourceHead::default()
+        };
+        Source::listed(head, Vec::new(), Vec::new(), Vec::new())
     }
 
     /// The NASA Glenn source.

@@ -9,6 +9,7 @@ use super::builtin::{ATOMIC_WEIGHTS, BUILT_IN, built_in};
 use super::matching::{Match, Wanted, pick};
 use super::model::Entry;
 use super::resolve::Resolver;
+use super::store::CASE;
 
 /// How many candidates a message names.
 const MOST: usize = 6;
@@ -42,7 +43,7 @@ fn source_ids<'r>(resolver: &'r Resolver<'_>) -> Vec<&'r str> {
     let listing = resolver
         .sources
         .iter()
-        .filter(|source| source.id() != ATOMIC_WEIGHTS);
+        .filter(|source| ![ATOMIC_WEIGHTS, CASE].contains(&source.id()));
     listing.map(|source| source.id()).collect()
 }
 
@@ -226,10 +227,8 @@ pub(super) fn no_enthalpy(
     source: usize,
     entry: &Entry,
 ) -> Fault {
-    let function = !entry.heat_capacity.is_empty();
     let why = match &entry.note {
         Some(note) => format!("{note}. "),
-        None if function => "its function of temperature is not worked by this version. ".into(),
         None => String::new(),
     };
     Fault::new(
@@ -237,7 +236,7 @@ pub(super) fn no_enthalpy(
         resolver.text,
         span,
         format!(
-            "{} in {}, without a formation enthalpy at its reference temperature",
+            "{} in {}, without a formation enthalpy",
             label(entry),
             resolver.sources[source].id()
         ),

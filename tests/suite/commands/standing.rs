@@ -26,7 +26,7 @@ fn a_stop_ends_with_one_and_is_issued_as_preliminary_alone() {
     let computed = compute(&folder);
     assert_eq!(computed.status, 1);
     assert_eq!(
-        severity(&computed, "temperature-not-worked").as_deref(),
+        severity(&computed, "heat-capacity-missing").as_deref(),
         Some("stop")
     );
     let refused = folder.run(&["issue", "a.toml", "--json"]);

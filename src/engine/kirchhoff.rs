@@ -1,0 +1,189 @@
+//! Enthalpies at a temperature, and the heat of a reaction there.
+
+use crate::quantity::{Exact, LinearForm, Real, Significance, Unit};
+use crate::source::{EnthalpyPath, HeatCapacity, Leg, Problem, Start, ValueUsed};
+
+use super::worked::Worked;
+
+/// What one participant adds to a heat at a temperature.
+#[derive(Clone, Debug)]
+pub struct HeatTerm {
+    /// Index among the substances of the problem.
+    pub substance: usize,
+    /// Index among the paths of the problem.
+    pub path: usize,
+    /// Stoichiometric number, negative for reactants.
+    pub nu: Exact,
+    /// Where the path starts, J/mol.
+    pub start: Worked,
+    /// What its legs add, J/mol, in their order.
+    pub legs: Vec<Worked>,
+    /// The sum of both, J/mol.
+    pub molar: Worked,
+    /// ν times the molar enthalpy, in the unit of the sum.
+    pub contribution: Worked,
+}
+
+/// The heat of a reaction at a temperature, per mole of reaction as written.
+#[derive(Clone, Debug)]
+pub struct HeatAt {
+    pub terms: Vec<HeatTerm>,
+    pub sum: Worked,
+}
+
+/// Δ_rH°(T) = Σ ν_i·H_i(T) in `unit` (energy per amount of substance), where
+/// H_i(T) = Δ_fH°_i(298.15 K) + ∫ C_p,i dT + Σ Δ_trsH_i along the path of each participant.
+/// G. Kirchhoff, Ann. Phys. Chem. 103 (1858) 177 (from memory).
+///
+/// Exact where every function is rational in the temperature. Limits: ideal gases and pure
+/// condensed phases at standard pressure; heat capacities inside the ranges of their functions
+/// (the resolver sees to that); the reference state of the elements stays at 298.15 K.
+pub fn heat_at(problem: &Problem, terms: &[(usize, Exact)], unit: &Unit) -> HeatAt {
+    let terms: Vec<HeatTerm> = terms
+        .iter()
+        .map(|(path, nu)| heat_term(problem, *path, nu, unit))
+        .collect();
+    HeatAt {
+        sum: Worked::sum(terms.iter().map(|term| &term.contribution)),
+        terms,
+    }
+}
+
+fn heat_term(problem: &Problem, path: usize, nu: &Exact, unit: &Unit) -> HeatTerm {
+    let (start, legs) = parts(problem, &problem.paths[path]);
+    let molar = Worked::sum(std::iter::once(&start).chain(&legs));
+    HeatTerm {
+        substance: problem.paths[path].substance,
+        path,
+        nu: nu.clone(),
+        contribution: molar.times_exact(&(nu / unit.factor())),
+        start,
+        legs,
+        molar,
+    }
+}
+
+/// The molar enthalpy at the end of a path, J/mol.
+pub fn molar_enthalpy(problem: &Problem, path: &EnthalpyPath) -> Worked {
+    let (start, legs) = parts(problem, path);
+    Worked::sum(std::iter::once(&start).chain(&legs))
+}
+
+fn parts(problem: &Problem, path: &EnthalpyPath) -> (Worked, Vec<Worked>) {
+    let legs = path.legs.iter().map(|leg| leg_enthalpy(problem, leg));
+    (start_enthalpy(problem, path), legs.collect())
+}
+
+fn start_enthalpy(problem: &Problem, path: &EnthalpyPath) -> Worked {
+    match path.start {
+        Start::Printed { value } => Worked::printed(problem, value, 1),
+        Start::Function { value } => {
+            let (function, r) = function(problem, value);
+            let mut form = LinearForm::default();
+            // The integration constant is as uncertain as the function from 298.15 K on.
+            let way = &path.kelvin - crate::source::reference_kelvin();
+            form.add_scaled(value, &Real::Exact(way));
+            Worked {
+                value: worked(function.enthalpy(&path.kelvin, &r)),
+                significance: Significance::Unlimited,
+                form,
+            }
+        }
+    }
+}
+
+fn leg_enthalpy(problem: &Problem, leg: &Leg) -> Worked {
+    match leg {
+        Leg::Heating { value, from, to } => heating(problem, *value, from, to),
+        Leg::Scale {
+            from_value,
+            from,
+            to_value,
+            to,
+        } => scale(problem, (*from_value, from), (*to_value, to)),
+        Leg::Transition { value, forward, .. } => {
+            let sign = if *forward { 1 } else { -1 };
+            Worked::printed(problem, *value, sign)
+        }
+    }
+}
+
+/// ∫ C_p dT along one function. An error of the heat capacity that is the same over the range
+/// counts with the length of the way.
+fn heating(problem: &Problem, value: usize, from: &Exact, to: &Exact) -> Worked {
+    let (function, r) = function(problem, value);
+    let increment = worked(function.increment(from, to, &r));
+    let way = to - from;
+    let mut form = LinearForm::default();
+    form.add_scaled(value, &Real::Exact(way.clone()));
+    Worked {
+        significance: heating_significance(&problem.values[value], &increment, &way),
+        value: increment,
+        form,
+    }
+}
+
+/// A constant heat capacity gives its increment as many digits as it has itself.
+fn heating_significance(value: &ValueUsed, increment: &Real, way: &Exact) -> Significance {
+    match (value.significance, increment.to_exact()) {
+        (Significance::Place(_), Some(increment)) if *way != Exact::from_integer(0.into()) => {
+            let heat_capacity = &increment / way;
+            value.significance.times_exact(&heat_capacity, way)
+        }
+        (other, _) => other,
+    }
+}
+
+/// H_b(T_b) − H_a(T_a) of two functions whose integration constants share one scale.
+fn scale(problem: &Problem, from: (usize, &Exact), to: (usize, &Exact)) -> Worked {
+    let (start, r) = function(problem, from.0);
+    let (end, _) = function(problem, to.0);
+    let difference = worked(end.enthalpy(to.1, &r)).minus(&worked(start.enthalpy(from.1, &r)));
+    let bound = end.range_kelvin().map(|[low, high]| match to.1 > from.1 {
+        true => low,
+        false => high,
+    });
+    let bound = bound.unwrap_or_else(|| from.1.clone());
+    let mut form = LinearForm::default();
+    form.add_scaled(from.0, &Real::Exact(&bound - from.1));
+    form.add_scaled(to.0, &Real::Exact(to.1 - &bound));
+    Worked {
+        value: difference,
+        significance: Significance::Unlimited,
+        form,
+    }
+}
+
+fn function(problem: &Problem, value: usize) -> (&HeatCapacity, Exact) {
+    let used = &problem.values[value];
+    let head = &problem.sources[used.source].head;
+    let r = head.gas_constant.as_ref();
+    let r = r.map_or_else(|| Exact::from_integer(0.into()), |r| r.value());
+    // Paths name values that are functions: the resolver makes both together.
+    (
+        used.function.as_ref().expect("a path runs along functions"),
+        r,
+    )
+}
+
+/// The resolver has seen to it that the function reaches.
+fn worked(value: Option<Real>) -> Real {
+    value.unwrap_or(Real::Float(f64::NAN))
+}
+
+/// ΔC_p = Σ ν_i·C_p,i(T), J/(mol K), where every path knows its heat capacity at the end.
+pub(super) fn heat_capacity_change(
+    problem: &Problem,
+    terms: &[(usize, Exact)],
+    kelvin: &Exact,
+) -> Option<f64> {
+    let mut sum = 0.0;
+    for (path, nu) in terms {
+        let end = problem.paths[*path].end?;
+        let (function, r) = function(problem, end);
+        let at = crate::quantity::to_f64(kelvin);
+        let cp = function.at(at, crate::quantity::to_f64(&r))?;
+        sum += crate::quantity::to_f64(nu) * cp;
+    }
+    Some(sum)
+}

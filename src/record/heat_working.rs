@@ -1,0 +1,133 @@
+//! The heat of a reaction at its temperature, participant by participant.
+
+use crate::calculation::Calculation;
+use crate::engine::{HeatAt, HeatTerm, Outcome, Worked};
+use crate::quantity::{Exact, exact_text, working_text};
+use crate::source::{EnthalpyPath, Problem, ProblemReaction, Start};
+
+use super::numerals::{minus, signed, unit};
+use super::pages::{Step, Table};
+use super::path_working::path_steps;
+use super::rich::{Rich, Run};
+use super::symbols::{enthalpy_at_temperature, heat_at_temperature};
+use super::tables::{enthalpy, mark, number, text};
+use super::working::displayed;
+
+/// The steps from the enthalpies at 298.15 K to the heat at the temperature of the reaction.
+pub(super) fn heat_steps(
+    calculation: &Calculation,
+    reaction: &ProblemReaction,
+    heat: &HeatAt,
+    outcome: &Outcome,
+    steps: &mut Vec<Step>,
+) {
+    let problem = &calculation.problem;
+    let kelvin = minus(&exact_text(&reaction.kelvin));
+    steps.push(Step::Heading {
+        text: format!("At {kelvin} K"),
+    });
+    steps.push(displayed(enthalpy_at_temperature()));
+    steps.push(Step::Text {
+        text: Rich::run(Rich::plain(""), Run::Italic("T".into()))
+            .run(Run::Sub("0".into()))
+            .and(" = 298.15 K, ")
+            .run(Run::Italic("T".into()))
+            .and(format!(
+                " = {kelvin} K. The formation enthalpies are those of 298.15 K; the elements are \
+                 not taken along."
+            )),
+    });
+    for term in &heat.terms {
+        steps.extend(path_steps(problem, term));
+    }
+    steps.push(displayed(heat_at_temperature()));
+    steps.push(Step::Table(contributions(problem, heat, outcome)));
+    steps.push(Step::Text {
+        text: substitution(heat, outcome, &kelvin),
+    });
+}
+
+/// ν, substance, rows, H(298.15 K), increment, H(T), ν·H(T).
+fn contributions(problem: &Problem, heat: &HeatAt, outcome: &Outcome) -> Table {
+    let symbol = unit(&outcome.unit);
+    let factor = outcome.unit.factor().recip();
+    let rows = heat.terms.iter().map(|term| row(problem, term, &factor));
+    let blank = Rich::default;
+    let at_temperature = || {
+        Rich::default()
+            .run(Run::Italic("H".into()))
+            .and("(")
+            .run(Run::Italic("T".into()))
+            .and(")")
+    };
+    Table {
+        caption: format!("What each participant adds, in {symbol}"),
+        columns: vec![
+            number(Rich::plain("ν")),
+            text("Substance"),
+            mark("Rows"),
+            number(enthalpy("f")),
+            number(Rich::plain("Increment")),
+            number(at_temperature()),
+            number(Rich::plain("ν·").with(at_temperature())),
+        ],
+        rows: rows.collect(),
+        total: Some(vec![
+            blank(),
+            Rich::plain("Sum"),
+            blank(),
+            blank(),
+            blank(),
+            blank(),
+            Rich::plain(shown(&heat.sum)),
+        ]),
+    }
+}
+
+fn row(problem: &Problem, term: &HeatTerm, factor: &Exact) -> Vec<Rich> {
+    let substance = &problem.substances[term.substance];
+    let path = &problem.paths[term.path];
+    let start = match path.start {
+        Start::Printed { .. } => shown(&term.start.times_exact(factor)),
+        Start::Function { .. } => "–".to_string(),
+    };
+    let increment = match term.legs.is_empty() {
+        true => "–".to_string(),
+        false => shown(&Worked::sum(&term.legs).times_exact(factor)),
+    };
+    vec![
+        Rich::plain(signed(&term.nu)),
+        Rich::from(substance.species.pieces()),
+        marks(path),
+        Rich::plain(start),
+        Rich::plain(increment),
+        Rich::plain(shown(&term.molar.times_exact(factor))),
+        Rich::plain(shown(&term.contribution)),
+    ]
+}
+
+fn marks(path: &EnthalpyPath) -> Rich {
+    let values = path.values();
+    values.into_iter().fold(Rich::default(), |text, value| {
+        text.run(Run::ValueUsed(value + 1))
+    })
+}
+
+/// A number of the working before anything is rounded.
+pub(super) fn shown(worked: &Worked) -> String {
+    minus(&working_text(&worked.value, worked.significance))
+}
+
+fn substitution(heat: &HeatAt, outcome: &Outcome, kelvin: &str) -> Rich {
+    let terms: Vec<String> = heat
+        .terms
+        .iter()
+        .map(|term| format!("({})", shown(&term.contribution)))
+        .collect();
+    enthalpy("r").and(format!(
+        "({kelvin} K) = {} = {} {}; nothing is rounded here, long numbers are cut for print.",
+        terms.join(" + "),
+        shown(&heat.sum),
+        unit(&outcome.unit)
+    ))
+}

@@ -1,0 +1,130 @@
+//! What a path rests on, among the values used.
+
+use crate::finding::Span;
+use crate::quantity::{Quantity, Significance};
+
+use super::heat_capacity::{Form, HeatCapacity};
+use super::model::{Digits, SourceHead};
+use super::path::Candidate;
+use super::problem::{ValueKind, ValueUsed};
+use super::resolve::{Resolver, value_of};
+
+impl Resolver<'_> {
+    /// A heat-capacity function of an entry.
+    pub(super) fn function_value(
+        &mut self,
+        candidate: &Candidate,
+        index: usize,
+        span: &Span,
+    ) -> usize {
+        let Candidate { source, entry } = candidate;
+        let function = &entry.heat_capacity[index];
+        let head = &self.sources[*source].head;
+        let printed = error_of(function);
+        let value = ValueUsed {
+            significance: significance(function),
+            function: Some(function.clone()),
+            ..value_of(*source, head, ValueKind::HeatCapacity, entry, printed, span)
+        };
+        let key = format!("{index} {}", value.locator);
+        self.enter_value(value, &key)
+    }
+
+    /// The heat of a transition that an entry lists.
+    pub(super) fn transition_value(
+        &mut self,
+        candidate: &Candidate,
+        index: usize,
+        span: &Span,
+    ) -> usize {
+        let Candidate { source, entry } = candidate;
+        let transition = &entry.transitions[index];
+        let head = &self.sources[*source].head;
+        let printed = transition.enthalpy.clone();
+        let mut value = value_of(
+            *source,
+            head,
+            ValueKind::TransitionEnthalpy,
+            entry,
+            printed,
+            span,
+        );
+        value.substance = format!(
+            "{} → {} at {}",
+            value.substance, transition.to, transition.temperature
+        );
+        value.species = None;
+        let key = value.substance.clone();
+        self.enter_value(value, &key)
+    }
+
+    /// The printed formation enthalpy of an entry that is not itself a participant.
+    pub(super) fn formation_value(&mut self, candidate: &Candidate, span: &Span) -> Option<usize> {
+        let Candidate { source, entry } = candidate;
+        let printed = entry.formation_enthalpy.clone()?;
+        let head = &self.sources[*source].head;
+        let significance = formation_significance(&printed, head);
+        let value = ValueUsed {
+            significance,
+            ..value_of(
+                *source,
+                head,
+                ValueKind::FormationEnthalpy,
+                entry,
+                printed,
+                span,
+            )
+        };
+        Some(self.enter_value(value, ""))
+    }
+
+    /// The index of a value, which is entered once. `key` tells values of one entry apart.
+    pub(super) fn enter_value(&mut self, value: ValueUsed, key: &str) -> usize {
+        let identity = (
+            value.source,
+            value.kind.word(),
+            [
+                value.substance.as_str(),
+                value.name.as_deref().unwrap_or(""),
+                value.cas.as_deref().unwrap_or(""),
+                value.locator.as_str(),
+                key,
+            ]
+            .join("\n"),
+        );
+        if let Some(index) = self.entered.get(&identity) {
+            return *index;
+        }
+        self.values.push(value);
+        self.entered.insert(identity, self.values.len() - 1);
+        self.values.len() - 1
+    }
+}
+
+/// How many digits a formation enthalpy may claim.
+pub(super) fn formation_significance(printed: &Quantity, head: &SourceHead) -> Significance {
+    match (printed.exact, head.digits) {
+        (true, _) => Significance::Exact,
+        (false, Digits::FixedDecimals) => Significance::Unlimited,
+        (false, Digits::Significant) => printed.significance(),
+    }
+}
+
+/// The error of a function as a quantity: zero, known as well as the source states.
+fn error_of(function: &HeatCapacity) -> Quantity {
+    let stated = function.uncertainty.as_ref();
+    let width = stated.map_or(String::new(), |u| format!(" ± {}", u.printed()));
+    let text = format!("0{width} J/(mol K)");
+    // The reader of sources has checked the uncertainty; the unit is one of the unit table.
+    Quantity::parse(&text)
+        .or_else(|_| Quantity::parse("0 J/(mol K)"))
+        .expect("a plain quantity")
+}
+
+/// A constant keeps the digits that it was printed with; the coefficients of a fit limit none.
+fn significance(function: &HeatCapacity) -> Significance {
+    match (function.form, function.coefficients.first()) {
+        (Form::Constant, Some(constant)) => Significance::Place(constant.coarsest_place()),
+        _ => Significance::Unlimited,
+    }
+}
