@@ -7,7 +7,9 @@ use super::attachments::{Attachment, attached_files};
 use super::manifest::Typesetting;
 use super::pages::{AttachmentRow, CONTRACT, Pages, Program, Stamp};
 use super::working::working_sections;
-use super::{basis_rows, budget, cautions, front, prose, references, result_rows, value_rows};
+use super::{
+    basis_rows, budget, cautions, front, function_rows, prose, references, result_rows, value_rows,
+};
 
 /// A record ready to be typeset.
 #[derive(Clone, Debug)]
@@ -41,6 +43,7 @@ pub fn assemble(calculation: &Calculation, typesetting: &Typesetting) -> Record 
         results: result_rows::result_rows(calculation),
         basis: basis_rows::basis(&calculation.case),
         values_used: value_rows::value_rows(&calculation.problem),
+        functions: function_rows::function_rows(&calculation.problem),
         comparisons: value_rows::comparison_rows(&calculation.problem),
         working: working_sections(calculation),
         budgets: budget::budgets(calculation),

@@ -9,6 +9,7 @@ mod budget;
 mod cautions;
 mod formation_table;
 mod front;
+mod function_rows;
 mod heat_working;
 mod manifest;
 mod math;

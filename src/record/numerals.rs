@@ -21,9 +21,24 @@ fn power_of_ten(mantissa: &str, rest: &str) -> String {
     let digits = |c: char| c.is_ascii_digit() || c == '+' || c == '\u{2212}';
     let end = rest.find(|c| !digits(c)).unwrap_or(rest.len());
     let (exponent, after) = rest.split_at(end);
+    let sign = if exponent.starts_with('\u{2212}') {
+        "\u{2212}"
+    } else {
+        ""
+    };
+    // +04 is 4: the zeros of an exponent are no digits of the value.
+    let size = exponent
+        .trim_start_matches(['+', '\u{2212}'])
+        .trim_start_matches('0');
+    let size = match (size, exponent) {
+        ("", "") => "",
+        ("", _) => "0",
+        (size, _) => size,
+    };
+    let exponent = format!("{sign}{size}");
     match exponent.is_empty() {
         true => format!("{mantissa}e{after}"),
-        false => format!("{mantissa}\u{a0}×\u{a0}10{}{after}", superscript(exponent)),
+        false => format!("{mantissa}\u{a0}×\u{a0}10{}{after}", superscript(&exponent)),
     }
 }
 
@@ -96,6 +111,8 @@ mod tests {
         assert_eq!(minus("-285.830"), "−285.830");
         assert_eq!(minus("1.200e3 kg"), "1.200\u{a0}×\u{a0}10³ kg");
         assert_eq!(minus("-1.5E-12"), "−1.5\u{a0}×\u{a0}10⁻¹²");
+        assert_eq!(minus("4.07e+04"), "4.07\u{a0}×\u{a0}10⁴");
+        assert_eq!(minus("8.21e+00"), "8.21\u{a0}×\u{a0}10⁰");
         assert_eq!(minus("exact 0"), "exact 0");
         assert_eq!(minus("2.1 kJ/(kg K)"), "2.1 kJ/(kg K)");
     }

@@ -27,6 +27,8 @@ pub struct Pages {
     pub results: Vec<ResultRow>,
     pub basis: Basis,
     pub values_used: Vec<ValueRow>,
+    /// The heat-capacity functions among the values used.
+    pub functions: Vec<FunctionRow>,
     pub comparisons: Vec<ComparisonRow>,
     pub working: Vec<WorkingSection>,
     pub budgets: Vec<Budget>,
@@ -209,6 +211,23 @@ pub struct ValueRow {
     pub standing: String,
     /// First 16 hexadecimal digits of the source's SHA-256 (in full in the reference list).
     pub sha256: String,
+}
+
+/// A heat-capacity function with what the source prints of it.
+#[derive(Clone, Debug, Serialize, Deserialize)]
+#[serde(rename_all = "kebab-case")]
+pub struct FunctionRow {
+    /// Number of the value used.
+    pub value_used: usize,
+    pub substance: Rich,
+    /// `nasa-9`
+    pub form: String,
+    /// "200 K to 1000 K", or nothing.
+    pub range: String,
+    /// The equation of the form, in plain characters.
+    pub equation: String,
+    /// Name and number of each coefficient, or temperature and heat capacity of each point.
+    pub numbers: Vec<(String, String)>,
 }
 
 /// The same value in another source that the case consults.

@@ -51,9 +51,9 @@ fn rule(outcome: &Outcome) -> String {
         ),
         StatedBy::FixedDecimals => format!(
             "The uncertainty does not cover every value, and a table with a fixed number of \
-             decimals is among the sources: its digits limit nothing, and the result is stated to \
-             0.1 kJ/mol or 1 kJ/kg at the finest (practice of this program). With the digits of \
-             the other values (ASTM E29), {}.",
+             decimals, or a function of temperature, is among them: its digits limit nothing, and \
+             the result is stated to 0.1 kJ/mol or 1 kJ/kg at the finest (practice of this \
+             program). With the digits of the other values (ASTM E29), {}.",
             last_place(outcome.significance)
         ),
         StatedBy::Rounding => "The case names the place ([rounding]).".to_string(),

@@ -1,8 +1,9 @@
 //! The table of values used, and what other sources say of the same values.
 
 use crate::quantity::{terminating_decimal, to_f64, two_digits};
-use crate::source::{Comparison, Judgement, Problem, Substance, ValueKind, ValueUsed};
+use crate::source::{Comparison, Form, Judgement, Problem, Substance, ValueUsed};
 
+use super::function_rows::range;
 use super::numerals::{minus, printed_number, unit};
 use super::pages::{ComparisonRow, ValueRow};
 use super::references::numbers;
@@ -21,7 +22,7 @@ pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
             substance: substance(value),
             name: value.name.clone(),
             cas: value.cas.clone(),
-            quantity: quantity(value.kind),
+            quantity: quantity(value),
             printed: printed_value(value),
             unit: unit(&value.printed.unit),
             // Every source of a value used is in the reference list.
@@ -43,15 +44,26 @@ pub(super) fn substance(value: &ValueUsed) -> Rich {
     }
 }
 
-fn quantity(kind: ValueKind) -> String {
-    kind.word().replace('-', " ")
+fn quantity(value: &ValueUsed) -> String {
+    let kind = value.kind.word().replace('-', " ");
+    match &value.function {
+        Some(function) => format!("{kind}, {}, {}", function.form.word(), range(function)),
+        None => kind,
+    }
 }
 
-/// As the source prints it; a function with its form, its range and its coefficients.
+/// As the source prints it; of a function the constant, or where its coefficients stand.
 fn printed_value(value: &ValueUsed) -> String {
-    match &value.function {
-        Some(_) => minus(&value.printed_text()),
-        None => printed_number(&value.printed),
+    let Some(function) = &value.function else {
+        return printed_number(&value.printed);
+    };
+    match (function.form, function.coefficients.first()) {
+        (Form::Constant, Some(constant)) => {
+            let error = function.uncertainty.as_ref();
+            let error = error.map_or(String::new(), |u| format!(" ± {}", u.printed()));
+            minus(&format!("{}{error}", constant.printed()))
+        }
+        _ => "see below".to_string(),
     }
 }
 

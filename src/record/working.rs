@@ -2,7 +2,7 @@
 
 use crate::calculation::Calculation;
 use crate::engine::{Hess, MolarMass, Outcome, ReactionWorking};
-use crate::quantity::{exact_text, terminating_decimal};
+use crate::quantity::{exact_text, terminating_decimal, working_text};
 use crate::source::{Problem, ProblemReaction};
 
 use super::formation_table::{cancelled, formation_table};
@@ -277,10 +277,7 @@ fn mass_steps(
 
 /// Δ_rh = (−552.86 kJ/mol)/(123.111 g/mol) = −4490.7…·kJ/kg
 fn mass_substitution(per: &Outcome, by_mass: &Outcome, mass: &MolarMass) -> Rich {
-    let number = |outcome: &Outcome| {
-        let exact = outcome.value.to_exact();
-        exact.map_or_else(String::new, |value| in_full(&value, outcome.significance))
-    };
+    let number = |outcome: &Outcome| minus(&working_text(&outcome.value, outcome.significance));
     Rich::plain("Δ")
         .run(Run::Sub("r".to_string()))
         .run(Run::Italic("h".to_string()))

@@ -147,7 +147,7 @@ fn name(names: &[&str], index: usize) -> String {
 
 impl Form {
     /// What the coefficients are called, in their order; none where they are counted from a0.
-    fn coefficient_names(self) -> &'static [&'static str] {
+    pub fn coefficient_names(self) -> &'static [&'static str] {
         match self {
             Form::Constant => &["c"],
             Form::MaierKelley => &["a", "b", "c"],

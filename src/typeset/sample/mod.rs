@@ -51,6 +51,7 @@ pub(super) fn pages() -> Pages {
         results: results(),
         basis: basis(),
         values_used: values_used(),
+        functions: functions(),
         comparisons: comparisons(),
         working: working::sections(),
         budgets: budgets(),
@@ -259,6 +260,20 @@ fn hold(number: usize, what: &str, owner: &str, closed_by: &str) -> HoldRow {
         owner: s(owner),
         closed_by: s(closed_by),
     }
+}
+
+fn functions() -> Vec<FunctionRow> {
+    vec![FunctionRow {
+        value_used: 2,
+        substance: water(),
+        form: s("nasa-9"),
+        range: s("273.150 K to 373.150 K"),
+        equation: s("Cp/R = a1/T² + a2/T + a3 + a4·T"),
+        numbers: vec![
+            (s("a1"), s("1.326371304\u{a0}×\u{a0}10⁹")),
+            (s("a2"), s("−2.448295388\u{a0}×\u{a0}10⁷")),
+        ],
+    }]
 }
 
 fn values_used() -> Vec<ValueRow> {

@@ -50,6 +50,11 @@ fn definition() -> Math {
                     of: Box::new(symbol("n")),
                 }),
             },
+            upright("+"),
+            Math::Integral {
+                from: Box::new(symbol("a")),
+                to: Box::new(symbol("T")),
+            },
         ],
     }
 }

@@ -5,6 +5,7 @@ use std::path::Path;
 
 use hesswright::finding::Text;
 use hesswright::folder::CaseFolder;
+use hesswright::record::minus;
 
 use super::issued::{Issued, shipped};
 use super::words::{PageText, body, pages, plain};
@@ -53,11 +54,19 @@ fn every_value_used_is_there_as_printed_with_its_origin() {
         let problem = &record.calculation.problem;
         for value in &problem.values {
             let head = &problem.sources[value.source].head;
+            let numbers: Vec<String> = match &value.function {
+                Some(function) => function
+                    .coefficients
+                    .iter()
+                    .map(|c| minus(c.printed()))
+                    .collect(),
+                None => vec![with_minus(value.printed.printed_number())],
+            };
+            says(&body, numbers.into_iter().map(|n| n.replace("exact ", "")));
             says(
                 &body,
                 [
                     with_minus(&value.substance.replace("^", "")),
-                    with_minus(value.printed.printed_number()),
                     value.locator.clone(),
                     value.standing.word().to_string(),
                     head.sha256[..16].to_string(),
