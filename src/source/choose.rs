@@ -11,6 +11,7 @@ use super::path::on_formation_scale;
 use super::resolve::Resolver;
 use super::stable::{is_stable, no_stable_form, stable_form};
 use super::suggest::{ambiguous, no_enthalpy, unknown_substance};
+use super::transitions::ways;
 
 /// An entry that gives the enthalpy of the wanted substance on the scale of formation enthalpies.
 #[derive(Clone, Debug)]
@@ -112,7 +113,7 @@ fn look_up(
                     return None;
                 }
             }
-            Match::One(entry) if gives_enthalpy(&entry) => found.push(Held {
+            Match::One(entry) if gives_enthalpy(&entries, &entry) => found.push(Held {
                 source,
                 entry: *entry,
             }),
@@ -135,10 +136,13 @@ fn look_up(
     Some(found)
 }
 
-/// A printed formation enthalpy, or a function that carries its integration constant.
-fn gives_enthalpy(entry: &Entry) -> bool {
+/// A printed formation enthalpy, a function that carries its integration constant, or transitions
+/// from another form that has one.
+fn gives_enthalpy(entries: &[Entry], entry: &Entry) -> bool {
     let functions = &entry.heat_capacity;
-    entry.formation_enthalpy.is_some() || functions.iter().any(|f| on_formation_scale(f.form))
+    entry.formation_enthalpy.is_some()
+        || functions.iter().any(|f| on_formation_scale(f.form))
+        || !ways(entries, entry).is_empty()
 }
 
 /// In a gas, a liquid or a solution several entries of one formula are different compounds.

@@ -176,7 +176,9 @@ impl Resolver<'_> {
         short: Option<(usize, Short)>,
         span: &Span,
     ) -> Option<Route> {
+        // Without a printed formation enthalpy there is nothing to start from at 298.15 K.
         let allowed = self.extrapolation_allowed(substance);
+        let allowed = allowed.filter(|_| self.substances[substance].value.is_some());
         let route = match allowed {
             Some(_) => along_functions(candidate, kelvin, Reach::Extended).ok(),
             None => None,

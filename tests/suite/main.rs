@@ -6,3 +6,4 @@ mod laws;
 mod outside;
 mod program;
 mod record;
+mod temperature;

@@ -1,0 +1,331 @@
+//! Heats at the temperature of the reaction: ranges, changes of phase, what is allowed, and what is
+//! said of it. The numbers are invented and worked by hand beside each check.
+
+use serde_json::Value;
+
+use crate::program::{Folder, Ran};
+
+/// Invented forms of titanium dioxide, with one gap above the liquid.
+const FORMS: &str = r#"
+[source]
+id = "forms"
+title = "Forms (invented)"
+temperature = "298.15 K"
+energy-unit = "kJ/mol"
+coverage = "2"
+gas-constant = "8.31451"
+
+[[entry]]
+substance = "TiO2(cr, alpha)"
+locator = "sheet 1 (invented)"
+formation-enthalpy = "-900.0 ± 1.0"
+heat-capacity = [{ form = "constant", range = ["200 K", "1000 K"], coefficients = ["60"], uncertainty = "2" }]
+transitions = [{ to = "TiO2(cr, beta)", temperature = "1000 K", enthalpy = "5.0 ± 0.2 kJ/mol" }]
+
+[[entry]]
+substance = "TiO2(cr, beta)"
+locator = "sheet 1 (invented)"
+heat-capacity = [{ form = "constant", range = ["1000 K", "1500 K"], coefficients = ["70"], uncertainty = "2" }]
+transitions = [{ to = "TiO2(l)", temperature = "1500 K", enthalpy = "40.0 ± 1.0 kJ/mol" }]
+
+[[entry]]
+substance = "TiO2(l)"
+locator = "sheet 1 (invented)"
+heat-capacity = [{ form = "constant", range = ["1500 K", "2500 K"], coefficients = ["100"], uncertainty = "2" }]
+
+[[entry]]
+substance = "Ti(cr)"
+locator = "sheet 2 (invented)"
+heat-capacity = [{ form = "constant", range = ["200 K", "3000 K"], coefficients = ["30"], uncertainty = "1" }]
+formation-enthalpy = "exact 0"
+
+[[entry]]
+substance = "O2(g)"
+locator = "sheet 2 (invented)"
+heat-capacity = [{ form = "polynomial", range = ["200 K", "3000 K"], coefficients = ["32", "0"], uncertainty = "1" }]
+formation-enthalpy = "exact 0"
+"#;
+
+struct Tried {
+    ran: Ran,
+}
+
+impl Tried {
+    fn result(&self, id: &str) -> Value {
+        self.ran.json()["results"][id].clone()
+    }
+
+    fn exact(&self, id: &str) -> String {
+        self.result(id)["exact"]
+            .as_str()
+            .unwrap_or("none")
+            .to_string()
+    }
+
+    /// The messages of a code with their severity.
+    fn said(&self, code: &str) -> Vec<(String, String)> {
+        let document = self.ran.json();
+        let findings = document["findings"].as_array().cloned().unwrap_or_default();
+        let of_code = findings.into_iter().filter(|f| f["code"] == code);
+        let text = |value: &Value| value.as_str().unwrap_or_default().to_string();
+        of_code
+            .map(|f| (text(&f["severity"]), text(&f["message"])))
+            .collect()
+    }
+}
+
+/// Computes a case that consults the invented forms and further sources.
+fn tried(consult: &[&str], files: &[(&str, &str)], rest: &str) -> Tried {
+    let folder = Folder::new();
+    for (name, text) in files {
+        folder.write(name, text);
+    }
+    let case = format!(
+        "[record]\nnumber = \"T-0002\"\nrevision = \"A\"\ntitle = \"At temperature\"\n\
+         date = 2026-01-02\npreparer = \"N. N.\"\nstatus = \"for-check\"\n\n\
+         [sources]\nconsult = {consult:?}\n\n{rest}"
+    );
+    folder.write("a.toml", case);
+    let ran = folder.run(&["compute", "a.toml", "--json"]);
+    assert!(ran.status < 2, "{}", ran.err);
+    Tried { ran }
+}
+
+fn forms(rest: &str) -> Tried {
+    tried(&["forms.toml"], &[("forms.toml", FORMS)], rest)
+}
+
+fn reaction(equation: &str, temperature: &str) -> String {
+    format!("[reactions.r]\nequation = \"{equation}\"\ntemperature = \"{temperature}\"\n")
+}
+
+#[test]
+fn transitions_on_the_way_are_crossed_with_their_heats() {
+    // H(l, 2000 K) = −900 + 0.060·701.85 + 5 + 0.070·500 + 40 + 0.100·500 = −727.889;
+    // elements: (0.030 + 0.032)·1701.85 = 105.5147.
+    for product in ["TiO2(l)", "TiO2(stable)"] {
+        let tried = forms(&reaction(&format!("Ti(cr) + O2(g) -> {product}"), "2000 K"));
+        assert_eq!(tried.exact("r.heat"), "-833.4037", "{product}");
+        // u² = 0.5² + 0.1² + 0.5² + (0.70185·1)² + 0.5² + 0.5² + 2·(1.70185·0.5)², by hand.
+        let u = tried.result("r.heat")["standard-uncertainty"].as_f64();
+        assert!((u.unwrap_or_default() - 1.7178).abs() < 2e-4, "{u:?}");
+    }
+}
+
+#[test]
+fn a_form_serves_up_to_its_upper_bound_and_then_the_next() {
+    // −900 + 0.060·701.85 = −857.889 and, from the transition on, 5 more.
+    let of = |kelvin: &str| {
+        let tried = forms(&reaction("TiO2(cr, alpha) -> TiO2(stable)", kelvin));
+        tried.exact("r.heat")
+    };
+    assert_eq!(of("1000 K"), "0");
+    // (60 − 70)·… : at 1001 K alpha is outside its range, so take the way of beta alone.
+    let tried = forms(&reaction("Ti(cr) + O2(g) -> TiO2(stable)", "1001 K"));
+    // −857.889 + 5 + 0.070 − 0.062·702.85 = −896.3957
+    assert_eq!(tried.exact("r.heat"), "-896.3957");
+}
+
+#[test]
+fn outside_the_ranges_is_a_stop_that_an_assumption_lowers() {
+    let beyond = reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "1100 K");
+    let tried = forms(&beyond);
+    assert_eq!(tried.ran.status, 1);
+    assert!(tried.result("r.heat").is_null());
+    let said = tried.said("outside-range");
+    assert_eq!(said.len(), 1, "{said:?}");
+    assert_eq!(said[0].0, "stop");
+    assert!(said[0].1.contains("1100 K is 100 K outside"), "{said:?}");
+
+    let allowed = format!(
+        "[[assumptions]]\ntext = \"The heat capacity goes on.\"\nbasis = \"judgement (invented)\"\n\
+         confirmed = true\nallows = {{ extrapolation = [\"TiO2(cr, alpha)\"] }}\n\n{beyond}"
+    );
+    let tried = forms(&allowed);
+    let said = tried.said("outside-range");
+    assert_eq!(said[0].0, "caution");
+    assert!(said[0].1.contains("100 K outside"), "{said:?}");
+    assert!(said[0].1.contains("The heat capacity goes on."), "{said:?}");
+    // −900 + (60 − 62)·0.80185 = −901.6037
+    assert_eq!(tried.exact("r.heat"), "-901.6037");
+    // By its source the form has turned into another one at 1000 K.
+    assert_eq!(tried.said("unstable-form")[0].0, "caution");
+}
+
+#[test]
+fn a_gap_and_an_overlap_leave_no_stable_form() {
+    let at = |forms: &str, kelvin: &str| {
+        let rest = reaction("Ti(cr) + O2(g) -> TiO2(stable)", kelvin);
+        tried(&["forms.toml"], &[("forms.toml", forms)], &rest)
+    };
+    let gap = FORMS.replace("[\"1000 K\", \"1500 K\"]", "[\"1100 K\", \"1500 K\"]");
+    let overlap = FORMS.replace("[\"1000 K\", \"1500 K\"]", "[\"900 K\", \"1500 K\"]");
+    for (forms, kelvin, word) in [
+        (gap, "1050 K", "no form covers 1050 K"),
+        (overlap, "950 K", "several forms claim 950 K"),
+        (FORMS.to_string(), "2600 K", "no form covers 2600 K"),
+    ] {
+        let tried = at(&forms, kelvin);
+        assert_eq!(tried.ran.status, 1);
+        let said = tried.said("stable-form");
+        assert_eq!(said[0].0, "stop", "{said:?}");
+        assert!(said[0].1.contains(word), "{said:?}");
+        assert!(tried.result("r.heat").is_null());
+    }
+}
+
+#[test]
+fn a_heat_capacity_that_nobody_gives_is_not_zero() {
+    let bare = FORMS.replace(
+        "heat-capacity = [{ form = \"polynomial\", range = [\"200 K\", \"3000 K\"], \
+         coefficients = [\"32\", \"0\"], uncertainty = \"1\" }]\n",
+        "",
+    );
+    assert_ne!(bare, FORMS);
+    let rest = reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "400 K");
+    let tried = tried(&["forms.toml"], &[("forms.toml", &bare)], &rest);
+    assert_eq!(tried.ran.status, 1);
+    assert!(tried.result("r.heat").is_null());
+    assert_eq!(tried.said("heat-capacity-missing")[0].0, "stop");
+}
+
+/// A second invented source, with another formation enthalpy and a function that rises.
+const RISING: &str = r#"
+[source]
+id = "rising"
+title = "Rising (invented)"
+temperature = "298.15 K"
+energy-unit = "kJ/mol"
+coverage = "2"
+
+[[entry]]
+substance = "TiO2(cr, alpha)"
+locator = "sheet 9 (invented)"
+formation-enthalpy = "-899.5 ± 1.0"
+heat-capacity = [{ form = "polynomial", range = ["298.15 K", "1000 K"], coefficients = ["50", "0.02"] }]
+"#;
+
+#[test]
+fn of_another_source_only_increments_are_taken() {
+    let bare = FORMS.replace(
+        "heat-capacity = [{ form = \"constant\", range = [\"200 K\", \"1000 K\"], \
+         coefficients = [\"60\"], uncertainty = \"2\" }]\n",
+        "",
+    );
+    assert_ne!(bare, FORMS);
+    let files = [("forms.toml", bare.as_str()), ("rising.toml", RISING)];
+    let rest = reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "398.15 K");
+    let tried = tried(&["forms.toml", "rising.toml"], &files, &rest);
+    // −900 + (50·100 + 0.01·(398.15² − 298.15²))/1000 − 6.2 = −900 + 5.6963 − 6.2 = −900.5037
+    assert_eq!(tried.exact("r.heat"), "-900.5037");
+}
+
+#[test]
+fn a_constant_over_more_than_100_kelvin_says_what_a_function_would_change() {
+    let files = [("forms.toml", FORMS), ("rising.toml", RISING)];
+    let at = |kelvin: &str| {
+        let rest = reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", kelvin);
+        tried(&["forms.toml", "rising.toml"], &files, &rest)
+    };
+    let said = at("698.15 K").said("constant-heat-capacity");
+    // 50·400 + 0.01·(698.15² − 298.15²) − 60·400 = 23985.2 − 24000 = −14.8 J/mol
+    let own: Vec<_> = said
+        .iter()
+        .filter(|(_, text)| text.contains("TiO2"))
+        .collect();
+    assert_eq!(own.len(), 1, "{said:?}");
+    assert!(own[0].1.contains("-0.015 kJ/mol"), "{own:?}");
+    assert!(at("398.15 K").said("constant-heat-capacity").is_empty());
+}
+
+#[test]
+fn the_uncertainty_of_a_temperature_is_carried_by_the_change_of_heat_capacity() {
+    let input = "[inputs]\nplant = { value = \"400.00 ± 20.00 K\", source = \"log (invented)\", \
+                 confirmed = true }\n\n";
+    let rest = format!(
+        "{input}{}",
+        reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "plant")
+    );
+    let tried = forms(&rest);
+    let result = tried.result("r.heat");
+    let used = tried.ran.json()["values-used"].clone();
+    let is_input = |row: &Value| row["quantity"] == "input";
+    let rows = used.as_array().cloned().unwrap_or_default();
+    let number = rows
+        .iter()
+        .find(|row| is_input(row))
+        .map(|row| row["number"].clone());
+    let budget = result["budget"].as_array().cloned().unwrap_or_default();
+    let row = budget
+        .iter()
+        .find(|row| Some(&row["value-used"]) == number.as_ref());
+    // ΔCp = 60 − 30 − 32 = −2 J/(mol K) = −0.002 kJ/mol per kelvin.
+    let sensitivity = row
+        .and_then(|row| row["sensitivity"].as_f64())
+        .unwrap_or_default();
+    assert!((sensitivity + 0.002).abs() < 1e-12, "{result}");
+}
+
+#[test]
+fn a_function_that_begins_just_above_the_reference_serves_with_a_note() {
+    let late = |low: &str| {
+        FORMS.replace(
+            "[\"200 K\", \"1000 K\"]",
+            &format!("[\"{low}\", \"1000 K\"]"),
+        )
+    };
+    let rest = reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "400 K");
+    let at = |low: &str| tried(&["forms.toml"], &[("forms.toml", &late(low))], &rest);
+    let served = at("300.15 K");
+    assert_eq!(served.said("range-start")[0].0, "note");
+    assert!(!served.result("r.heat").is_null());
+    let refused = at("300.16 K");
+    assert_eq!(refused.said("outside-range")[0].0, "stop");
+    assert!(refused.result("r.heat").is_null());
+}
+
+/// Cp = 2.5·R: H = R·(2.5·T + a6); with a6 = −745.375 it is zero at 298.15 K.
+const FITTED: &str = r#"
+[source]
+id = "fitted"
+title = "Fitted (invented)"
+temperature = "298.15 K"
+gas-constant = "8.31451"
+coverage = "2"
+
+[[entry]]
+substance = "N2O(g)"
+locator = "sheet 3 (invented)"
+heat-capacity = [{ form = "nasa-7", range = ["200 K", "1000 K"], coefficients = ["2.5", "0", "0", "0", "0", "-645.375", "0"] }]
+
+[[entry]]
+substance = "N2O(l)"
+locator = "sheet 3 (invented)"
+heat-capacity = [{ form = "nasa-7", range = ["200 K", "1000 K"], coefficients = ["2.5", "0", "0", "0", "0", "-845.375", "0"] }]
+"#;
+
+#[test]
+fn a_fit_with_its_integration_constant_needs_no_formation_enthalpy() {
+    for temperature in ["298.15 K", "500 K"] {
+        let rest = reaction("N2O(l) -> N2O(g)", temperature);
+        let tried = tried(&["fitted.toml"], &[("fitted.toml", FITTED)], &rest);
+        // 8.31451·(−645.375 + 845.375) = 1662.902 J/mol at any temperature.
+        assert_eq!(tried.exact("r.heat"), "1.662902");
+    }
+}
+
+#[test]
+fn a_fit_that_contradicts_the_printed_value_is_cautioned() {
+    let both = FITTED.replace(
+        "substance = \"N2O(g)\"",
+        "substance = \"N2O(g)\"\nformation-enthalpy = \"3.8\"",
+    );
+    let both = both.replace("coverage", "energy-unit = \"kJ/mol\"\ncoverage");
+    let rest = reaction("N2O(l) -> N2O(g)", "500 K");
+    let tried = tried(&["fitted.toml"], &[("fitted.toml", &both)], &rest);
+    let said = tried.said("function-and-value");
+    // The function gives 8.31451·100 J/mol at 298.15 K, the table 3.8 kJ/mol: −2.97 apart.
+    assert!(said[0].1.contains("-3.0 kJ/mol"), "{said:?}");
+    // 3.8 + 8.31451·(2.5·201.85 − 2.5·500 + 845.375)/1000 = 3.8 + 4.19570960875 − 3.36425860875
+    assert_eq!(tried.exact("r.heat"), "4.631451");
+}
