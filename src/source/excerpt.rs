@@ -237,6 +237,7 @@ fn heat_capacity(function: &HeatCapacity) -> toml::Table {
             (!coefficients.is_empty()).then_some(coefficients),
         )
         .put("points", (!points.is_empty()).then_some(points))
+        .put("uncertainty", function.uncertainty.as_ref().map(printed))
         .0
 }
 
@@ -270,4 +271,58 @@ fn erratum(erratum: &super::model::Erratum) -> toml::Table {
 /// The number of a quantity whose unit the head of the source states.
 fn number_text(quantity: &Quantity) -> String {
     quantity.printed_number().to_string()
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::finding::Text;
+    use crate::source::{Provenance, built_in, read_source};
+
+    fn read_again(source: &Source) -> Source {
+        let text = Text::new("excerpt", text(source, &source.all()));
+        let (read, faults) = read_source(&text, Provenance::Extract);
+        assert_eq!(faults.into_sorted(), []);
+        read.expect("a source without faults")
+    }
+
+    fn functions(source: &Source) -> Vec<HeatCapacity> {
+        let entries = source.all();
+        entries.into_iter().flat_map(|e| e.heat_capacity).collect()
+    }
+
+    #[test]
+    fn every_function_of_the_nasa_file_travels() {
+        let source = built_in("nasa-glenn-2021").expect("a built-in source");
+        let read = read_again(&source);
+        assert!(functions(&source).len() > 3700);
+        assert_eq!(functions(&read).len(), functions(&source).len());
+    }
+
+    #[test]
+    fn every_form_travels_whole() {
+        let given = r#"[source]
+id = "invented"
+title = "Invented"
+coverage = "2"
+gas-constant = "8.31451"
+[[entry]]
+substance = "H2O(l)"
+heat-capacity = [
+  { form = "constant", range = ["274 K", "300 K"], coefficients = ["75.3"], uncertainty = "0.40" },
+  { form = "table", points = [["300", "75.3"], ["320.0", "75.1"]] },
+  { form = "polynomial", range = ["320 K", "340 K"], coefficients = ["70.0", "1.5e-2"] },
+  { form = "nasa-7", range = ["340 K", "370 K"], coefficients = ["9.0", "0", "0", "0", "0", "0", "0"] },
+]
+"#;
+        let (source, faults) = read_source(&Text::new("given", given), Provenance::Original);
+        assert_eq!(faults.into_sorted(), []);
+        let source = source.expect("a source without faults");
+        let tables = |source: &Source| -> Vec<toml::Table> {
+            functions(source).iter().map(heat_capacity).collect()
+        };
+        assert_eq!(tables(&source).len(), 4);
+        assert_eq!(tables(&source)[0]["uncertainty"].as_str(), Some("0.40"));
+        assert_eq!(tables(&read_again(&source)), tables(&source));
+    }
 }

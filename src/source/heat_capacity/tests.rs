@@ -157,7 +157,7 @@ fn seven_coefficients_give_enthalpies_on_the_formation_scale() {
     };
     assert!(at("298.15").abs() < 1e-4, "{}", at("298.15"));
     assert!(
-        (at("1000") - 22706.810_919_79).abs() < 1e-7,
+        (at("1000") - 22_706.810_919_79).abs() < 1e-7,
         "{}",
         at("1000")
     );
@@ -311,6 +311,26 @@ proptest! {
             let tolerance = if function.form == Form::Table { 1e-2 } else { 1e-7 };
             prop_assert!((worked - area).abs() < tolerance, "{word}: {worked}, area {area}");
             prop_assert!((worked - float).abs() < 1e-8, "{word}: {worked}, float {float}");
+        }
+    }
+
+    /// The terms that a working shows add up to the increment, and to the enthalpy.
+    #[test]
+    fn terms_add_up(from in 29_000..110_000, to in 29_000..110_000) {
+        let (from, to, r) = (hundredths(from), hundredths(to), exact(NASA));
+        for function in samples() {
+            let sum = |start| {
+                let terms = function.terms(start, &to, &r);
+                let zero = Real::Exact(Exact::zero());
+                terms.iter().fold(zero, |sum, term| sum.plus(&term.product)).to_f64()
+            };
+            let word = function.form.word();
+            let apart = sum(Some(&from)) - function.increment(&from, &to, &r).expect("inside").to_f64();
+            prop_assert!(apart.abs() < 1e-8, "{word}: {apart}");
+            if let Some(enthalpy) = function.enthalpy(&to, &r) {
+                let apart = sum(None) - enthalpy.to_f64();
+                prop_assert!(apart.abs() < 1e-8, "{word}: {apart}");
+            }
         }
     }
 
