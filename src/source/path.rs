@@ -4,6 +4,8 @@
 //! functions of the other consulted sources for the very form: of those only increments are
 //! taken. Leaves to others: working the increments (the engine).
 
+use std::rc::Rc;
+
 use crate::finding::Span;
 use crate::quantity::Exact;
 
@@ -29,7 +31,16 @@ pub(super) fn on_formation_scale(form: Form) -> bool {
 #[derive(Clone, Debug)]
 pub(super) struct Candidate {
     pub(super) source: usize,
-    pub(super) entry: Entry,
+    pub(super) entry: Rc<Entry>,
+}
+
+/// What a substance's paths are made from, gathered once.
+#[derive(Clone, Debug)]
+pub(super) struct Material {
+    /// The serving entry first, then the same form in the other consulted sources.
+    pub(super) candidates: Vec<Candidate>,
+    /// All entries of the composition in the serving source.
+    pub(super) forms: Vec<Rc<Entry>>,
 }
 
 /// A way that was found, in terms of entries.
@@ -81,39 +92,54 @@ impl Resolver<'_> {
                 end: None,
             });
         }
-        let candidates = self.candidates(substance);
-        let route = self.route(substance, &candidates, kelvin, span)?;
-        self.check_route(substance, &candidates, &route, kelvin, span);
+        let material = self.material(substance, span);
+        let route = self.route(substance, &material, kelvin, span)?;
+        self.check_route(substance, &material, &route, kelvin, span);
         self.enter(substance, kelvin, route, span)
     }
 
-    /// The serving entry first, then the same form in the other consulted sources.
-    fn candidates(&self, substance: usize) -> Vec<Candidate> {
+    fn material(&mut self, substance: usize, span: &Span) -> Rc<Material> {
+        if let Some(known) = self.materials.get(&substance) {
+            return Rc::clone(known);
+        }
+        let material = Rc::new(self.gathered(substance));
+        self.materials.insert(substance, Rc::clone(&material));
+        self.check_scale(substance, &material.candidates[0], span);
+        material
+    }
+
+    fn gathered(&self, substance: usize) -> Material {
         let own = &self.serving[substance];
         let mut candidates = vec![Candidate {
             source: own.source,
-            entry: own.entry.clone(),
+            entry: Rc::new(own.entry.clone()),
         }];
         let mut wanted = own.wanted.clone();
         wanted.species = self.substances[substance].species.clone();
+        let hill = wanted.species.formula.hill();
         for source in (0..self.consulted).filter(|source| *source != own.source) {
-            let entries = self.sources[source].of_composition(&wanted.species.formula.hill());
+            let entries = self.sources[source].of_composition(&hill);
             if let Match::One(entry) = pick(&wanted, &entries) {
-                let entry = *entry;
+                let entry = Rc::new(*entry);
                 candidates.push(Candidate { source, entry });
             }
         }
-        candidates
+        let forms = self.sources[own.source].of_composition(&hill);
+        Material {
+            candidates,
+            forms: forms.into_iter().map(Rc::new).collect(),
+        }
     }
 
     fn route(
         &mut self,
         substance: usize,
-        candidates: &[Candidate],
+        material: &Material,
         kelvin: &Exact,
         span: &Span,
     ) -> Option<Route> {
-        if let Some(route) = self.own_route(substance, &candidates[0], kelvin) {
+        let candidates = &material.candidates;
+        if let Some(route) = self.own_route(substance, material, kelvin) {
             return Some(route);
         }
         let printed = self.substances[substance].value.is_some();
@@ -138,7 +164,9 @@ impl Resolver<'_> {
     }
 
     /// By the serving source alone.
-    fn own_route(&self, substance: usize, own: &Candidate, kelvin: &Exact) -> Option<Route> {
+    fn own_route(&self, substance: usize, material: &Material, kelvin: &Exact) -> Option<Route> {
+        // The serving entry is always there.
+        let own = material.candidates.first()?;
         if self.substances[substance].value.is_some()
             && let Ok(route) = along_functions(own, kelvin, Reach::Stated)
         {
@@ -153,18 +181,7 @@ impl Resolver<'_> {
                 end: Some((own.clone(), index)),
             });
         }
-        self.through_transitions(own, kelvin)
-    }
-
-    /// From another form of the source that has a formation enthalpy, through the transitions
-    /// that it lists.
-    fn through_transitions(&self, own: &Candidate, kelvin: &Exact) -> Option<Route> {
-        let target = own.entry.species()?;
-        let entries = self.sources[own.source].of_composition(&target.formula.hill());
-        let routes = ways(&entries, &own.entry);
-        routes
-            .iter()
-            .find_map(|way| along_way(own.source, &entries, way, kelvin))
+        through_transitions(own, &material.forms, kelvin)
     }
 
     /// Beyond the ranges, where the case allows it by name.
@@ -261,6 +278,15 @@ impl Resolver<'_> {
     }
 }
 
+/// From another form of the source that has a formation enthalpy, through the transitions that it
+/// lists.
+fn through_transitions(own: &Candidate, forms: &[Rc<Entry>], kelvin: &Exact) -> Option<Route> {
+    let routes = ways(forms, &own.entry);
+    routes
+        .iter()
+        .find_map(|way| along_way(own.source, forms, way, kelvin))
+}
+
 /// From 298.15 K along the functions of one entry. Without functions no reason.
 fn along_functions(
     candidate: &Candidate,
@@ -285,10 +311,10 @@ fn along_functions(
 }
 
 /// Along the functions of each form to the transition into the next.
-fn along_way(source: usize, entries: &[Entry], way: &Way, kelvin: &Exact) -> Option<Route> {
+fn along_way(source: usize, entries: &[Rc<Entry>], way: &Way, kelvin: &Exact) -> Option<Route> {
     let candidate = |index: usize| Candidate {
         source,
-        entry: entries[index].clone(),
+        entry: Rc::clone(&entries[index]),
     };
     let mut steps = Vec::new();
     let mut at = reference_kelvin();

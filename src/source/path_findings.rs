@@ -1,5 +1,7 @@
 //! What has to be said of a path: ranges, stability, heat capacities that are missing or constant.
 
+use std::rc::Rc;
+
 use num_traits::Signed;
 
 use crate::case::AllowedKind;
@@ -9,7 +11,7 @@ use crate::quantity::{Exact, exact_text, to_f64, two_digits};
 
 use super::heat_capacity::{Form, HeatCapacity};
 use super::model::Entry;
-use super::path::{Candidate, Route, RouteStep, on_formation_scale, reference_kelvin};
+use super::path::{Candidate, Material, Route, RouteStep, on_formation_scale, reference_kelvin};
 use super::resolve::Resolver;
 use super::walk::{Reach, Stretch, covering, distance, walk};
 
@@ -118,15 +120,14 @@ impl Resolver<'_> {
     pub(super) fn check_route(
         &mut self,
         substance: usize,
-        candidates: &[Candidate],
+        material: &Material,
         route: &Route,
         kelvin: &Exact,
         span: &Span,
     ) {
         self.check_start(substance, route, span);
-        self.check_constant(substance, candidates, route, kelvin, span);
-        self.check_stability(substance, &candidates[0], kelvin, span);
-        self.check_scale(substance, &candidates[0], span);
+        self.check_constant(substance, &material.candidates, route, span);
+        self.check_stability(substance, material, kelvin, span);
     }
 
     /// A function that begins just above 298.15 K.
@@ -161,7 +162,6 @@ impl Resolver<'_> {
         substance: usize,
         candidates: &[Candidate],
         route: &Route,
-        kelvin: &Exact,
         span: &Span,
     ) {
         for step in &route.steps {
@@ -182,7 +182,6 @@ impl Resolver<'_> {
                 exact_text(from),
                 exact_text(to),
             );
-            let _ = kelvin;
             self.say_of(
                 Severity::Caution,
                 FindingCode::ConstantHeatCapacity,
@@ -227,12 +226,15 @@ impl Resolver<'_> {
     }
 
     /// A form that its source calls unstable at the temperature is worked as stated.
-    fn check_stability(&mut self, substance: usize, own: &Candidate, kelvin: &Exact, span: &Span) {
-        let Some(species) = own.entry.species() else {
-            return;
-        };
-        let entries = self.sources[own.source].of_composition(&species.formula.hill());
-        let Some(instead) = stable_instead(&entries, &own.entry, kelvin) else {
+    fn check_stability(
+        &mut self,
+        substance: usize,
+        material: &Material,
+        kelvin: &Exact,
+        span: &Span,
+    ) {
+        let own = &material.candidates[0];
+        let Some(instead) = stable_instead(&material.forms, &own.entry, kelvin) else {
             return;
         };
         let message = format!(
@@ -245,7 +247,7 @@ impl Resolver<'_> {
     }
 
     /// The printed formation enthalpy and the integration constant should say the same.
-    fn check_scale(&mut self, substance: usize, own: &Candidate, span: &Span) {
+    pub(super) fn check_scale(&mut self, substance: usize, own: &Candidate, span: &Span) {
         let reference = reference_kelvin();
         let functions = &own.entry.heat_capacity;
         let Some(index) = covering(functions, &reference, Reach::Stated) else {
@@ -308,7 +310,7 @@ fn ranges(functions: &[HeatCapacity]) -> String {
 }
 
 /// What a source says where a form is not the stable one at a temperature.
-fn stable_instead(entries: &[Entry], own: &Entry, kelvin: &Exact) -> Option<String> {
+fn stable_instead(entries: &[Rc<Entry>], own: &Entry, kelvin: &Exact) -> Option<String> {
     for transition in &own.transitions {
         let at = transition.temperature.value_in_si();
         if *kelvin > at && !is_gas(own.species()) {
@@ -318,7 +320,7 @@ fn stable_instead(entries: &[Entry], own: &Entry, kelvin: &Exact) -> Option<Stri
             ));
         }
     }
-    let into_own = |entry: &Entry| {
+    let into_own = |entry: &Rc<Entry>| {
         let mut transitions = entry.transitions.iter();
         let found = transitions.find(|t| own.notations().any(|s| *s == t.to))?;
         let at = found.temperature.value_in_si();

@@ -2,6 +2,7 @@
 
 use std::cell::OnceCell;
 use std::collections::{BTreeMap, BTreeSet};
+use std::rc::Rc;
 
 use crate::case::{Case, DeclaredKind, Given, Reaction};
 use crate::finding::{Fault, FaultCode, Faults, Finding, Span, Text};
@@ -14,7 +15,7 @@ use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::matching::Wanted;
 use super::model::{Entry, SourceHead, Subject};
-use super::path::{Candidate, reference_kelvin};
+use super::path::{Candidate, Material, reference_kelvin};
 use super::problem::{
     EnthalpyPath, Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
 };
@@ -64,6 +65,8 @@ pub(super) struct Resolver<'a> {
     pub(super) substances: Vec<Substance>,
     /// For each substance the entry that serves, and what was asked for.
     pub(super) serving: Vec<Serving>,
+    /// What the paths of each substance are made from, once a path was asked for.
+    pub(super) materials: BTreeMap<usize, Rc<Material>>,
     pub(super) paths: Vec<EnthalpyPath>,
     pub(super) known_paths: BTreeMap<(usize, Exact), Option<usize>>,
     pub(super) values: Vec<ValueUsed>,
@@ -99,6 +102,7 @@ impl<'a> Resolver<'a> {
             case_source: consulted,
             sources,
             serving: Vec::new(),
+            materials: BTreeMap::new(),
             paths: Vec::new(),
             known_paths: BTreeMap::new(),
             entered: BTreeMap::new(),
@@ -283,7 +287,7 @@ impl<'a> Resolver<'a> {
         let chosen = choose(self, wanted, kelvin, span)?;
         let candidate = Candidate {
             source: chosen.source,
-            entry: chosen.entry.clone(),
+            entry: Rc::new(chosen.entry.clone()),
         };
         let value = self.formation_value(&candidate, span);
         let comparisons = match value {

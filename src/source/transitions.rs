@@ -1,6 +1,7 @@
 //! The ways from the forms with a formation enthalpy to another form, by transitions that the
 //! source lists.
 
+use std::borrow::Borrow;
 use std::collections::VecDeque;
 
 use crate::quantity::Exact;
@@ -28,21 +29,22 @@ pub(super) struct Way {
 }
 
 /// The shortest way from each form with a formation enthalpy to `target`, the shortest first.
-pub(super) fn ways(entries: &[Entry], target: &Entry) -> Vec<Way> {
+pub(super) fn ways<E: Borrow<Entry>>(entries: &[E], target: &Entry) -> Vec<Way> {
+    let entries: Vec<&Entry> = entries.iter().map(E::borrow).collect();
     let Some(end) = entries.iter().position(|e| e.subject == target.subject) else {
         return Vec::new();
     };
     let starts = entries.iter().enumerate();
     let starts = starts.filter(|(from, e)| e.formation_enthalpy.is_some() && *from != end);
     let mut found: Vec<Way> = starts
-        .filter_map(|(from, _)| shortest(entries, from, end))
+        .filter_map(|(from, _)| shortest(&entries, from, end))
         .collect();
     found.sort_by_key(|way| way.crossings.len());
     found
 }
 
 /// Breadth first: every form is entered once.
-fn shortest(entries: &[Entry], from: usize, end: usize) -> Option<Way> {
+fn shortest(entries: &[&Entry], from: usize, end: usize) -> Option<Way> {
     let mut entered_by: Vec<Option<(usize, Crossing)>> = vec![None; entries.len()];
     let mut queue = VecDeque::from([from]);
     while let Some(at) = queue.pop_front() {
@@ -72,12 +74,12 @@ fn traced(entered_by: &[Option<(usize, Crossing)>], from: usize, end: usize) -> 
 }
 
 /// The transitions that an entry lists, and those that lead to it.
-fn crossings_from(entries: &[Entry], at: usize) -> Vec<Crossing> {
+fn crossings_from(entries: &[&Entry], at: usize) -> Vec<Crossing> {
     let mut crossings = Vec::new();
     for (listed_by, entry) in entries.iter().enumerate() {
         for (index, transition) in entry.transitions.iter().enumerate() {
             let leads_to = |entry: &Entry| entry.notations().any(|s| *s == transition.to);
-            let Some(to) = entries.iter().position(leads_to) else {
+            let Some(to) = entries.iter().position(|entry| leads_to(entry)) else {
                 continue;
             };
             let crossing = |forward, to| Crossing {

@@ -22,7 +22,7 @@ pub use terms::FunctionTerm;
 /// A heat-capacity function over a range of temperatures.
 ///
 /// Its integrals are closed expressions, see [`Form`]. They are exact for all forms but `nasa-9`
-/// with a logarithm: there all but the logarithm is exact, and that comes from `libm`.
+/// with a logarithm, which comes from `libm`.
 #[derive(Clone, Debug)]
 pub struct HeatCapacity {
     pub form: Form,
@@ -86,8 +86,12 @@ impl HeatCapacity {
     /// ∫Cp dT from one temperature in K to another, J/mol, inside the range or not; negative where
     /// it goes down and Cp is positive. None as in [`HeatCapacity::at`].
     pub fn increment(&self, from: &Exact, to: &Exact, gas_constant: &Exact) -> Option<Real> {
+        if self.has_logarithm() {
+            let [from, to, gas_constant] = [from, to, gas_constant].map(to_f64);
+            return self.increment_f64(from, to, gas_constant).map(Real::Float);
+        }
         let increment = self.difference(from, to, gas_constant)?;
-        Some(increment.real(&(to / from)))
+        Some(Real::Exact(increment.sum))
     }
 
     /// The same in floating point, for solvers that need it often.
@@ -103,12 +107,22 @@ impl HeatCapacity {
         if !self.form.has_enthalpy_scale() || !kelvin.is_positive() {
             return None;
         }
+        if self.has_logarithm() {
+            let powers = self.powers(to_f64(gas_constant));
+            let kelvin = to_f64(kelvin);
+            let logarithm = powers.of_logarithm() * libm::log(kelvin);
+            return Some(Real::Float(powers.integral(&kelvin) + logarithm));
+        }
         let powers = self.powers(gas_constant.clone());
-        let enthalpy = Integral {
-            sum: powers.integral(kelvin),
-            of_logarithm: powers.of_logarithm(),
-        };
-        Some(enthalpy.real(kelvin))
+        Some(Real::Exact(powers.integral(kelvin)))
+    }
+
+    /// Whether a logarithm makes the integral a floating-point number, so that nothing is won by
+    /// exact numbers for the rest of it.
+    fn has_logarithm(&self) -> bool {
+        let powers = self.form.powers().iter().zip(&self.coefficients);
+        let mut logarithms = powers.filter(|(power, _)| **power == -1);
+        logarithms.any(|(_, coefficient)| !coefficient.value().is_zero())
     }
 
     fn difference<N: Number + PartialOrd>(
@@ -148,17 +162,6 @@ impl HeatCapacity {
 struct Integral<N> {
     sum: N,
     of_logarithm: N,
-}
-
-impl Integral<Exact> {
-    /// Exact where there is no logarithm.
-    fn real(self, argument: &Exact) -> Real {
-        if self.of_logarithm.is_zero() {
-            return Real::Exact(self.sum);
-        }
-        let logarithm = to_f64(&self.of_logarithm) * libm::log(to_f64(argument));
-        Real::Float(to_f64(&self.sum) + logarithm)
-    }
 }
 
 fn lenience() -> Exact {
