@@ -27,6 +27,15 @@ pub fn one_reaction(consult: &[&str], equation: &str, more: &str) -> String {
     format!("{RECORD}[sources]\nconsult = {consult:?}\n{reaction}\n{more}\n")
 }
 
+/// Reactions called `r0`, `r1`, … with their temperatures, whatever else the case needs behind them.
+pub fn reactions(consult: &[&str], list: &[(&str, &str)], more: &str) -> String {
+    let tables = list.iter().enumerate().map(|(i, (equation, temperature))| {
+        format!("[reactions.r{i}]\nequation = \"{equation}\"\ntemperature = \"{temperature}\"\n")
+    });
+    let tables: String = tables.collect();
+    format!("{RECORD}[sources]\nconsult = {consult:?}\n{tables}{more}\n")
+}
+
 /// A source `given` in one unit, with entries (substance, formation enthalpy).
 pub fn source(unit: &str, entries: &[(&str, &str)], more: &str) -> String {
     let mut text = format!(
