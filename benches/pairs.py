@@ -74,6 +74,30 @@ consult = ["codata-1989", "nasa-glenn-2021"]
     return head + "".join(bodies)
 
 
+def many_temperatures(count):
+    """The same, each reaction at a temperature of its own: 300 K to 370 K, so that water is liquid,
+    and by the functions of one source. Without ions and with the alumina of that source."""
+    text = many_reactions(count).replace('"codata-1989", ', "").replace("corundum", "alpha")
+    text = text.replace("H+(aq) + OH-(aq) -> H2O(l)", "H2O(g) -> H2O(l)")
+    blocks = text.split("[reactions.")
+    heats = (
+        f'{block}temperature = "{300 + (i * 7 % 10007) * 0.007:.3f} K"\n'
+        for i, block in enumerate(blocks[1:])
+    )
+    return "[reactions.".join([blocks[0], *heats])
+
+
+def microseconds_per_reaction(case_of, folder, runs):
+    """How long `compute` takes for one reaction of a case of 10, 100, 1000 and 10,000."""
+    cost = {}
+    for count in (10, 100, 1000, 10000):
+        case = folder / f"{count}.toml"
+        case.write_text(case_of(count))
+        times = [seconds([PROGRAM, "compute", "--json", case]) for _ in range(runs)]
+        cost[count] = round(statistics.median(times) / count * 1e6, 1)
+    return cost
+
+
 def main():
     pairs = int(sys.argv[1]) if len(sys.argv) > 1 else 30
     with tempfile.TemporaryDirectory() as folder:
@@ -94,13 +118,15 @@ def main():
         compute, nothing, _ = in_turn([PROGRAM, "compute", CASE], [PROGRAM, "--version"], pairs)
         report["compute, ms"] = round(compute * 1e3, 2)
         report["--version, ms"] = round(nothing * 1e3, 2)
-        per_reaction = {}
-        for count in (10, 100, 1000, 10000):
-            case = folder / f"{count}.toml"
-            case.write_text(many_reactions(count))
-            runs = [seconds([PROGRAM, "compute", "--json", case]) for _ in range(max(5, pairs // 3))]
-            per_reaction[count] = round(statistics.median(runs) / count * 1e6, 1)
-        report["compute per reaction, µs"] = per_reaction
+        runs = max(5, pairs // 3)
+        report["compute per reaction, µs"] = microseconds_per_reaction(many_reactions, folder, runs)
+        heats = microseconds_per_reaction(many_temperatures, folder, runs)
+        report["compute per heat at temperature, µs"] = heats
+        # The start of the program is shared by ten heats or by ten thousand: without it.
+        start = report["--version, ms"] * 1e3
+        net = {count: cost - start / count for count, cost in heats.items()}
+        report["10,000 heats at temperature / 10, each"] = round(heats[10000] / heats[10], 3)
+        report["the same without the start"] = round(net[10000] / net[10], 3)
         print(json.dumps(report, indent=2, ensure_ascii=False))
 
 
