@@ -1,0 +1,266 @@
+//! Redundant determinations adjusted to each other.
+//!
+//! Leaves to others: the multipliers and closures (`multipliers`), where heats and covariances
+//! come from, and what is said about the outcome.
+
+use num_bigint::BigInt;
+use num_integer::Integer;
+use num_traits::{One, Zero};
+
+use crate::quantity::{Exact, to_f64};
+
+use super::chi_square::exceedance;
+use super::multipliers::Multipliers;
+
+/// The most closures of one cycle, a bound on the work.
+pub const MOST_CLOSURES: usize = 40;
+/// A closure keeps less than 10^-this of its variance beside the others where it adds nothing to
+/// them: covariances come from floating-point numbers, which carry about 16 digits.
+const NEGLIGIBLE: usize = 12;
+
+/// What the adjustment of redundant determinations gives.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Adjustment {
+    /// For each step what it counts in the target: the multipliers of least variance.
+    pub weights: Vec<Exact>,
+    /// For each closure the sum of the measured heats, which would be zero if they agreed.
+    pub misclosures: Vec<Exact>,
+    /// The standard uncertainty of each misclosure.
+    pub misclosure_uncertainty: Vec<f64>,
+    /// For each step the measured less the adjusted heat.
+    pub residuals: Vec<Exact>,
+    /// For each step its residual over what the residual may scatter by; none for a heat that no
+    /// other determination checks.
+    pub normalised: Vec<Option<f64>>,
+    /// For each step which part of an error in it shows in its residual, from 0 to 1.
+    pub redundancy: Vec<f64>,
+    pub chi_square: f64,
+    /// Closures that are independent and carry an uncertainty.
+    pub degrees_of_freedom: usize,
+    /// Of a χ² as large as this or larger, if the stated uncertainties are right.
+    pub probability: f64,
+}
+
+impl Adjustment {
+    /// √(χ²/ν), R. T. Birge, Phys. Rev. 40 (1932) 207 (from memory): the factor by which all
+    /// uncertainties would have to grow for χ² to be what is expected.
+    pub fn birge_ratio(&self) -> f64 {
+        match self.degrees_of_freedom {
+            0 => 1.0,
+            freedom => libm::sqrt(self.chi_square / freedom as f64),
+        }
+    }
+
+    /// The step whose normalised residual is largest.
+    pub fn most_deviant(&self) -> Option<(usize, f64)> {
+        let sizes = self.normalised.iter().enumerate();
+        let sizes = sizes.filter_map(|(step, size)| Some((step, (*size)?)));
+        sizes.reduce(|most, next| {
+            if next.1.abs() > most.1.abs() {
+                next
+            } else {
+                most
+            }
+        })
+    }
+}
+
+/// Why there is no adjustment.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum NoAdjustment {
+    /// This closure has no uncertainty left to close in, and does not close.
+    Contradictory { closure: usize },
+    /// More closures than can be worked.
+    TooMany,
+}
+
+/// Generalised least squares, A. C. Aitken, Proc. Roy. Soc. Edinburgh 55 (1935) 42, in the form of
+/// condition equations (F. R. Helmert, 1872); normalised residuals after W. Baarda, A Testing
+/// Procedure for Use in Geodetic Networks (1968); all from memory.
+///
+/// `heats` q and `covariance` V are of the steps, in one unit and its square. With closures N,
+/// misclosures m = Nᵀq and S = NᵀVN:
+///
+///   residuals v = VN·S⁻¹m,  χ² = mᵀS⁻¹m,  weights w = x − N·S⁻¹NᵀVx,
+///
+/// x being any multipliers that give the target. Of all multipliers that do, w·q has the least
+/// variance. V itself is never inverted, so exact heats and shared values need no exception. All
+/// of it is solved over the rational numbers: no order of the steps, and no platform, can change
+/// a digit.
+///
+/// # Errors
+/// A closure without uncertainty does not close; there are too many closures.
+pub fn adjust(
+    heats: &[Exact],
+    covariance: &[Vec<Exact>],
+    multipliers: &Multipliers,
+) -> Result<Adjustment, NoAdjustment> {
+    let closures = &multipliers.closures;
+    if closures.len() > MOST_CLOSURES {
+        return Err(NoAdjustment::TooMany);
+    }
+    let misclosures: Vec<Exact> = closures.iter().map(|n| dot(n, heats)).collect();
+    let spread: Vec<Vec<Exact>> = closures.iter().map(|n| times(covariance, n)).collect();
+    let s: Vec<Vec<Exact>> = closures
+        .iter()
+        .map(|n| spread.iter().map(|vn| dot(n, vn)).collect())
+        .collect();
+    let inverse = invert(&s, &misclosures)?;
+    let solved = inverse.times(&misclosures);
+    let variation = closures
+        .iter()
+        .map(|n| dot(n, &times(covariance, &multipliers.particular)));
+    let shift = inverse.times(&variation.collect::<Vec<_>>());
+    let less = |step: usize| -> Exact { column_dot(closures, step, &shift) };
+    let weights = multipliers.particular.iter().enumerate();
+    let chi_square = to_f64(&dot(&misclosures, &solved));
+    let degrees_of_freedom = inverse.kept.len();
+    Ok(Adjustment {
+        weights: weights.map(|(step, x)| x - less(step)).collect(),
+        misclosure_uncertainty: (0..s.len()).map(|k| libm::sqrt(to_f64(&s[k][k]))).collect(),
+        residuals: (0..heats.len())
+            .map(|step| column_dot(&spread, step, &solved))
+            .collect(),
+        normalised: (0..heats.len())
+            .map(|step| normalised(closures, step, &solved, &inverse))
+            .collect(),
+        redundancy: (0..heats.len())
+            .map(|step| {
+                to_f64(&dot(
+                    &column(&spread, step),
+                    &inverse.times(&column(closures, step)),
+                ))
+            })
+            .collect(),
+        probability: exceedance(chi_square, degrees_of_freedom),
+        misclosures,
+        chi_square,
+        degrees_of_freedom,
+    })
+}
+
+/// λ/√(NS⁻¹Nᵀ) with λ = NS⁻¹m, which for independent heats is v/u(v).
+fn normalised(
+    closures: &[Vec<Exact>],
+    step: usize,
+    solved: &[Exact],
+    inverse: &Inverse,
+) -> Option<f64> {
+    let own = column(closures, step);
+    let scatter = to_f64(&dot(&own, &inverse.times(&own)));
+    (scatter > 0.0).then(|| to_f64(&dot(&own, solved)) / libm::sqrt(scatter))
+}
+
+fn dot(a: &[Exact], b: &[Exact]) -> Exact {
+    let terms = a
+        .iter()
+        .zip(b)
+        .filter(|(a, b)| !a.is_zero() && !b.is_zero());
+    terms.map(|(a, b)| a * b).sum()
+}
+
+fn times(matrix: &[Vec<Exact>], vector: &[Exact]) -> Vec<Exact> {
+    matrix.iter().map(|row| dot(row, vector)).collect()
+}
+
+fn column(rows: &[Vec<Exact>], at: usize) -> Vec<Exact> {
+    rows.iter().map(|row| row[at].clone()).collect()
+}
+
+fn column_dot(rows: &[Vec<Exact>], at: usize, by: &[Exact]) -> Exact {
+    dot(&column(rows, at), by)
+}
+
+/// The inverse of a covariance matrix within the closures that are independent; zero elsewhere.
+struct Inverse {
+    kept: Vec<usize>,
+    entries: Vec<Vec<Exact>>,
+}
+
+impl Inverse {
+    fn times(&self, vector: &[Exact]) -> Vec<Exact> {
+        times(&self.entries, vector)
+    }
+}
+
+/// Elimination without fractions (E. H. Bareiss, Math. Comp. 22 (1968) 565, from memory) on the
+/// diagonal entry that keeps most of its variance, until what remains carries none.
+fn invert(s: &[Vec<Exact>], misclosures: &[Exact]) -> Result<Inverse, NoAdjustment> {
+    let size = s.len();
+    let (mut rows, scale) = whole_rows(s, misclosures);
+    let variance: Vec<BigInt> = (0..size).map(|k| rows[k][k].clone()).collect();
+    let mut kept: Vec<usize> = Vec::new();
+    let mut before = BigInt::one();
+    while let Some(pivot) = next_pivot(&rows, &variance, &kept, &before) {
+        let row = rows[pivot].clone();
+        for (index, other) in rows.iter_mut().enumerate() {
+            if index != pivot {
+                clear(other, &row, pivot, &before);
+            }
+        }
+        before = row[pivot].clone();
+        kept.push(pivot);
+    }
+    if let Some(closure) = (0..size).find(|k| !kept.contains(k) && !rows[*k][size].is_zero()) {
+        return Err(NoAdjustment::Contradictory { closure });
+    }
+    let entry = |a: usize, b: usize| match kept.contains(&a) && kept.contains(&b) {
+        true => Exact::new(&rows[a][size + 1 + b] * &scale, before.clone()),
+        false => Exact::zero(),
+    };
+    let entries = (0..size).map(|a| (0..size).map(|b| entry(a, b)).collect());
+    Ok(Inverse {
+        entries: entries.collect(),
+        kept,
+    })
+}
+
+/// Matrix, misclosures and a unit matrix side by side, in whole numbers; and the factor that the
+/// matrix was multiplied by.
+fn whole_rows(s: &[Vec<Exact>], misclosures: &[Exact]) -> (Vec<Vec<BigInt>>, BigInt) {
+    let common = |numbers: &mut dyn Iterator<Item = &Exact>| {
+        numbers.fold(BigInt::one(), |common, n| common.lcm(n.denom()))
+    };
+    let scale = common(&mut s.iter().flatten());
+    let other = common(&mut misclosures.iter());
+    let whole = |n: &Exact, scale: &BigInt| n.numer() * (scale / n.denom());
+    let row = |(k, entries): (usize, &Vec<Exact>)| -> Vec<BigInt> {
+        let unit = (0..s.len()).map(|at| BigInt::from(u8::from(at == k)));
+        let matrix = entries.iter().map(|n| whole(n, &scale));
+        matrix
+            .chain([whole(&misclosures[k], &other)])
+            .chain(unit)
+            .collect()
+    };
+    (s.iter().enumerate().map(row).collect(), scale)
+}
+
+/// The closure that keeps the largest part of its variance beside those already taken; none where
+/// all have lost theirs.
+fn next_pivot(
+    rows: &[Vec<BigInt>],
+    variance: &[BigInt],
+    kept: &[usize],
+    before: &BigInt,
+) -> Option<usize> {
+    let ten = BigInt::from(10).pow(NEGLIGIBLE as u32);
+    let lives = |k: &usize| &rows[*k][*k] * &ten > &variance[*k] * before;
+    (0..rows.len())
+        .filter(|k| !kept.contains(k) && lives(k))
+        .reduce(|best, k| {
+            let more = &rows[k][k] * &variance[best] > &rows[best][best] * &variance[k];
+            if more { k } else { best }
+        })
+}
+
+/// One step of the elimination; the division leaves no remainder.
+fn clear(row: &mut [BigInt], pivot: &[BigInt], at: usize, before: &BigInt) {
+    let own = row[at].clone();
+    for (entry, taken) in row.iter_mut().zip(pivot) {
+        *entry = (&*entry * &pivot[at] - taken * &own) / before;
+    }
+}
+
+#[cfg(test)]
+#[path = "adjust_tests.rs"]
+mod tests;
