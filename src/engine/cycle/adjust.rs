@@ -21,6 +21,10 @@ const NEGLIGIBLE: usize = 12;
 /// What the adjustment of redundant determinations gives.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Adjustment {
+    /// For each step the standard uncertainty of its heat.
+    pub standard: Vec<f64>,
+    /// Pairs of steps whose heats are correlated, with the coefficient.
+    pub correlated: Vec<(usize, usize, f64)>,
     /// For each step what it counts in the target: the multipliers of least variance.
     pub weights: Vec<Exact>,
     /// For each closure the sum of the measured heats, which would be zero if they agreed.
@@ -115,7 +119,12 @@ pub fn adjust(
     let weights = multipliers.particular.iter().enumerate();
     let chi_square = to_f64(&dot(&misclosures, &solved));
     let degrees_of_freedom = inverse.kept.len();
+    let standard: Vec<f64> = (0..heats.len())
+        .map(|step| libm::sqrt(to_f64(&covariance[step][step])))
+        .collect();
     Ok(Adjustment {
+        correlated: correlated(covariance, &standard),
+        standard,
         weights: weights.map(|(step, x)| x - less(step)).collect(),
         misclosure_uncertainty: (0..s.len()).map(|k| libm::sqrt(to_f64(&s[k][k]))).collect(),
         residuals: (0..heats.len())
@@ -137,6 +146,14 @@ pub fn adjust(
         chi_square,
         degrees_of_freedom,
     })
+}
+
+fn correlated(covariance: &[Vec<Exact>], standard: &[f64]) -> Vec<(usize, usize, f64)> {
+    let pairs = (0..standard.len()).flat_map(|a| (a + 1..standard.len()).map(move |b| (a, b)));
+    let pairs = pairs.filter(|(a, b)| !covariance[*a][*b].is_zero());
+    pairs
+        .map(|(a, b)| (a, b, to_f64(&covariance[a][b]) / (standard[a] * standard[b])))
+        .collect()
 }
 
 /// λ/√(NS⁻¹Nᵀ) with λ = NS⁻¹m, which for independent heats is v/u(v).

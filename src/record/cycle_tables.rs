@@ -1,0 +1,287 @@
+//! The tables in the working of a cycle.
+
+use num_traits::{Signed, Zero};
+
+use crate::engine::{Adjustment, CycleSum, StepHeat, Worked, closure_text, decimals};
+use crate::quantity::{
+    Exact, Significance, full_text, order_of_magnitude, power_of_ten, round_to_place, two_digits,
+};
+use crate::source::{Basis, Problem, ProblemCycle, ProblemStep, StepSource};
+
+use super::heat_working::shown;
+use super::numerals::{coefficient, minus, printed, signed};
+use super::pages::Table;
+use super::rich::{Rich, Run};
+use super::tables::{enthalpy, mark, number, text};
+
+/// Digits shown of a multiplier that uncertainties had a part in.
+const WEIGHT_DIGITS: i64 = 6;
+
+/// A cycle and the heats of its steps, all of them there.
+pub(super) struct Shown<'a> {
+    pub(super) problem: &'a Problem,
+    pub(super) cycle: &'a ProblemCycle,
+    pub(super) heats: Vec<&'a StepHeat>,
+    /// The unit of the results.
+    pub(super) unit: &'a str,
+}
+
+impl Shown<'_> {
+    fn steps(&self) -> impl Iterator<Item = (&ProblemStep, &StepHeat)> {
+        self.cycle.steps.iter().zip(self.heats.iter().copied())
+    }
+
+    /// Each determination as it is printed, and per mole of its equation.
+    pub(super) fn determinations(&self) -> Table {
+        let rows = self.steps().map(|(step, heat)| {
+            vec![
+                Rich::plain(step.name.clone()),
+                equation(self.cycle, &step.numbers, false),
+                marks(step, heat),
+                Rich::plain(self.as_printed(step)),
+                Rich::plain(shown(&heat.measured)),
+            ]
+        });
+        Table {
+            caption: format!("Determinations; the last column per mole of the equation, in {}", self.unit),
+            columns: vec![
+                text("Step"),
+                text("Equation"),
+                mark("Row"),
+                text("As printed"),
+                number(Rich::plain("Heat")),
+            ],
+            rows: rows.collect(),
+            total: None,
+        }
+    }
+
+    /// "−26434 ± 3 J/g, of benzoic-acid"
+    fn as_printed(&self, step: &ProblemStep) -> String {
+        let (value, per) = match &step.heat {
+            StepSource::Value { value, per } => (*value, per),
+            StepSource::Result { name } => return format!("result {name}"),
+        };
+        let what = if step.bomb.is_some() { "ΔU" } else { "ΔH" };
+        let printed = printed(&self.problem.values[value].printed);
+        let of = match per {
+            Basis::Reaction => String::new(),
+            Basis::Mole { species, .. } | Basis::Mass { species, .. } => {
+                format!(", of {}", self.cycle.species[*species].label)
+            }
+        };
+        format!("{what} {printed}{of}")
+    }
+
+    /// Δn of the gases, Δn·R·T and the enthalpy, for each step that needs it.
+    pub(super) fn gas_work(&self) -> Option<Table> {
+        let rows = self.steps().filter_map(|(step, heat)| {
+            let (bomb, work) = (step.bomb.as_ref()?, heat.gas_work.as_ref()?);
+            Some(vec![
+                Rich::plain(step.name.clone()),
+                Rich::plain(gases(self.cycle, step)),
+                Rich::plain(sign_or_zero(&bomb.gas_moles)),
+                Rich::plain(shown(work)),
+                Rich::plain(shown(&heat.measured)),
+                Rich::plain(shown(&heat.heat)),
+            ])
+        });
+        let rows: Vec<Vec<Rich>> = rows.collect();
+        (!rows.is_empty()).then(|| Table {
+            caption: format!("From internal energy to enthalpy, heats in {}", self.unit),
+            columns: vec![
+                text("Step"),
+                text("Σν of the gases"),
+                number(Rich::plain("Δ").run(Run::Italic("n".into()))),
+                number(
+                    Rich::plain("Δ")
+                        .run(Run::Italic("n·R·T".into())),
+                ),
+                number(Rich::plain("Δ").run(Run::Sub("r".into())).run(Run::Italic("U".into()))),
+                number(enthalpy("r")),
+            ],
+            rows,
+            total: None,
+        })
+    }
+
+    /// The steps turned and multiplied, and their sum.
+    pub(super) fn multiplied(&self, sum: &CycleSum) -> Table {
+        let parts = self.steps().zip(&sum.weights).filter(|(_, w)| !w.is_zero());
+        let rows = parts.map(|((step, heat), weight)| {
+            vec![
+                Rich::plain(multiplier(&weight.abs())),
+                equation(self.cycle, &step.numbers, weight.is_negative()),
+                Rich::plain(step.name.clone()),
+                Rich::plain(shown(&turned(heat, weight))),
+                Rich::plain(shown(&heat.heat.times_exact(weight))),
+            ]
+        });
+        let blank = Rich::default;
+        Table {
+            caption: format!("The steps, turned and multiplied so that they add up to the target; heats in {}", self.unit),
+            columns: vec![
+                mark("Times"),
+                text("Equation"),
+                text("Step"),
+                number(enthalpy("r")),
+                number(Rich::plain("Product")),
+            ],
+            rows: rows.collect(),
+            total: Some(vec![
+                blank(),
+                equation(self.cycle, &self.cycle.numbers, false),
+                blank(),
+                blank(),
+                Rich::plain(shown(&sum.heat)),
+            ]),
+        }
+    }
+
+    /// What should be zero, and how far it is from it.
+    pub(super) fn closures(&self, closures: &[Vec<Exact>], adjustment: &Adjustment) -> Table {
+        let each = closures.iter().zip(&adjustment.misclosures);
+        let rows = each.zip(&adjustment.misclosure_uncertainty).map(|((by, m), u)| {
+            vec![
+                Rich::plain(closure_text(self.cycle, by)),
+                Rich::plain(minus(&cut(m, 10))),
+                Rich::plain(two_digits(*u)),
+            ]
+        });
+        Table {
+            caption: format!("Sums of steps that are no reaction at all: their heats, in {}", self.unit),
+            columns: vec![
+                text("What should be zero"),
+                number(Rich::default().run(Run::Italic("m".into()))),
+                number(Rich::default().run(Run::Italic("u".into())).and("(").run(Run::Italic("m".into())).and(")")),
+            ],
+            rows: rows.collect(),
+            total: None,
+        }
+    }
+
+    /// Measured and adjusted heats with their residuals.
+    pub(super) fn adjusted(&self, adjustment: &Adjustment) -> Table {
+        let rows = self.steps().enumerate().map(|(index, (step, heat))| {
+            let residual = &adjustment.residuals[index];
+            let adjusted = heat.heat.value.to_exact().map(|q| q - residual);
+            let place = residual_place(adjustment.standard[index]);
+            vec![
+                Rich::plain(step.name.clone()),
+                Rich::plain(shown(&heat.heat)),
+                Rich::plain(uncertainty(adjustment.standard[index])),
+                Rich::plain(adjusted.map_or(String::new(), |q| at(&q, place))),
+                Rich::plain(at(residual, place)),
+                Rich::plain(adjustment.normalised[index].map_or("–".into(), |w| minus(&decimals(w)))),
+                Rich::plain(decimals(adjustment.redundancy[index])),
+            ]
+        });
+        let italic = |text: &str| Rich::default().run(Run::Italic(text.into()));
+        Table {
+            caption: format!("Measured heats, adjusted heats and residuals, in {}", self.unit),
+            columns: vec![
+                text("Step"),
+                number(Rich::plain("Measured ").with(italic("q"))),
+                number(italic("u").and("(").with(italic("q")).and(")")),
+                number(Rich::plain("Adjusted")),
+                number(Rich::plain("Residual ").with(italic("v"))),
+                number(Rich::plain("Normalised")),
+                number(Rich::plain("Checked part")),
+            ],
+            rows: rows.collect(),
+            total: None,
+        }
+    }
+}
+
+/// What the step's heat is multiplied by is shown without its sign, so the heat carries it.
+fn turned(heat: &StepHeat, weight: &Exact) -> Worked {
+    match weight.is_negative() {
+        true => heat.heat.times_exact(&Exact::from_integer((-1).into())),
+        false => heat.heat.clone(),
+    }
+}
+
+fn uncertainty(u: f64) -> String {
+    if u == 0.0 { "0".to_string() } else { two_digits(u) }
+}
+
+/// One place more than the two digits of the uncertainty.
+fn residual_place(standard: f64) -> i64 {
+    let exact = Exact::from_float(standard);
+    let order = exact.and_then(|u| order_of_magnitude(&u));
+    order.map_or(-4, |order| order - 2).min(0)
+}
+
+fn at(value: &Exact, place: i64) -> String {
+    minus(&round_to_place(value, place).text)
+}
+
+/// A multiplier: a fraction, or the first digits of one that is long.
+pub(super) fn multiplier(weight: &Exact) -> String {
+    let fraction = weight.to_string();
+    if fraction.len() <= 8 { fraction } else { minus(&cut(weight, WEIGHT_DIGITS)) }
+}
+
+/// The first digits, with an ellipsis where there are more.
+fn cut(value: &Exact, digits: i64) -> String {
+    let full = full_text(value, Significance::Exact);
+    if !full.ends_with('…') && full.chars().count() as i64 <= digits + 2 {
+        return full;
+    }
+    let Some(order) = order_of_magnitude(value) else {
+        return full;
+    };
+    let place = (order + 1 - digits).min(0);
+    let short = (value * power_of_ten(-place)).trunc() * power_of_ten(place);
+    format!("{}…", round_to_place(&short, place).text)
+}
+
+fn sign_or_zero(number: &Exact) -> String {
+    if number.is_zero() { "0".to_string() } else { signed(number) }
+}
+
+/// "7 CO2(g) − 15/2 O2(g)"
+fn gases(cycle: &ProblemCycle, step: &ProblemStep) -> String {
+    let mut text = String::new();
+    for (species, nu) in cycle.species.iter().zip(&step.numbers) {
+        let phase = species.species.phase.as_ref();
+        let gas = phase.is_some_and(|p| p.label == crate::notation::PhaseLabel::Gas);
+        if !gas || nu.is_zero() {
+            continue;
+        }
+        let sign = match (text.is_empty(), nu.is_negative()) {
+            (true, false) => "",
+            (true, true) => "\u{2212}",
+            (false, false) => " + ",
+            (false, true) => " \u{2212} ",
+        };
+        text += &format!("{sign}{}{}", coefficient(&nu.abs()), species.label);
+    }
+    if text.is_empty() { "no gas".to_string() } else { text }
+}
+
+/// The rows of the table of values that a step rests on.
+fn marks(step: &ProblemStep, heat: &StepHeat) -> Rich {
+    let mut values: Vec<usize> = heat.measured.form.iter().map(|(index, _)| index).collect();
+    if let StepSource::Value { value, .. } = &step.heat {
+        values.retain(|index| index != value);
+        values.insert(0, *value);
+    }
+    let marks = values.into_iter().map(|index| Run::ValueUsed(index + 1));
+    marks.fold(Rich::default(), Rich::run)
+}
+
+/// An equation from its numbers, turned where it is subtracted.
+pub(super) fn equation(cycle: &ProblemCycle, numbers: &[Exact], turned: bool) -> Rich {
+    let side = |negative: bool| {
+        let terms = cycle.species.iter().zip(numbers);
+        let terms = terms.filter(|(_, nu)| !nu.is_zero() && nu.is_negative() == negative);
+        terms.enumerate().fold(Rich::default(), |text, (at, (species, nu))| {
+            let plus = if at == 0 { "" } else { " + " };
+            text.and(format!("{plus}{}", coefficient(&nu.abs())))
+                .with(Rich::from(species.species.pieces()))
+        })
+    };
+    side(!turned).and(" → ").with(side(turned))
+}

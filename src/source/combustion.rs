@@ -1,0 +1,87 @@
+//! Combustion enthalpies that the consulted sources list.
+
+use num_traits::Signed;
+
+use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
+use crate::notation::Participant;
+
+use super::choose::{choice_for, note_identity};
+use super::matching::{Match, pick};
+use super::model::Entry;
+use super::path_values::formation_significance;
+use super::problem::{ValueKind, ValueUsed};
+use super::resolve::{Resolver, value_of};
+use super::suggest::ambiguous;
+
+impl Resolver<'_> {
+    /// The combustion enthalpy of a participant from the source that the case chose, or else the
+    /// first in its order that lists one; an index among the values used.
+    pub(super) fn combustion_value(&mut self, named: &Located<String>) -> Option<usize> {
+        let participant = Participant::parse(&named.value).ok()?;
+        let wanted = self.wanted(&participant)?;
+        let span = &named.span;
+        let mut found: Vec<(usize, Entry)> = Vec::new();
+        for source in 0..self.consulted {
+            let entries = self.sources[source].of_composition(&wanted.species.formula.hill());
+            let with_value = entries.into_iter().filter(|e| e.combustion_enthalpy.is_some());
+            match pick(&wanted, &with_value.collect::<Vec<_>>()) {
+                Match::None => {}
+                Match::One(entry) => found.push((source, *entry)),
+                Match::Several(several) => {
+                    let fault = ambiguous(self, &wanted, span, source, &several);
+                    self.faults.push(fault);
+                    return None;
+                }
+            }
+        }
+        let chosen = choice_for(self, &wanted).map(|choice| choice.source.value.clone());
+        let chosen = chosen.and_then(|id| found.iter().position(|(s, _)| self.sources[*s].id() == id));
+        let Some((source, entry)) = found.get(chosen.unwrap_or(0)).cloned() else {
+            self.no_combustion(named);
+            return None;
+        };
+        note_identity(self, &wanted, span, &entry);
+        let printed = entry.combustion_enthalpy.clone()?;
+        if !printed.decimal.value().is_negative() {
+            self.not_released(named, source);
+        }
+        let head = &self.sources[source].head;
+        let significance = formation_significance(&printed, head);
+        let value = ValueUsed {
+            significance,
+            ..value_of(source, head, ValueKind::CombustionEnthalpy, &entry, printed, span)
+        };
+        Some(self.enter_value(value, ""))
+    }
+
+    fn no_combustion(&mut self, named: &Located<String>) {
+        let consulted = self.sources[..self.consulted].iter().map(|s| s.id());
+        let consulted: Vec<&str> = consulted.collect();
+        self.faults.push(Fault::new(
+            FaultCode::UnknownSubstance,
+            self.text,
+            &named.span,
+            format!("`{}`", named.value),
+            format!(
+                "a substance whose combustion enthalpy a consulted source lists ({})",
+                consulted.join(", ")
+            ),
+            "consult a source that lists it, or state the heat in the step",
+        ));
+    }
+
+    /// Some tables print heats of combustion as positive numbers.
+    fn not_released(&mut self, named: &Located<String>, source: usize) {
+        self.findings.push(Finding {
+            severity: Severity::Stop,
+            code: FindingCode::CombustionSign,
+            message: format!(
+                "{} gives the combustion enthalpy of `{}` as no heat released: it is not \
+                 negative. Enter it with the sign of an enthalpy change.",
+                self.sources[source].id(),
+                named.value
+            ),
+            at: self.text.place(named.span.start),
+        });
+    }
+}
