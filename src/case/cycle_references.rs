@@ -100,7 +100,9 @@ impl Order {
     /// A search in depth, without recursion: a chain of cycles can be long.
     pub(crate) fn of(cycles: &IndexMap<String, Cycle>) -> Order {
         let rests = |cycle: &Cycle| -> Vec<usize> {
-            named(cycle).filter_map(|name| cycles.get_index_of(id_of(name))).collect()
+            named(cycle)
+                .filter_map(|name| cycles.get_index_of(id_of(name)))
+                .collect()
         };
         let rests: Vec<Vec<usize>> = cycles.values().map(rests).collect();
         let mut order = Order::default();
@@ -131,7 +133,8 @@ impl Order {
                 }
                 Mark::OnTheWay => {
                     let on_the_way = way.iter().map(|(index, _)| *index);
-                    self.rings.push(on_the_way.skip_while(|index| *index != next).collect());
+                    self.rings
+                        .push(on_the_way.skip_while(|index| *index != next).collect());
                 }
                 Mark::Done => {}
             }

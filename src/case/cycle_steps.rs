@@ -121,8 +121,14 @@ impl StepReader<'_, '_, '_> {
     fn given(&self, text: &Located<String>) -> Option<Given> {
         let Surroundings { ids, inputs, .. } = self.around;
         let per_mass = Dimension::ENERGY.over(Dimension::MASS);
-        let input = inputs.get(&text.value).map(|i| i.value.value.unit.dimension());
-        let stated = || Quantity::parse(&text.value).ok().map(|q| q.unit.dimension());
+        let input = inputs
+            .get(&text.value)
+            .map(|i| i.value.value.unit.dimension());
+        let stated = || {
+            Quantity::parse(&text.value)
+                .ok()
+                .map(|q| q.unit.dimension())
+        };
         let by_mass = input.or_else(stated) == Some(per_mass);
         let wanted = Wanted {
             dimension: match by_mass {

@@ -57,9 +57,8 @@ fn read_cycle(
     let target = table.required_string("target", advice);
     let target = target.and_then(|text| read_equation(table, around, &text));
     let inflate = table.string("inflate");
-    let inflate = inflate.filter(|text| {
-        one_of(table.reader(), text, &[("birge-ratio", ())]).is_some()
-    });
+    let inflate =
+        inflate.filter(|text| one_of(table.reader(), text, &[("birge-ratio", ())]).is_some());
     let steps = read_steps(table, around)?;
     let correlations = read_correlations(table, &steps);
     Some(Cycle {
@@ -113,7 +112,11 @@ fn read_steps(table: &Table<'_, '_>, around: &Surroundings<'_>) -> Option<Vec<Cy
             &value.span(),
             format!("{count} steps"),
             format!("from 1 to {MOST_STEPS} steps"),
-            if count == 0 { advice } else { "divide the cycle into several" },
+            if count == 0 {
+                advice
+            } else {
+                "divide the cycle into several"
+            },
         );
         return None;
     }
@@ -147,12 +150,17 @@ fn read_correlation(table: &Table<'_, '_>, steps: &[CycleStep]) -> Option<StepCo
     let text = table.required_string("coefficient", "write it as \"0.5\"");
     let coefficient = text.and_then(|text| read_coefficient(table, &text));
     if table.get("between").is_none() {
-        table.missing("between", "name two steps: between = [\"run-1\", \"run-2\"]");
+        table.missing(
+            "between",
+            "name two steps: between = [\"run-1\", \"run-2\"]",
+        );
         return None;
     }
     let names = table.strings("between");
-    let places: Option<Vec<usize>> =
-        names.iter().map(|name| step_of(table, steps, name)).collect();
+    let places: Option<Vec<usize>> = names
+        .iter()
+        .map(|name| step_of(table, steps, name))
+        .collect();
     let places = places?;
     let [a, b] = places[..] else {
         return refuse_pair(table, format!("{} names", places.len()));

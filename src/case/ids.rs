@@ -13,11 +13,12 @@ pub enum IdKind {
     Substance,
     Input,
     Reaction,
+    Cycle,
 }
 
 impl IdKind {
     /// The kinds of which a case has results.
-    pub(super) const WITH_RESULTS: [IdKind; 1] = [IdKind::Reaction];
+    pub(super) const WITH_RESULTS: [IdKind; 2] = [IdKind::Reaction, IdKind::Cycle];
 
     pub(super) fn has_results(self) -> bool {
         IdKind::WITH_RESULTS.contains(&self)
@@ -29,6 +30,7 @@ impl IdKind {
             IdKind::Substance => "a substance",
             IdKind::Input => "an input",
             IdKind::Reaction => "a reaction",
+            IdKind::Cycle => "a cycle",
         }
     }
 }

@@ -5,6 +5,10 @@
 
 mod allowances;
 mod assumptions;
+mod cycle;
+mod cycle_references;
+mod cycle_steps;
+mod cycles;
 mod given;
 mod ids;
 mod inputs;
@@ -19,6 +23,8 @@ mod sources;
 mod substances;
 
 pub use allowances::{Allowance, AllowedKind};
+pub use cycle::{Cycle, CycleStep, Measured, StepCorrelation, StepHeat, step_name};
+pub(crate) use cycle_references::Order;
 pub use given::Given;
 pub use ids::IdKind;
 pub use model::{

@@ -3,6 +3,7 @@
 use chrono::NaiveDate;
 use indexmap::IndexMap;
 
+use super::cycle::Cycle;
 use super::given::Given;
 use crate::finding::Located;
 use crate::notation::{Equation, Formula, Phase};
@@ -22,6 +23,7 @@ pub struct Case {
     pub substances: IndexMap<String, DeclaredSubstance>,
     pub inputs: IndexMap<String, Input>,
     pub reactions: IndexMap<String, Reaction>,
+    pub cycles: IndexMap<String, Cycle>,
     pub rounding: Vec<RoundingRule>,
     pub units: ResultUnits,
 }

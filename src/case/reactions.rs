@@ -2,7 +2,7 @@
 
 use indexmap::IndexMap;
 
-use crate::document::{Table, is_id, notation_fault, value_fault};
+use crate::document::{Reader, Table, is_id, notation_fault, value_fault};
 use crate::finding::{FaultCode, Located};
 use crate::notation::{Equation, Participant};
 use crate::quantity::Dimension;
@@ -73,9 +73,16 @@ impl Context<'_, '_, '_> {
             }
         }
         let equation = Located::new(equation.ok()?, text.span.clone());
-        self.check_participants(&equation, &text);
+        check_participants(
+            self.table.reader(),
+            self.ids,
+            self.substances,
+            &equation,
+            &text,
+        );
         let says_per = per.is_some();
-        let per = per.and_then(|text| self.read_per(&equation, text));
+        let per =
+            per.and_then(|text| named_participant(self.table.reader(), &equation.value, &text));
         Some(Reaction {
             id,
             equation,
@@ -90,50 +97,56 @@ impl Context<'_, '_, '_> {
         let text = self.table.string("temperature")?;
         read_temperature(self.table.reader(), self.ids, self.inputs, &text)
     }
+}
 
-    fn check_participants(&self, equation: &Located<Equation>, text: &Located<String>) {
-        let reader = self.table.reader();
-        for term in equation.value.left.iter().chain(&equation.value.right) {
-            let Participant::Declared(id) = &term.participant else {
-                continue;
-            };
-            let span = reader.text().inside(&text.span, &term.span);
-            match self.substances.get(id).map(|s| &s.kind) {
-                Some(DeclaredKind::Compound { .. }) => {}
-                Some(DeclaredKind::Inert) => value_fault(
-                    reader,
-                    &span,
-                    format!("`{id}`, which is declared inert"),
-                    "substances with a formula",
-                    "give it a formula and a phase, or leave it out of the equation",
-                ),
-                None if self.ids.kind(id) == Some(IdKind::Substance) => {}
-                None => self.ids.unknown(reader, id, &span, &[IdKind::Substance]),
-            }
+/// Reports participants that are not declared, or that have no formula.
+pub(super) fn check_participants(
+    reader: &Reader<'_>,
+    ids: &Ids,
+    substances: &IndexMap<String, DeclaredSubstance>,
+    equation: &Located<Equation>,
+    text: &Located<String>,
+) {
+    for term in equation.value.left.iter().chain(&equation.value.right) {
+        let Participant::Declared(id) = &term.participant else {
+            continue;
+        };
+        let span = reader.text().inside(&text.span, &term.span);
+        match substances.get(id).map(|s| &s.kind) {
+            Some(DeclaredKind::Compound { .. }) => {}
+            Some(DeclaredKind::Inert) => value_fault(
+                reader,
+                &span,
+                format!("`{id}`, which is declared inert"),
+                "substances with a formula",
+                "give it a formula and a phase, or leave it out of the equation",
+            ),
+            None if ids.kind(id) == Some(IdKind::Substance) => {}
+            None => ids.unknown(reader, id, &span, &[IdKind::Substance]),
         }
     }
+}
 
-    /// The participant that `per` names, as it is written in the equation.
-    fn read_per(
-        &self,
-        equation: &Located<Equation>,
-        text: Located<String>,
-    ) -> Option<Located<String>> {
-        let terms = equation.value.left.iter().chain(&equation.value.right);
-        let names: Vec<String> = terms.map(|term| term.participant.to_string()).collect();
-        let wanted = canonical_participant(&text.value);
-        if names.contains(&wanted) {
-            return Some(Located::new(wanted, text.span));
-        }
-        self.table.reader().fault(
-            FaultCode::Value,
-            &text.span,
-            format!("\"{}\"", text.value),
-            format!("a participant of the equation: {}", names.join(", ")),
-            "write it as it stands in the equation",
-        );
-        None
+/// The participant that a text names, as it is written in the equation.
+pub(super) fn named_participant(
+    reader: &Reader<'_>,
+    equation: &Equation,
+    text: &Located<String>,
+) -> Option<Located<String>> {
+    let terms = equation.left.iter().chain(&equation.right);
+    let names: Vec<String> = terms.map(|term| term.participant.to_string()).collect();
+    let wanted = canonical_participant(&text.value);
+    if names.contains(&wanted) {
+        return Some(Located::new(wanted, text.span.clone()));
     }
+    reader.fault(
+        FaultCode::Value,
+        &text.span,
+        format!("\"{}\"", text.value),
+        format!("a participant of the equation: {}", names.join(", ")),
+        "write it as it stands in the equation",
+    );
+    None
 }
 
 /// A participant in the one way that equations print it.

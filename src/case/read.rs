@@ -6,6 +6,8 @@ use crate::document::{Table, with_document};
 use crate::finding::{FaultCode, Faults, Text};
 
 use super::assumptions::read_assumptions;
+use super::cycle_references::check_references;
+use super::cycles::{Surroundings, read_cycles};
 use super::ids::{IdKind, Ids};
 use super::inputs::read_inputs;
 use super::model::Case;
@@ -20,7 +22,7 @@ use super::substances::read_substances;
 /// What a case is called in findings, whatever its file is called.
 pub const CASE_NAME: &str = "case.toml";
 
-const TABLES: [&str; 9] = [
+const TABLES: [&str; 10] = [
     "record",
     "prose",
     "assumptions",
@@ -28,14 +30,14 @@ const TABLES: [&str; 9] = [
     "substances",
     "inputs",
     "reactions",
+    "cycles",
     "rounding",
     "units",
 ];
 
 /// Tables of the case format that this version does not work.
-const NOT_WORKED: [&str; 6] = [
+const NOT_WORKED: [&str; 5] = [
     "streams",
-    "cycles",
     "balances",
     "adiabatic",
     "heating-values",
@@ -56,10 +58,12 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     let substances = root.table("substances");
     let inputs = root.table("inputs");
     let reactions = root.table("reactions");
+    let cycles = root.table("cycles");
     let mut ids = Ids::default();
     ids.take(substances.as_ref(), IdKind::Substance);
     ids.take(inputs.as_ref(), IdKind::Input);
     ids.take(reactions.as_ref(), IdKind::Reaction);
+    ids.take(cycles.as_ref(), IdKind::Cycle);
 
     let record = root.table("record");
     if record.is_none() {
@@ -71,9 +75,17 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     let record = record.map(|table| read_record(&table));
     let substances = substances.map_or_else(IndexMap::new, |t| read_substances(&t));
     let inputs = inputs.map_or_else(IndexMap::new, |t| read_inputs(&t));
-    let stated = reactions.as_ref().map_or(0, |table| table.entries().len());
+    let tables = [&reactions, &cycles].into_iter().flatten();
+    let stated: usize = tables.map(|table| table.entries().len()).sum();
+    let around = Surroundings {
+        ids: &ids,
+        inputs: &inputs,
+        substances: &substances,
+    };
+    let read_cycles = read_cycles(cycles.as_ref(), &around);
     let reactions = match reactions {
         Some(table) => read_reactions(&table, &ids, &inputs, &substances),
+        None if cycles.is_some() => IndexMap::new(),
         None => {
             root.missing(
                 "reactions",
@@ -84,6 +96,8 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     };
     let mut results = Results::default();
     results.add_reactions(&reactions);
+    results.add_cycles(&read_cycles);
+    check_references(root.reader(), &read_cycles, &results, &ids);
     let units = read_units(root.table("units").as_ref());
     let sources = root.table("sources");
     if sources.is_none() {
@@ -94,8 +108,8 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     }
     let mut choices = read_choices(sources.as_ref());
     let mut assumptions = read_assumptions(root, &ids);
-    if reactions.len() < stated {
-        // They may be for a substance of a reaction that could not be read.
+    if reactions.len() + read_cycles.len() < stated {
+        // They may be for a substance of an equation that could not be read.
         choices.clear();
         for assumption in &mut assumptions {
             assumption.allows.clear();
@@ -111,6 +125,7 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
         substances,
         inputs,
         reactions,
+        cycles: read_cycles,
         units,
     })
 }

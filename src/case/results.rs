@@ -6,6 +6,7 @@ use crate::document::{Reader, is_id};
 use crate::finding::{FaultCode, Located, Span, nearest};
 use crate::quantity::Dimension;
 
+use super::cycle::Cycle;
 use super::ids::{IdKind, Ids};
 use super::model::Reaction;
 
@@ -44,6 +45,13 @@ impl Results {
             };
             let quantities = super::reactions::result_quantities().to_vec();
             self.add(id, "a reaction", "reactions", quantities, states);
+        }
+    }
+
+    pub(super) fn add_cycles(&mut self, cycles: &IndexMap<String, Cycle>) {
+        for id in cycles.keys() {
+            let quantities = super::cycles::result_quantities().to_vec();
+            self.add(id, "a cycle", "cycles", quantities, Vec::new());
         }
     }
 

@@ -3,6 +3,7 @@
 //! and the listings of `source`; with `--json` standard output holds JSON and nothing else.
 
 mod compute;
+mod cycle_text;
 mod draft;
 mod draft_text;
 mod exit;

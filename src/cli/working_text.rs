@@ -2,6 +2,7 @@
 
 use std::path::Path;
 
+use super::cycle_text::cycle;
 use super::findings;
 use super::terminal::{Style, Tone, plain, wrap};
 use crate::calculation::Calculation;
@@ -29,6 +30,9 @@ pub fn shown(case: &Path, calculation: &Calculation, style: Style) -> String {
     text += &format!("\n{}\n", style.paint(Tone::Strong, "Working"));
     for working in &calculation.working.reactions {
         text += &reaction(calculation, working);
+    }
+    for working in &calculation.working.cycles {
+        text += &cycle(calculation, working);
     }
     text += &format!("\n{}\n", style.paint(Tone::Strong, "Values used"));
     text + &values(&calculation.problem)
@@ -130,12 +134,12 @@ fn at_temperature(
     at + &table(&rows) + &wrap("  sum ", &sum)
 }
 
-fn number(worked: &Worked) -> String {
+pub(super) fn number(worked: &Worked) -> String {
     working_text(&worked.value, worked.significance)
 }
 
 /// Four columns, numbers flush right; a long cell takes its row with it.
-fn table(rows: &[[String; 4]]) -> String {
+pub(super) fn table(rows: &[[String; 4]]) -> String {
     let width = |column: usize, most: usize| {
         let lengths = rows.iter().map(|row| row[column].chars().count());
         lengths.max().unwrap_or(0).min(most)

@@ -3,6 +3,7 @@
 //! One file per method. Each method's docstring names its published source, its units and its
 //! limits.
 
+mod cycle;
 mod formation;
 mod hess;
 mod kirchhoff;
@@ -13,6 +14,10 @@ mod standing;
 mod work;
 mod worked;
 
+pub use cycle::{
+    Adjustment, CRITICAL_RESIDUAL, CycleSum, CycleWorking, Multipliers, NoMultipliers,
+    SIGNIFICANCE_LEVEL, StepHeat, closure_text, decimals, global_test, local_test, weakness,
+};
 pub use formation::{FormationEquation, formation_equation};
 pub use hess::{Hess, HessTerm};
 pub use kirchhoff::{HeatAt, HeatTerm, heat_at, molar_enthalpy};

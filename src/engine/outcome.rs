@@ -62,6 +62,8 @@ pub struct Outcome {
     pub stated_by: StatedBy,
     /// The value as the other rule would state it.
     pub remark: Option<Stated>,
+    /// What `combined` was multiplied by beyond the uncertainties stated; one where nothing was.
+    pub inflation: f64,
 }
 
 impl Outcome {
@@ -73,13 +75,26 @@ impl Outcome {
         worked: Worked,
         unit: Unit,
     ) -> Outcome {
+        Outcome::inflated(problem, options, id, worked, unit, 1.0)
+    }
+
+    /// The same with the combined uncertainty multiplied by a factor, where the case asks for it.
+    pub fn inflated(
+        problem: &Problem,
+        options: &WorkOptions,
+        id: String,
+        worked: Worked,
+        unit: Unit,
+        inflation: f64,
+    ) -> Outcome {
         let Worked {
             value,
             significance,
             form,
         } = worked;
         let uncertainty = |index: usize| problem.values[index].uncertainty;
-        let combined = combine(&form, &uncertainty, &problem.correlations);
+        let mut combined = combine(&form, &uncertainty, &problem.correlations);
+        combined.standard = combined.standard.map(|u| u * inflation);
         let expanded = combined.standard.map(|u| u * f64::from(COVERAGE));
         let rules = Rules {
             value: &value,
@@ -99,6 +114,7 @@ impl Outcome {
             stated,
             stated_by,
             remark,
+            inflation,
             value,
         }
     }

@@ -23,19 +23,22 @@ pub(super) fn molar_mass(problem: &Problem, reaction: &ProblemReaction) -> Optio
     if reaction.molar_mass.is_empty() {
         return None;
     }
+    Some(sum_of_weights(problem, &reaction.molar_mass))
+}
+
+/// A molar mass from atomic weights: index among the values used and count of atoms.
+pub(super) fn sum_of_weights(problem: &Problem, parts: &[(usize, Exact)]) -> MolarMass {
     let weight = |index: usize| problem.values[index].printed.decimal.value();
-    let parts = reaction.molar_mass.clone();
-    let value: Exact = parts.iter().map(|(index, n)| weight(*index) * n).sum();
     let places = parts.iter().map(|(index, n)| {
         let used = &problem.values[*index];
         used.significance
             .times_exact(&used.printed.decimal.value(), n)
     });
-    Some(MolarMass {
+    MolarMass {
         significance: Significance::sum(places),
-        value,
-        parts,
-    })
+        value: parts.iter().map(|(index, n)| weight(*index) * n).sum(),
+        parts: parts.to_vec(),
+    }
 }
 
 /// Δ_rH°/|ν| for the participant named by `per`, in the unit of the heat.

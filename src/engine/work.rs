@@ -7,6 +7,7 @@ use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::quantity::{Exact, InputUncertainty, LinearForm, Real, Unit, exact_text, to_f64};
 use crate::source::{Problem, ProblemReaction, reference_kelvin};
 
+use super::cycle::{CycleWorking, work_cycle};
 use super::hess::{Hess, hess_sum};
 use super::kirchhoff::{HeatAt, heat_at, heat_capacity_change};
 use super::outcome::{Outcome, place_in};
@@ -29,7 +30,7 @@ impl WorkOptions<'_> {
         place_in(rule.place, &rule.unit, unit)
     }
 
-    fn unit(&self, over: &Unit) -> Unit {
+    pub(super) fn unit(&self, over: &Unit) -> Unit {
         let symbol = format!("{}/{}", self.units.energy.symbol(), over.symbol());
         // Energy over amount or mass, both of them units without a solidus of their own.
         Unit::parse(&symbol).expect("the units of a case have simple symbols")
@@ -40,6 +41,7 @@ impl WorkOptions<'_> {
 #[derive(Debug)]
 pub struct Working {
     pub reactions: Vec<ReactionWorking>,
+    pub cycles: Vec<CycleWorking>,
     /// All results, in the order of the case.
     pub outcomes: Vec<Outcome>,
     pub findings: Vec<Finding>,
@@ -89,12 +91,16 @@ impl ReactionWorking {
 pub fn work(problem: &Problem, options: &WorkOptions<'_>) -> Working {
     let mut working = Working {
         reactions: Vec::with_capacity(problem.reactions.len()),
+        cycles: Vec::with_capacity(problem.cycles.len()),
         outcomes: Vec::with_capacity(problem.reactions.len()),
         findings: problem.findings.clone(),
         by_id: BTreeMap::new(),
     };
     for (index, reaction) in problem.reactions.iter().enumerate() {
         work_reaction(problem, options, index, reaction, &mut working);
+    }
+    for index in 0..problem.cycles.len() {
+        work_cycle(problem, options, index, &mut working);
     }
     let text = options.text;
     working

@@ -28,9 +28,20 @@ impl fmt::Display for Severity {
 /// Which check speaks; the word is stable and stands in records and JSON.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
 pub enum FindingCode {
+    BombNotReduced,
     ChargeInWater,
     ChoiceOverrides,
+    CombustionSign,
     ConstantHeatCapacity,
+    CycleContradictory,
+    CycleDisagrees,
+    CycleInflated,
+    CycleNotWorked,
+    CycleOpen,
+    CycleStepUnused,
+    CycleTemperature,
+    CycleUnweighted,
+    CycleWeakTest,
     FixedDecimals,
     FreeElectron,
     FunctionAndValue,
@@ -57,9 +68,20 @@ pub enum FindingCode {
 impl FindingCode {
     pub fn word(self) -> &'static str {
         match self {
+            FindingCode::BombNotReduced => "bomb-not-reduced",
             FindingCode::ChargeInWater => "charge-in-water",
             FindingCode::ChoiceOverrides => "choice-overrides",
+            FindingCode::CombustionSign => "combustion-sign",
             FindingCode::ConstantHeatCapacity => "constant-heat-capacity",
+            FindingCode::CycleContradictory => "cycle-contradictory",
+            FindingCode::CycleDisagrees => "cycle-disagrees",
+            FindingCode::CycleInflated => "cycle-inflated",
+            FindingCode::CycleNotWorked => "cycle-not-worked",
+            FindingCode::CycleOpen => "cycle-open",
+            FindingCode::CycleStepUnused => "cycle-step-unused",
+            FindingCode::CycleTemperature => "cycle-temperature",
+            FindingCode::CycleUnweighted => "cycle-unweighted",
+            FindingCode::CycleWeakTest => "cycle-weak-test",
             FindingCode::FixedDecimals => "fixed-decimals",
             FindingCode::FreeElectron => "free-electron",
             FindingCode::FunctionAndValue => "function-and-value",

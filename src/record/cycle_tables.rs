@@ -43,7 +43,10 @@ impl Shown<'_> {
             ]
         });
         Table {
-            caption: format!("Determinations; the last column per mole of the equation, in {}", self.unit),
+            caption: format!(
+                "Determinations; the last column per mole of the equation, in {}",
+                self.unit
+            ),
             columns: vec![
                 text("Step"),
                 text("Equation"),
@@ -93,11 +96,12 @@ impl Shown<'_> {
                 text("Step"),
                 text("Σν of the gases"),
                 number(Rich::plain("Δ").run(Run::Italic("n".into()))),
+                number(Rich::plain("Δ").run(Run::Italic("n·R·T".into()))),
                 number(
                     Rich::plain("Δ")
-                        .run(Run::Italic("n·R·T".into())),
+                        .run(Run::Sub("r".into()))
+                        .run(Run::Italic("U".into())),
                 ),
-                number(Rich::plain("Δ").run(Run::Sub("r".into())).run(Run::Italic("U".into()))),
                 number(enthalpy("r")),
             ],
             rows,
@@ -119,7 +123,10 @@ impl Shown<'_> {
         });
         let blank = Rich::default;
         Table {
-            caption: format!("The steps, turned and multiplied so that they add up to the target; heats in {}", self.unit),
+            caption: format!(
+                "The steps, turned and multiplied so that they add up to the target; heats in {}",
+                self.unit
+            ),
             columns: vec![
                 mark("Times"),
                 text("Equation"),
@@ -141,19 +148,30 @@ impl Shown<'_> {
     /// What should be zero, and how far it is from it.
     pub(super) fn closures(&self, closures: &[Vec<Exact>], adjustment: &Adjustment) -> Table {
         let each = closures.iter().zip(&adjustment.misclosures);
-        let rows = each.zip(&adjustment.misclosure_uncertainty).map(|((by, m), u)| {
-            vec![
-                Rich::plain(closure_text(self.cycle, by)),
-                Rich::plain(minus(&cut(m, 10))),
-                Rich::plain(two_digits(*u)),
-            ]
-        });
+        let rows = each
+            .zip(&adjustment.misclosure_uncertainty)
+            .map(|((by, m), u)| {
+                vec![
+                    Rich::plain(closure_text(self.cycle, by)),
+                    Rich::plain(minus(&cut(m, 10))),
+                    Rich::plain(two_digits(*u)),
+                ]
+            });
         Table {
-            caption: format!("Sums of steps that are no reaction at all: their heats, in {}", self.unit),
+            caption: format!(
+                "Sums of steps that are no reaction at all: their heats, in {}",
+                self.unit
+            ),
             columns: vec![
                 text("What should be zero"),
                 number(Rich::default().run(Run::Italic("m".into()))),
-                number(Rich::default().run(Run::Italic("u".into())).and("(").run(Run::Italic("m".into())).and(")")),
+                number(
+                    Rich::default()
+                        .run(Run::Italic("u".into()))
+                        .and("(")
+                        .run(Run::Italic("m".into()))
+                        .and(")"),
+                ),
             ],
             rows: rows.collect(),
             total: None,
@@ -172,13 +190,18 @@ impl Shown<'_> {
                 Rich::plain(uncertainty(adjustment.standard[index])),
                 Rich::plain(adjusted.map_or(String::new(), |q| at(&q, place))),
                 Rich::plain(at(residual, place)),
-                Rich::plain(adjustment.normalised[index].map_or("–".into(), |w| minus(&decimals(w)))),
+                Rich::plain(
+                    adjustment.normalised[index].map_or("–".into(), |w| minus(&decimals(w))),
+                ),
                 Rich::plain(decimals(adjustment.redundancy[index])),
             ]
         });
         let italic = |text: &str| Rich::default().run(Run::Italic(text.into()));
         Table {
-            caption: format!("Measured heats, adjusted heats and residuals, in {}", self.unit),
+            caption: format!(
+                "Measured heats, adjusted heats and residuals, in {}",
+                self.unit
+            ),
             columns: vec![
                 text("Step"),
                 number(Rich::plain("Measured ").with(italic("q"))),
@@ -203,7 +226,11 @@ fn turned(heat: &StepHeat, weight: &Exact) -> Worked {
 }
 
 fn uncertainty(u: f64) -> String {
-    if u == 0.0 { "0".to_string() } else { two_digits(u) }
+    if u == 0.0 {
+        "0".to_string()
+    } else {
+        two_digits(u)
+    }
 }
 
 /// One place more than the two digits of the uncertainty.
@@ -220,7 +247,11 @@ fn at(value: &Exact, place: i64) -> String {
 /// A multiplier: a fraction, or the first digits of one that is long.
 pub(super) fn multiplier(weight: &Exact) -> String {
     let fraction = weight.to_string();
-    if fraction.len() <= 8 { fraction } else { minus(&cut(weight, WEIGHT_DIGITS)) }
+    if fraction.len() <= 8 {
+        fraction
+    } else {
+        minus(&cut(weight, WEIGHT_DIGITS))
+    }
 }
 
 /// The first digits, with an ellipsis where there are more.
@@ -238,7 +269,11 @@ fn cut(value: &Exact, digits: i64) -> String {
 }
 
 fn sign_or_zero(number: &Exact) -> String {
-    if number.is_zero() { "0".to_string() } else { signed(number) }
+    if number.is_zero() {
+        "0".to_string()
+    } else {
+        signed(number)
+    }
 }
 
 /// "7 CO2(g) − 15/2 O2(g)"
@@ -258,7 +293,11 @@ fn gases(cycle: &ProblemCycle, step: &ProblemStep) -> String {
         };
         text += &format!("{sign}{}{}", coefficient(&nu.abs()), species.label);
     }
-    if text.is_empty() { "no gas".to_string() } else { text }
+    if text.is_empty() {
+        "no gas".to_string()
+    } else {
+        text
+    }
 }
 
 /// The rows of the table of values that a step rests on.
@@ -277,11 +316,13 @@ pub(super) fn equation(cycle: &ProblemCycle, numbers: &[Exact], turned: bool) ->
     let side = |negative: bool| {
         let terms = cycle.species.iter().zip(numbers);
         let terms = terms.filter(|(_, nu)| !nu.is_zero() && nu.is_negative() == negative);
-        terms.enumerate().fold(Rich::default(), |text, (at, (species, nu))| {
-            let plus = if at == 0 { "" } else { " + " };
-            text.and(format!("{plus}{}", coefficient(&nu.abs())))
-                .with(Rich::from(species.species.pieces()))
-        })
+        terms
+            .enumerate()
+            .fold(Rich::default(), |text, (at, (species, nu))| {
+                let plus = if at == 0 { "" } else { " + " };
+                text.and(format!("{plus}{}", coefficient(&nu.abs())))
+                    .with(Rich::from(species.species.pieces()))
+            })
     };
     side(!turned).and(" → ").with(side(turned))
 }

@@ -24,7 +24,9 @@ use super::working::{displayed, result};
 
 pub(super) fn cycle_sections(calculation: &Calculation) -> Vec<WorkingSection> {
     let cycles = calculation.working.cycles.iter();
-    cycles.map(|working| section(calculation, working)).collect()
+    cycles
+        .map(|working| section(calculation, working))
+        .collect()
 }
 
 /// The target with names where the case declares them.
@@ -185,20 +187,30 @@ impl Parts<'_> {
         }
         let level = format!("{:.0} %", SIGNIFICANCE_LEVEL * 100.0);
         let verdict = match adjustment.probability < SIGNIFICANCE_LEVEL {
-            true => format!("Below {level}: the determinations disagree beyond their uncertainties."),
+            true => {
+                format!("Below {level}: the determinations disagree beyond their uncertainties.")
+            }
             false => format!("Not below {level}: the uncertainties stated can explain it."),
         };
         let weak = weakness(adjustment.degrees_of_freedom).map(|text| {
             let mut letters = text.chars();
-            let first: String = letters.next().into_iter().flat_map(char::to_uppercase).collect();
+            let first: String = letters
+                .next()
+                .into_iter()
+                .flat_map(char::to_uppercase)
+                .collect();
             first + letters.as_str()
         });
         let ratio = decimals(adjustment.birge_ratio());
         let inflated = match (self.cycle.inflate, self.sum.inflation > 1.0) {
-            (false, _) => "The case does not ask for it, and no uncertainty is inflated.".to_string(),
+            (false, _) => {
+                "The case does not ask for it, and no uncertainty is inflated.".to_string()
+            }
             (true, false) => "It is not above one, and no uncertainty is inflated.".to_string(),
             (true, true) => {
-                format!("The case asks for it: the uncertainty of the result is multiplied by {ratio}.")
+                format!(
+                    "The case asks for it: the uncertainty of the result is multiplied by {ratio}."
+                )
             }
         };
         let mut steps = vec![plain(format!(
@@ -267,7 +279,9 @@ impl Parts<'_> {
             text = text.and(format!("{between}{number}")).with(species);
         }
         let verb = if last == 0 { "stands" } else { "stand" };
-        text.and(format!(" {verb} on both sides and cancel, and what is left is the target."))
+        text.and(format!(
+            " {verb} on both sides and cancel, and what is left is the target."
+        ))
     }
 
     fn closing(&self) -> Vec<Step> {
@@ -297,14 +311,20 @@ fn masses(shown: &Shown<'_>) -> Vec<Step> {
         let (StepSource::Value { per, .. }, Some(mass)) = (&step.heat, &heat.molar_mass) else {
             continue;
         };
-        let Basis::Mass { species, weights, .. } = per else {
+        let Basis::Mass {
+            species, weights, ..
+        } = per
+        else {
             continue;
         };
         if said.contains(species) {
             continue;
         }
         said.push(*species);
-        let text = Rich::plain(format!("Molar mass of {}: ", shown.cycle.species[*species].label));
+        let text = Rich::plain(format!(
+            "Molar mass of {}: ",
+            shown.cycle.species[*species].label
+        ));
         let text = sum_of_weights(shown.problem, weights, text).and(format!(
             " = {} g/mol. Heats per mass of it are multiplied by that and by its |ν|.",
             in_full(&mass.value, mass.significance)
@@ -315,16 +335,23 @@ fn masses(shown: &Shown<'_>) -> Vec<Step> {
 }
 
 fn sum_of_weights(problem: &Problem, weights: &[(usize, Exact)], text: Rich) -> Rich {
-    weights.iter().enumerate().fold(text, |text, (at, (index, count))| {
-        let plus = if at == 0 { "" } else { " + " };
-        let printed = problem.values[*index].printed.decimal.printed();
-        text.and(format!("{plus}{count} · {printed} ")).run(Run::ValueUsed(index + 1))
-    })
+    weights
+        .iter()
+        .enumerate()
+        .fold(text, |text, (at, (index, count))| {
+            let plus = if at == 0 { "" } else { " + " };
+            let printed = problem.values[*index].printed.decimal.printed();
+            text.and(format!("{plus}{count} · {printed} "))
+                .run(Run::ValueUsed(index + 1))
+        })
 }
 
 /// Whether the bomb results hold for standard states.
 fn reduced(cycle: &ProblemCycle) -> String {
-    let bombs = cycle.steps.iter().filter_map(|step| Some((step, step.bomb.as_ref()?)));
+    let bombs = cycle
+        .steps
+        .iter()
+        .filter_map(|step| Some((step, step.bomb.as_ref()?)));
     let open: Vec<&str> = bombs
         .filter(|(_, bomb)| !bomb.reduced)
         .map(|(step, _)| step.name.as_str())
@@ -333,7 +360,10 @@ fn reduced(cycle: &ProblemCycle) -> String {
         true => "The results are reduced to standard states by whoever measured them (Washburn \
                  1933)."
             .to_string(),
-        false => format!("Not reduced to standard states: {}; see the findings.", open.join(", ")),
+        false => format!(
+            "Not reduced to standard states: {}; see the findings.",
+            open.join(", ")
+        ),
     }
 }
 
@@ -345,7 +375,8 @@ fn correlations(cycle: &ProblemCycle, adjustment: &Adjustment) -> String {
     }
     let name = |index: usize| cycle.steps[index].name.as_str();
     let pairs = adjustment.correlated.iter();
-    let each = pairs.map(|(a, b, r)| format!("{} and {} {}", name(*a), name(*b), minus(&decimals(*r))));
+    let each =
+        pairs.map(|(a, b, r)| format!("{} and {} {}", name(*a), name(*b), minus(&decimals(*r))));
     format!(
         "Correlation coefficients, from shared values and as stated: {}; all others are zero.",
         each.collect::<Vec<_>>().join(", ")

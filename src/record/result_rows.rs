@@ -5,6 +5,7 @@ use crate::case::RESULT_QUANTITIES;
 use crate::engine::{COVERAGE, Outcome};
 use crate::quantity::{exact_text, two_digits};
 
+use super::cycle_working::target;
 use super::numerals::{minus, unit};
 use super::pages::ResultRow;
 use super::working::equation;
@@ -25,6 +26,17 @@ pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
             let reaction = &calculation.problem.reactions[reaction.reaction];
             row.equation = Some(equation(&calculation.problem, reaction));
         }
+    }
+    let first = calculation.working.reactions.len();
+    for (at, working) in calculation.working.cycles.iter().enumerate() {
+        let cycle = &calculation.problem.cycles[working.cycle];
+        let outcome = calculation.working.outcome(&format!("{}.heat", cycle.id));
+        let mut row = match outcome {
+            Some(outcome) => result_row(calculation, outcome, first + at),
+            None => not_worked(&cycle.id, first + at),
+        };
+        row.equation = Some(target(cycle));
+        rows.push(row);
     }
     rows
 }
@@ -66,6 +78,11 @@ pub(super) fn what(calculation: &Calculation, outcome: &Outcome) -> String {
         .and_then(|r| r.per.as_ref())
         .map_or("", |per| per.value.as_str());
     let at = kelvin(calculation, id);
+    if calculation.case.cycles.contains_key(id) {
+        return format!(
+            "Heat of reaction at {at} K from a cycle, per mole of the target as written"
+        );
+    }
     match quantity {
         "heat" => format!("Heat of reaction at {at} K, per mole of reaction as written"),
         "heat-per" => format!("Heat of reaction at {at} K, per mole of {per}"),
@@ -76,7 +93,12 @@ pub(super) fn what(calculation: &Calculation, outcome: &Outcome) -> String {
 fn kelvin(calculation: &Calculation, id: &str) -> String {
     let mut reactions = calculation.problem.reactions.iter();
     let reaction = reactions.find(|reaction| reaction.id == id);
-    reaction.map_or(String::new(), |r| minus(&exact_text(&r.kelvin)))
+    let mut cycles = calculation.problem.cycles.iter();
+    let cycle = cycles
+        .find(|cycle| cycle.id == id)
+        .and_then(|cycle| cycle.kelvin());
+    let kelvin = reaction.map(|r| &r.kelvin).or(cycle);
+    kelvin.map_or(String::new(), |kelvin| minus(&exact_text(kelvin)))
 }
 
 /// The expanded uncertainty where it covers every value used, otherwise none.

@@ -3,6 +3,7 @@
 use serde::Serialize;
 use serde_json::{Map, Value, json};
 
+use super::cycle_json::adjustments;
 use crate::calculation::Calculation;
 use crate::engine::{COVERAGE, Outcome};
 use crate::finding::{Finding, Place};
@@ -14,7 +15,7 @@ use crate::source::{Problem, ValueUsed};
 pub fn results_json(calculation: &Calculation) -> String {
     let document = Document {
         record: record(calculation),
-        results: results(&calculation.working.outcomes),
+        results: results(calculation),
         values_used: values_used(&calculation.problem),
         findings: calculation.working.findings.iter().map(finding).collect(),
         criteria: Map::new(),
@@ -50,11 +51,17 @@ fn record(calculation: &Calculation) -> Value {
     })
 }
 
-fn results(outcomes: &[Outcome]) -> Map<String, Value> {
-    outcomes
-        .iter()
+fn results(calculation: &Calculation) -> Map<String, Value> {
+    let outcomes = calculation.working.outcomes.iter();
+    let mut results: Map<String, Value> = outcomes
         .map(|outcome| (outcome.id.clone(), result(outcome)))
-        .collect()
+        .collect();
+    for (id, adjustment) in adjustments(calculation) {
+        if let Some(Value::Object(result)) = results.get_mut(&id) {
+            result.insert("adjustment".into(), adjustment);
+        }
+    }
+    results
 }
 
 fn result(outcome: &Outcome) -> Value {

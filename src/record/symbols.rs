@@ -2,19 +2,19 @@
 
 use super::math::Math;
 
-fn symbol(text: &str) -> Math {
+pub(super) fn symbol(text: &str) -> Math {
     Math::Symbol { text: text.into() }
 }
 
-fn upright(text: &str) -> Math {
+pub(super) fn upright(text: &str) -> Math {
     Math::Upright { text: text.into() }
 }
 
-fn row(of: Vec<Math>) -> Math {
+pub(super) fn row(of: Vec<Math>) -> Math {
     Math::Row { of }
 }
 
-fn with_sub(base: Math, sub: Math) -> Math {
+pub(super) fn with_sub(base: Math, sub: Math) -> Math {
     Math::Attach {
         base: Box::new(base),
         sub: Some(Box::new(sub)),
@@ -31,7 +31,7 @@ fn with_both(base: Math, sub: Math, sup: Math) -> Math {
 }
 
 /// Δ_x H°_i
-fn enthalpy(of: &str, index: Option<&str>) -> Math {
+pub(super) fn enthalpy(of: &str, index: Option<&str>) -> Math {
     let h = match index {
         Some(index) => with_both(symbol("H"), symbol(index), upright("°")),
         None => Math::Attach {
@@ -43,7 +43,7 @@ fn enthalpy(of: &str, index: Option<&str>) -> Math {
     row(vec![with_sub(upright("Δ"), upright(of)), h])
 }
 
-fn sum(index: &str) -> Math {
+pub(super) fn sum(index: &str) -> Math {
     Math::Sum {
         index: Box::new(symbol(index)),
     }

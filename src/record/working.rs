@@ -5,6 +5,7 @@ use crate::engine::{Hess, MolarMass, Outcome, ReactionWorking};
 use crate::quantity::{exact_text, terminating_decimal, working_text};
 use crate::source::{Problem, ProblemReaction};
 
+use super::cycle_working::cycle_sections;
 use super::formation_table::{cancelled, formation_table};
 use super::heat_working::heat_steps;
 use super::math::Math;
@@ -19,9 +20,8 @@ use super::tables::{enthalpy, mark, number, text};
 
 pub(super) fn working_sections(calculation: &Calculation) -> Vec<WorkingSection> {
     let reactions = calculation.working.reactions.iter();
-    reactions
-        .map(|reaction| section(calculation, reaction))
-        .collect()
+    let reactions = reactions.map(|reaction| section(calculation, reaction));
+    reactions.chain(cycle_sections(calculation)).collect()
 }
 
 fn section(calculation: &Calculation, working: &ReactionWorking) -> WorkingSection {
@@ -291,7 +291,7 @@ fn mass_substitution(per: &Outcome, by_mass: &Outcome, mass: &MolarMass) -> Rich
         ))
 }
 
-fn result(calculation: &Calculation, outcome: &Outcome) -> Step {
+pub(super) fn result(calculation: &Calculation, outcome: &Outcome) -> Step {
     let text = Rich::plain(format!("{}: ", what(calculation, outcome)))
         .run(Run::Strong(in_words(outcome)))
         .and(format!(", {}", outcome.direction().word()));

@@ -11,6 +11,7 @@ use super::store::Source;
 /// The conventions: elements in their reference states, the hydrogen ion and the electron.
 pub(super) const CONVENTIONS: &str = "conventions";
 pub(super) const ATOMIC_WEIGHTS: &str = "atomic-weights-2021";
+pub(super) const CONSTANTS: &str = "constants-2022";
 pub(super) const GLENN: &str = glenn::ID;
 
 /// Source files that are part of the program.
@@ -21,17 +22,11 @@ pub(super) const FILES: [(&str, &str); 4] = [
         ATOMIC_WEIGHTS,
         include_str!("data/atomic-weights-2021.toml"),
     ),
-    ("constants-2022", include_str!("data/constants-2022.toml")),
+    (CONSTANTS, include_str!("data/constants-2022.toml")),
 ];
 
 /// The ids of all built-in sources.
-pub const BUILT_IN: [&str; 5] = [
-    CONVENTIONS,
-    "codata-1989",
-    GLENN,
-    ATOMIC_WEIGHTS,
-    "constants-2022",
-];
+pub const BUILT_IN: [&str; 5] = [CONVENTIONS, "codata-1989", GLENN, ATOMIC_WEIGHTS, CONSTANTS];
 
 /// A built-in source by its id.
 pub fn built_in(id: &str) -> Option<Source> {

@@ -156,7 +156,7 @@ fn tells_isomers(wanted: &Wanted) -> bool {
     })
 }
 
-fn choice_for<'c>(resolver: &Resolver<'c>, wanted: &Wanted) -> Option<&'c Choice> {
+pub(super) fn choice_for<'c>(resolver: &Resolver<'c>, wanted: &Wanted) -> Option<&'c Choice> {
     resolver.case.choices.iter().find(|choice| {
         let label = Species::parse(&choice.substance.value).map(|species| species.to_string());
         label.as_ref() == Ok(&wanted.label) || choice.substance.value == wanted.label
@@ -232,7 +232,7 @@ fn note_passed_over(
 }
 
 /// What was taken for granted about the identity of a substance is said.
-fn note_identity(
+pub(super) fn note_identity(
     resolver: &mut Resolver<'_>,
     wanted: &Wanted,
     kelvin: &Exact,

@@ -20,10 +20,13 @@ impl Resolver<'_> {
         let participant = Participant::parse(&named.value).ok()?;
         let wanted = self.wanted(&participant)?;
         let span = &named.span;
+        self.looked_up.insert(wanted.label.clone());
         let mut found: Vec<(usize, Entry)> = Vec::new();
         for source in 0..self.consulted {
             let entries = self.sources[source].of_composition(&wanted.species.formula.hill());
-            let with_value = entries.into_iter().filter(|e| e.combustion_enthalpy.is_some());
+            let with_value = entries
+                .into_iter()
+                .filter(|e| e.combustion_enthalpy.is_some());
             match pick(&wanted, &with_value.collect::<Vec<_>>()) {
                 Match::None => {}
                 Match::One(entry) => found.push((source, *entry)),
@@ -35,7 +38,8 @@ impl Resolver<'_> {
             }
         }
         let chosen = choice_for(self, &wanted).map(|choice| choice.source.value.clone());
-        let chosen = chosen.and_then(|id| found.iter().position(|(s, _)| self.sources[*s].id() == id));
+        let chosen =
+            chosen.and_then(|id| found.iter().position(|(s, _)| self.sources[*s].id() == id));
         let Some((source, entry)) = found.get(chosen.unwrap_or(0)).cloned() else {
             self.no_combustion(named);
             return None;
@@ -49,7 +53,14 @@ impl Resolver<'_> {
         let significance = formation_significance(&printed, head);
         let value = ValueUsed {
             significance,
-            ..value_of(source, head, ValueKind::CombustionEnthalpy, &entry, printed, span)
+            ..value_of(
+                source,
+                head,
+                ValueKind::CombustionEnthalpy,
+                &entry,
+                printed,
+                span,
+            )
         };
         Some(self.enter_value(value, ""))
     }

@@ -24,6 +24,11 @@ pub fn attachment_name(id: &str) -> String {
 pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
     let mut formulas = unusual_states(problem);
     formulas.extend(problem.substances.iter().map(|s| s.species.formula.hill()));
+    let burnt = problem
+        .values
+        .iter()
+        .filter(|v| v.kind == ValueKind::CombustionEnthalpy);
+    formulas.extend(burnt.flat_map(|v| &v.species).map(|s| s.formula.hill()));
     let states = reference_formulas(problem);
     let capacities = mixes_temperatures(problem);
     let excerpt = |(index, source): (usize, &Source)| {
@@ -85,9 +90,10 @@ fn entries(
         .iter()
         .flat_map(|f| source.of_composition(f))
         .collect();
-    let weights = problem.values.iter();
-    let weights = weights.filter(|v| v.source == index && v.kind == ValueKind::AtomicWeight);
-    entries.extend(weights.filter_map(|v| source.of_symbol(&v.substance)));
+    let by_symbol = [ValueKind::AtomicWeight, ValueKind::GasConstant];
+    let symbols = problem.values.iter();
+    let symbols = symbols.filter(|v| v.source == index && by_symbol.contains(&v.kind));
+    entries.extend(symbols.filter_map(|v| source.of_symbol(&v.substance)));
     entries
 }
 

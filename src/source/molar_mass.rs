@@ -21,6 +21,11 @@ impl Resolver<'_> {
             self.refuse_mass_of_ion(reaction, species);
             return Vec::new();
         }
+        self.weights(species, span)
+    }
+
+    /// The atomic weights of a neutral substance.
+    pub(super) fn weights(&mut self, species: &Species, span: &Span) -> Vec<(usize, Exact)> {
         let counts = species.formula.counts().clone();
         let weights = counts.into_iter().filter_map(|(element, count)| {
             Some((self.atomic_weight(element.symbol(), span)?, count))

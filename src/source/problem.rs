@@ -4,6 +4,7 @@ use crate::finding::{Finding, Span};
 use crate::notation::{Equation, Species};
 use crate::quantity::{Correlations, Decimal, Exact, InputUncertainty, Quantity, Significance};
 
+use super::cycle::ProblemCycle;
 use super::heat_capacity::HeatCapacity;
 use super::reference_states::ReferenceStates;
 use super::standing::Standing;
@@ -23,6 +24,8 @@ pub struct Problem {
     pub substances: Vec<Substance>,
     pub values: Vec<ValueUsed>,
     pub reactions: Vec<ProblemReaction>,
+    /// Each after those that it rests on.
+    pub cycles: Vec<ProblemCycle>,
     /// Molar enthalpies of substances at the temperatures asked for.
     pub paths: Vec<EnthalpyPath>,
     /// Between values used, by their index.

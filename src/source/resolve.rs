@@ -13,6 +13,7 @@ use super::builtin::ATOMIC_WEIGHTS;
 use super::choose::choose;
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
+use super::cycle::ProblemCycle;
 use super::matching::Wanted;
 use super::model::{Entry, SourceHead, Subject};
 use super::path::{Candidate, Material, reference_kelvin};
@@ -38,17 +39,21 @@ pub fn resolve(
         .values()
         .any(|reaction| reaction.per.is_some())
     {
-        resolver.add_atomic_weights(files);
+        resolver.add_built_in(ATOMIC_WEIGHTS, files);
     }
+    resolver.add_for_cycles(files);
     let reactions = case.reactions.values();
     let reactions: Vec<_> = reactions
         .map(|reaction| resolver.reaction(reaction))
         .collect();
+    let cycles = resolver.cycles();
     resolver.check_choices();
     resolver.check_allowances();
     resolver.check_correlations();
     let faults = std::mem::take(&mut resolver.faults);
-    let problem = faults.is_empty().then(|| resolver.problem(reactions));
+    let problem = faults
+        .is_empty()
+        .then(|| resolver.problem(reactions, cycles));
     (problem, faults)
 }
 
@@ -75,6 +80,10 @@ pub(super) struct Resolver<'a> {
     /// What was said, so that it is said once.
     pub(super) said: BTreeSet<String>,
     pub(super) case_source: usize,
+    /// Correlations that the case states between values used.
+    pub(super) stated_correlations: Correlations,
+    /// Participants that are looked up beside reactions, by their label.
+    pub(super) looked_up: BTreeSet<String>,
     pub(super) atomic_weights: BTreeMap<String, usize>,
     pub(super) findings: Vec<Finding>,
     pub(super) faults: Faults,
@@ -107,6 +116,8 @@ impl<'a> Resolver<'a> {
             known_paths: BTreeMap::new(),
             entered: BTreeMap::new(),
             said: BTreeSet::new(),
+            stated_correlations: Correlations::default(),
+            looked_up: BTreeSet::new(),
             became: consultation.became,
             known: BTreeMap::new(),
             substances: Vec::new(),
@@ -120,12 +131,13 @@ impl<'a> Resolver<'a> {
 
     /// Whether the case names a substance in what it works.
     pub(super) fn is_participant(&self, label: &str) -> bool {
-        self.known.keys().any(|(known, _)| known == label)
+        self.looked_up.contains(label) || self.known.keys().any(|(known, _)| known == label)
     }
 
     /// The substances that the case names in what it works, each as it writes it.
     pub(super) fn participants(&self) -> impl Iterator<Item = &str> {
-        self.known.keys().map(|(known, _)| known.as_str())
+        let looked_up = self.looked_up.iter().map(String::as_str);
+        looked_up.chain(self.known.keys().map(|(known, _)| known.as_str()))
     }
 
     /// All entries of the sources.
@@ -134,24 +146,24 @@ impl<'a> Resolver<'a> {
         self.listed.get_or_init(gathered)
     }
 
-    fn add_atomic_weights(&mut self, files: &dyn SourceFiles) {
-        if self
-            .sources
-            .iter()
-            .any(|source| source.id() == ATOMIC_WEIGHTS)
-        {
+    /// A built-in source that results need beyond those consulted.
+    pub(super) fn add_built_in(&mut self, id: &str, files: &dyn SourceFiles) {
+        if self.sources.iter().any(|source| source.id() == id) {
             return;
         }
-        let (source, faults) = load_built_in(ATOMIC_WEIGHTS, files);
+        let (source, faults) = load_built_in(id, files);
         self.faults.extend(faults);
         if let Some(source) = source {
-            self.became
-                .push((ATOMIC_WEIGHTS.to_string(), self.sources.len()));
+            self.became.push((id.to_string(), self.sources.len()));
             self.sources.push(source);
         }
     }
 
-    fn problem(self, reactions: Vec<Option<ProblemReaction>>) -> Problem {
+    fn problem(
+        self,
+        reactions: Vec<Option<ProblemReaction>>,
+        cycles: Vec<ProblemCycle>,
+    ) -> Problem {
         let correlations = self.correlations();
         let counts = self.substances.iter().map(|s| s.species.formula.counts());
         let elements: BTreeSet<Element> = counts.flat_map(|c| c.keys().copied()).collect();
@@ -165,6 +177,7 @@ impl<'a> Resolver<'a> {
             substances: self.substances,
             values: self.values,
             reactions: reactions.into_iter().flatten().collect(),
+            cycles,
             correlations,
             findings: self.findings,
             sources: self.sources,
@@ -173,7 +186,7 @@ impl<'a> Resolver<'a> {
 
     fn reaction(&mut self, reaction: &Reaction) -> Option<ProblemReaction> {
         let equation = &reaction.equation;
-        self.check_balance(reaction);
+        self.check_balance(equation);
         let (kelvin, temperature_value) = self.temperature(reaction.temperature.as_ref());
         let sides = [(&equation.value.left, -1), (&equation.value.right, 1)];
         let mut terms = Vec::new();
@@ -372,7 +385,7 @@ impl<'a> Resolver<'a> {
 
     /// Correlations that the sources state, between values used.
     fn correlations(&self) -> Correlations {
-        let mut correlations = Correlations::default();
+        let mut correlations = self.stated_correlations.clone();
         for (index, source) in self.sources.iter().enumerate() {
             for stated in &source.correlations {
                 let of = |wanted: &Species| {

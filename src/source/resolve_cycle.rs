@@ -7,14 +7,28 @@ use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
 use crate::notation::{Equation, Participant, PhaseLabel, Term};
 use crate::quantity::{Dimension, Exact, Quantity, to_f64};
 
-use super::builtin::CONSTANTS;
+use super::builtin::{ATOMIC_WEIGHTS, CONSTANTS};
 use super::case_values::CaseValue;
+use super::consult::SourceFiles;
 use super::cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};
 use super::path::reference_kelvin;
 use super::problem::ValueKind;
 use super::resolve::{Resolver, value_of};
 
 impl Resolver<'_> {
+    /// The built-in sources that cycles need.
+    pub(super) fn add_for_cycles(&mut self, files: &dyn SourceFiles) {
+        let steps = || self.case.cycles.values().flat_map(|cycle| &cycle.steps);
+        let weighed = steps().any(|step| step.per.is_some());
+        let bombs = steps().any(|step| step.measured == Measured::InternalEnergy);
+        if weighed {
+            self.add_built_in(ATOMIC_WEIGHTS, files);
+        }
+        if bombs {
+            self.add_built_in(CONSTANTS, files);
+        }
+    }
+
     /// The cycles of the case, each after those that it rests on.
     pub(super) fn cycles(&mut self) -> Vec<ProblemCycle> {
         let case = self.case;
@@ -53,7 +67,11 @@ impl Resolver<'_> {
             target: cycle.target.value.clone(),
             species,
             numbers,
-            gas_constant: if bomb { self.gas_constant_value(cycle) } else { None },
+            gas_constant: if bomb {
+                self.gas_constant_value(cycle)
+            } else {
+                None
+            },
             steps,
             inflate: cycle.inflate.is_some(),
             span: cycle.target.span.clone(),
@@ -175,7 +193,10 @@ impl Resolver<'_> {
         }
         Some(ProblemStep {
             name,
-            equation: step.equation.as_ref().map_or(equation, |own| own.value.clone()),
+            equation: step
+                .equation
+                .as_ref()
+                .map_or(equation, |own| own.value.clone()),
             numbers,
             heat: StepSource::Result {
                 name: result.value.clone(),

@@ -3,17 +3,15 @@
 use num_bigint::BigInt;
 use num_traits::Zero;
 
-use crate::case::Reaction;
-use crate::finding::{Fault, FaultCode, Text};
-use crate::notation::{Conserved, Formula, Surplus, Term, balanced_form, imbalance};
+use crate::finding::{Fault, FaultCode, Located, Text};
+use crate::notation::{Conserved, Equation, Formula, Surplus, Term, balanced_form, imbalance};
 use crate::quantity::{Exact, exact_text};
 
 use super::resolve::Resolver;
 
 impl Resolver<'_> {
     /// Reports an equation that does not balance, where all its formulas are known.
-    pub(super) fn check_balance(&mut self, reaction: &Reaction) {
-        let equation = &reaction.equation;
+    pub(super) fn check_balance(&mut self, equation: &Located<Equation>) {
         let sides = [&equation.value.left, &equation.value.right];
         let [left, right] = sides.map(|side| {
             side.iter()
@@ -42,7 +40,7 @@ impl Resolver<'_> {
             &right.iter().collect::<Vec<_>>(),
         );
         self.faults
-            .push(unbalanced(self.text, reaction, &off, form.as_deref()));
+            .push(unbalanced(self.text, equation, &off, form.as_deref()));
     }
 
     fn formula_of(&self, term: &Term) -> Option<(Exact, Formula)> {
@@ -53,16 +51,24 @@ impl Resolver<'_> {
 
 /// Says which element or the charge is off and by how much, and the balanced form where there is
 /// exactly one.
-fn unbalanced(text: &Text, reaction: &Reaction, off: &[Surplus], form: Option<&[BigInt]>) -> Fault {
+fn unbalanced(
+    text: &Text,
+    equation: &Located<Equation>,
+    off: &[Surplus],
+    form: Option<&[BigInt]>,
+) -> Fault {
     let found: Vec<String> = off.iter().map(describe).collect();
     let advice = match form {
-        Some(coefficients) => format!("balanced it reads: {}", balanced(reaction, coefficients)),
+        Some(coefficients) => format!(
+            "balanced it reads: {}",
+            balanced(&equation.value, coefficients)
+        ),
         None => not_balanced(off),
     };
     Fault::new(
         FaultCode::Unbalanced,
         text,
-        &reaction.equation.span,
+        &equation.span,
         found.join("; "),
         "as many atoms of each element, and as much charge, on the right as on the left",
         advice,
@@ -102,8 +108,7 @@ fn describe(surplus: &Surplus) -> String {
     }
 }
 
-fn balanced(reaction: &Reaction, coefficients: &[BigInt]) -> String {
-    let equation = &reaction.equation.value;
+fn balanced(equation: &Equation, coefficients: &[BigInt]) -> String {
     let (left, right) = coefficients.split_at(equation.left.len().min(coefficients.len()));
     format!(
         "{} -> {}",

@@ -152,7 +152,13 @@ fn correlated(covariance: &[Vec<Exact>], standard: &[f64]) -> Vec<(usize, usize,
     let pairs = (0..standard.len()).flat_map(|a| (a + 1..standard.len()).map(move |b| (a, b)));
     let pairs = pairs.filter(|(a, b)| !covariance[*a][*b].is_zero());
     pairs
-        .map(|(a, b)| (a, b, to_f64(&covariance[a][b]) / (standard[a] * standard[b])))
+        .map(|(a, b)| {
+            (
+                a,
+                b,
+                to_f64(&covariance[a][b]) / (standard[a] * standard[b]),
+            )
+        })
         .collect()
 }
 

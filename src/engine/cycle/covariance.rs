@@ -46,8 +46,10 @@ pub(super) struct Covariances {
 
 impl Covariances {
     pub(super) fn of(problem: &Problem, forms: &[&LinearForm]) -> Covariances {
-        let used: BTreeSet<usize> =
-            forms.iter().flat_map(|form| form.iter().map(|(index, _)| index)).collect();
+        let used: BTreeSet<usize> = forms
+            .iter()
+            .flat_map(|form| form.iter().map(|(index, _)| index))
+            .collect();
         let known = |index: &usize| Some((*index, standard(problem, *index)?));
         let standards: BTreeMap<usize, Exact> = used.iter().filter_map(known).collect();
         let mut between = Vec::new();
@@ -77,16 +79,19 @@ impl Covariances {
 
     /// Σ c_k c_l u_k u_l r_kl to first order (JCGM 100:2008, F.1.2.3, from memory).
     fn between(&self, a: &BTreeMap<usize, Exact>, b: &BTreeMap<usize, Exact>) -> Exact {
-        let shared = a.iter().filter_map(|(index, c)| {
-            Some(c * b.get(index)? * self.variances.get(index)?)
-        });
-        let correlated = self.between.iter().filter_map(|(k, l, covariance)| {
-            Some(a.get(k)? * b.get(l)? * covariance)
-        });
+        let shared = a
+            .iter()
+            .filter_map(|(index, c)| Some(c * b.get(index)? * self.variances.get(index)?));
+        let correlated = self
+            .between
+            .iter()
+            .filter_map(|(k, l, covariance)| Some(a.get(k)? * b.get(l)? * covariance));
         shared.chain(correlated).sum()
     }
 }
 
 fn sensitivities(form: &LinearForm) -> Option<BTreeMap<usize, Exact>> {
-    form.iter().map(|(index, c)| Some((index, c.to_exact()?))).collect()
+    form.iter()
+        .map(|(index, c)| Some((index, c.to_exact()?)))
+        .collect()
 }

@@ -59,9 +59,8 @@ impl Say<'_> {
 
     fn about_step(&self, step: &ProblemStep, heat: Option<&StepHeat>) -> Option<Finding> {
         if let (StepSource::Result { name }, None) = (&step.heat, heat) {
-            let message = format!(
-                "rests on {name}, which was not worked. No result is given without it."
-            );
+            let message =
+                format!("rests on {name}, which was not worked. No result is given without it.");
             let code = FindingCode::CycleNotWorked;
             return Some(self.at_step(Severity::Stop, code, step, message));
         }
@@ -87,7 +86,12 @@ impl Say<'_> {
              Make them, and write reduced-to-standard-states = true.",
             step.name
         );
-        self.at_step(Severity::Caution, FindingCode::BombNotReduced, step, message)
+        self.at_step(
+            Severity::Caution,
+            FindingCode::BombNotReduced,
+            step,
+            message,
+        )
     }
 
     fn temperatures(&self) -> Option<Finding> {
@@ -109,7 +113,10 @@ impl Say<'_> {
             NoMultipliers::LeftOver(left) => format!(
                 "no sum of the steps gives the target; left over: {}. Add a step that brings them \
                  in, or write one substance the same way everywhere.{}",
-                list(left.iter().map(|(species, amount)| self.amount(*species, amount))),
+                list(
+                    left.iter()
+                        .map(|(species, amount)| self.amount(*species, amount))
+                ),
                 self.written_twice()
             ),
             NoMultipliers::TooLarge => "more steps, more substances or longer stoichiometric \
@@ -127,7 +134,11 @@ impl Say<'_> {
             "1" => String::new(),
             _ => format!("{} ", amount.abs()),
         };
-        let side = if amount.is_negative() { "consumed" } else { "formed" };
+        let side = if amount.is_negative() {
+            "consumed"
+        } else {
+            "formed"
+        };
         format!("{number}{label} {side}")
     }
 
@@ -204,7 +215,9 @@ impl Say<'_> {
         if adjustment.degrees_of_freedom <= 2 {
             findings.push(self.weak(adjustment));
         }
-        let misfit = adjustment.most_deviant().is_some_and(|(_, w)| w.abs() > CRITICAL_RESIDUAL);
+        let misfit = adjustment
+            .most_deviant()
+            .is_some_and(|(_, w)| w.abs() > CRITICAL_RESIDUAL);
         if adjustment.probability < SIGNIFICANCE_LEVEL || misfit {
             findings.push(self.disagree(adjustment));
         }
@@ -217,8 +230,10 @@ impl Say<'_> {
     fn unused(&self, weights: &[Exact]) -> Option<Finding> {
         let zero = Exact::from_integer(0.into());
         let steps = self.cycle.steps.iter().zip(weights);
-        let unused: Vec<&ProblemStep> =
-            steps.filter(|(_, weight)| **weight == zero).map(|(step, _)| step).collect();
+        let unused: Vec<&ProblemStep> = steps
+            .filter(|(_, weight)| **weight == zero)
+            .map(|(step, _)| step)
+            .collect();
         let first = unused.first()?;
         let message = format!(
             "the target needs nothing of {}.",
@@ -229,7 +244,11 @@ impl Say<'_> {
 
     fn weak(&self, adjustment: &Adjustment) -> Finding {
         let message = weakness(adjustment.degrees_of_freedom).unwrap_or_default();
-        self.finding(Severity::Note, FindingCode::CycleWeakTest, message.to_string())
+        self.finding(
+            Severity::Note,
+            FindingCode::CycleWeakTest,
+            message.to_string(),
+        )
     }
 
     fn disagree(&self, adjustment: &Adjustment) -> Finding {
@@ -265,19 +284,21 @@ impl Say<'_> {
 pub fn closure_text(cycle: &ProblemCycle, by: &[Exact]) -> String {
     let zero = Exact::from_integer(0.into());
     let terms = cycle.steps.iter().zip(by).filter(|(_, by)| **by != zero);
-    terms.enumerate().fold(String::new(), |text, (at, (step, by))| {
-        let sign = match (at, by.is_negative()) {
-            (0, false) => "",
-            (0, true) => "−",
-            (_, false) => " + ",
-            (_, true) => " − ",
-        };
-        let number = match by.abs().to_string().as_str() {
-            "1" => String::new(),
-            number => format!("{number}·"),
-        };
-        format!("{text}{sign}{number}({})", step.name)
-    })
+    terms
+        .enumerate()
+        .fold(String::new(), |text, (at, (step, by))| {
+            let sign = match (at, by.is_negative()) {
+                (0, false) => "",
+                (0, true) => "−",
+                (_, false) => " + ",
+                (_, true) => " − ",
+            };
+            let number = match by.abs().to_string().as_str() {
+                "1" => String::new(),
+                number => format!("{number}·"),
+            };
+            format!("{text}{sign}{number}({})", step.name)
+        })
 }
 
 /// What the test can and cannot see where there is little redundancy. The sizes are the square
@@ -331,8 +352,13 @@ pub fn local_test(cycle: &ProblemCycle, adjustment: &Adjustment) -> String {
     let Some((step, size)) = adjustment.most_deviant() else {
         return "No determination is checked by another one.".to_string();
     };
-    let like = |w: &Option<f64>| w.is_some_and(|w| (w.abs() - size.abs()).abs() < 1e-9 * size.abs());
-    let alike = cycle.steps.iter().zip(&adjustment.normalised).filter(|(_, w)| like(w));
+    let like =
+        |w: &Option<f64>| w.is_some_and(|w| (w.abs() - size.abs()).abs() < 1e-9 * size.abs());
+    let alike = cycle
+        .steps
+        .iter()
+        .zip(&adjustment.normalised)
+        .filter(|(_, w)| like(w));
     let names: Vec<String> = alike.map(|(step, _)| step.name.clone()).collect();
     let beyond = match size.abs() > CRITICAL_RESIDUAL {
         true => "beyond",

@@ -19,7 +19,7 @@ use super::outcome::Outcome;
 use super::work::{WorkOptions, Working};
 use super::worked::Worked;
 
-pub use adjust::{Adjustment, NoAdjustment};
+pub use adjust::Adjustment;
 pub use findings::{closure_text, decimals, global_test, local_test, weakness};
 pub use heat::StepHeat;
 pub use multipliers::{Multipliers, NoMultipliers};
@@ -86,7 +86,10 @@ pub(super) fn work_cycle(
     working.findings.extend(say.before(&heats, &found));
     let mut adjustment = None;
     let mut sum = None;
-    let complete: Option<Vec<Worked>> = heats.iter().map(|h| Some(h.as_ref()?.heat.clone())).collect();
+    let complete: Option<Vec<Worked>> = heats
+        .iter()
+        .map(|h| Some(h.as_ref()?.heat.clone()))
+        .collect();
     if let (Some(heats), Ok(found), Some(_)) = (complete, &found, cycle.kelvin()) {
         match adjusted(problem, &heats, found, &say) {
             Ok(done) => {
@@ -166,7 +169,11 @@ fn sum_of(
             significance: significance(heats, &values, &weights),
             form: form(heats, &weights),
         },
-        inflation: if cycle.inflate && birge > 1.0 { birge } else { 1.0 },
+        inflation: if cycle.inflate && birge > 1.0 {
+            birge
+        } else {
+            1.0
+        },
         weights,
     })
 }
