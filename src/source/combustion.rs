@@ -8,6 +8,7 @@ use crate::notation::Participant;
 use super::choose::{choice_for, note_identity};
 use super::matching::{Match, pick};
 use super::model::Entry;
+use super::path::reference_kelvin;
 use super::path_values::formation_significance;
 use super::problem::{ValueKind, ValueUsed};
 use super::resolve::{Resolver, value_of};
@@ -44,7 +45,7 @@ impl Resolver<'_> {
             self.no_combustion(named);
             return None;
         };
-        note_identity(self, &wanted, span, &entry);
+        note_identity(self, &wanted, &reference_kelvin(), span, &entry);
         let printed = entry.combustion_enthalpy.clone()?;
         if !printed.decimal.value().is_negative() {
             self.not_released(named, source);
