@@ -1,29 +1,12 @@
-//! Which results the steps of cycles rest on: that they are there, and that no cycle rests on
-//! itself.
+//! Which cycles rest on which: the order in which they are worked, and that none rests on itself.
 
 use indexmap::IndexMap;
 
-use crate::document::{Reader, value_fault};
+use crate::document::Reader;
 use crate::finding::{FaultCode, Located};
-use crate::quantity::Dimension;
 
 use super::cycle::{Cycle, StepHeat};
 use super::given::Given;
-use super::ids::{IdKind, Ids};
-use super::results::Results;
-
-/// Reports results that are not there, or that no step can take, and rings of cycles.
-pub(super) fn check_references(
-    reader: &Reader<'_>,
-    cycles: &IndexMap<String, Cycle>,
-    results: &Results,
-    ids: &Ids,
-) {
-    for name in cycles.values().flat_map(named) {
-        check(reader, name, results, ids);
-    }
-    report_rings(reader, cycles);
-}
 
 /// The results that a cycle's steps name.
 fn named(cycle: &Cycle) -> impl Iterator<Item = &Located<String>> {
@@ -33,30 +16,12 @@ fn named(cycle: &Cycle) -> impl Iterator<Item = &Located<String>> {
     })
 }
 
-fn check(reader: &Reader<'_>, name: &Located<String>, results: &Results, ids: &Ids) {
-    let advice = "write it as in heat = \"water-formation.heat\"";
-    results.check(reader, name, ids, advice);
-    let Some(dimension) = results.dimension(&name.value) else {
-        return;
-    };
-    let kind = ids.kind(id_of(name));
-    let of_reaction = matches!(kind, Some(IdKind::Reaction | IdKind::Cycle));
-    if !of_reaction || dimension != Dimension::ENERGY.over(Dimension::AMOUNT) {
-        value_fault(
-            reader,
-            &name.span,
-            format!("`{}`", name.value),
-            "a heat of a reaction or of another cycle, per mole",
-            "use its `heat`",
-        );
-    }
-}
-
 fn id_of(name: &Located<String>) -> &str {
     name.value.split_once('.').map_or("", |(id, _)| id)
 }
 
-fn report_rings(reader: &Reader<'_>, cycles: &IndexMap<String, Cycle>) {
+/// Reports each ring of cycles once, where its first cycle names another one of it.
+pub(super) fn report_rings(reader: &Reader<'_>, cycles: &IndexMap<String, Cycle>) {
     for ring in &Order::of(cycles).rings {
         let ids: Vec<&str> = ring.iter().map(|index| id_at(cycles, *index)).collect();
         let first = ids.first().copied().unwrap_or_default();

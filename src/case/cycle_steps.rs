@@ -1,13 +1,14 @@
 //! Reading the steps of a cycle.
 
 use crate::document::{Table, is_id, one_of, value_fault};
-use crate::finding::{FaultCode, Located};
+use crate::finding::Located;
 use crate::notation::Equation;
 use crate::quantity::{Dimension, Quantity};
 
 use super::cycle::{CycleStep, Measured, StepHeat};
 use super::cycles::{Surroundings, read_equation};
 use super::given::{Given, Wanted, read_given, read_temperature};
+use super::ids::IdKind;
 
 const MEASURED: [(&str, Measured); 2] = [
     ("enthalpy", Measured::Enthalpy),
@@ -55,8 +56,8 @@ impl StepReader<'_, '_, '_> {
         if !has_equation && !of_result {
             table.missing("equation", "write the reaction whose heat was measured");
         }
-        if of_result {
-            self.refuse_beside_result();
+        if let Some(heat) = &heat {
+            self.refuse_beside(heat);
         }
         if equation.is_none() && (has_equation || !of_result) {
             return None;
@@ -140,12 +141,37 @@ impl StepReader<'_, '_, '_> {
             advice: HEAT,
         };
         let given = read_given(self.table.reader(), ids, inputs, text, &wanted)?;
+        if let Given::Result(name) = &given {
+            self.check_result(name);
+        }
         if by_mass && self.table.get("per").is_none() {
             let advice = "name the substance whose mass it is";
             self.table.missing("per", advice);
             return None;
         }
         Some(given)
+    }
+
+    /// A result has to be there, and to be a heat of a reaction.
+    fn check_result(&self, name: &Located<String>) {
+        let Surroundings { ids, results, .. } = self.around;
+        let reader = self.table.reader();
+        let advice = "write it as in heat = \"water-formation.heat\"";
+        results.check(reader, name, ids, advice);
+        let Some(dimension) = results.dimension(&name.value) else {
+            return;
+        };
+        let kind = name.value.split_once('.').and_then(|(id, _)| ids.kind(id));
+        let of_reaction = matches!(kind, Some(IdKind::Reaction | IdKind::Cycle));
+        if !of_reaction || dimension != Dimension::ENERGY.over(Dimension::AMOUNT) {
+            value_fault(
+                reader,
+                &name.span,
+                format!("`{}`", name.value),
+                "a heat of a reaction or of another cycle, per mole",
+                "use its `heat`",
+            );
+        }
     }
 
     /// A bomb gives an internal energy: what was measured has to be said where it was measured.
@@ -187,18 +213,32 @@ impl StepReader<'_, '_, '_> {
         super::reactions::named_participant(self.table.reader(), equation, text)
     }
 
-    /// A result has its own reaction, temperature and sources.
-    fn refuse_beside_result(&self) {
+    /// What comes from elsewhere brings its own reference and temperature.
+    fn refuse_beside(&self, heat: &StepHeat) {
+        let (what, expected) = match heat {
+            StepHeat::Given(Given::Result(_)) => (
+                "a result",
+                "a result as it is: per mole of its own reaction, at its own temperature",
+            ),
+            StepHeat::CombustionOf(_) => (
+                "`combustion-of`",
+                "a table's value as it is: per mole of the substance, at the table's temperature",
+            ),
+            StepHeat::Given(_) => return,
+        };
         for key in ["per", "temperature"] {
-            if let Some(value) = self.table.get(key) {
-                self.table.reader().fault(
-                    FaultCode::Value,
-                    &value.key_span,
-                    format!("`{key}` beside a result"),
-                    "a result as it is: per mole of its own reaction, at its own temperature",
-                    format!("remove `{key}`"),
-                );
-            }
+            let Some(value) = self.table.get(key) else {
+                continue;
+            };
+            let found = format!("`{key}` beside {what}");
+            let advice = format!("remove `{key}`");
+            value_fault(
+                self.table.reader(),
+                &value.key_span,
+                found,
+                expected,
+                advice,
+            );
         }
     }
 }

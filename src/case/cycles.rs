@@ -12,7 +12,7 @@ use super::cycle::{Cycle, CycleStep, StepCorrelation, StepHeat};
 use super::cycle_steps::StepReader;
 use super::ids::Ids;
 use super::model::{DeclaredSubstance, Input};
-use super::results::ResultQuantity;
+use super::results::{ResultQuantity, Results};
 
 /// The most steps of a cycle.
 pub(super) const MOST_STEPS: usize = 60;
@@ -31,6 +31,7 @@ pub(super) struct Surroundings<'a> {
     pub(super) ids: &'a Ids,
     pub(super) inputs: &'a IndexMap<String, Input>,
     pub(super) substances: &'a IndexMap<String, DeclaredSubstance>,
+    pub(super) results: &'a Results,
 }
 
 pub(super) fn read_cycles(

@@ -6,7 +6,7 @@ use crate::document::{Table, with_document};
 use crate::finding::{FaultCode, Faults, Text};
 
 use super::assumptions::read_assumptions;
-use super::cycle_references::check_references;
+use super::cycle_references::report_rings;
 use super::cycles::{Surroundings, read_cycles};
 use super::ids::{IdKind, Ids};
 use super::inputs::read_inputs;
@@ -77,12 +77,6 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     let inputs = inputs.map_or_else(IndexMap::new, |t| read_inputs(&t));
     let tables = [&reactions, &cycles].into_iter().flatten();
     let stated: usize = tables.map(|table| table.entries().len()).sum();
-    let around = Surroundings {
-        ids: &ids,
-        inputs: &inputs,
-        substances: &substances,
-    };
-    let read_cycles = read_cycles(cycles.as_ref(), &around);
     let reactions = match reactions {
         Some(table) => read_reactions(&table, &ids, &inputs, &substances),
         None if cycles.is_some() => IndexMap::new(),
@@ -96,8 +90,15 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     };
     let mut results = Results::default();
     results.add_reactions(&reactions);
-    results.add_cycles(&read_cycles);
-    check_references(root.reader(), &read_cycles, &results, &ids);
+    results.add_cycles(cycles.as_ref());
+    let around = Surroundings {
+        ids: &ids,
+        inputs: &inputs,
+        substances: &substances,
+        results: &results,
+    };
+    let read_cycles = read_cycles(cycles.as_ref(), &around);
+    report_rings(root.reader(), &read_cycles);
     let units = read_units(root.table("units").as_ref());
     let sources = root.table("sources");
     if sources.is_none() {

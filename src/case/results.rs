@@ -2,11 +2,10 @@
 
 use indexmap::IndexMap;
 
-use crate::document::{Reader, is_id};
+use crate::document::{Reader, Table, is_id};
 use crate::finding::{FaultCode, Located, Span, nearest};
 use crate::quantity::Dimension;
 
-use super::cycle::Cycle;
 use super::ids::{IdKind, Ids};
 use super::model::Reaction;
 
@@ -48,10 +47,11 @@ impl Results {
         }
     }
 
-    pub(super) fn add_cycles(&mut self, cycles: &IndexMap<String, Cycle>) {
-        for id in cycles.keys() {
+    /// Cycles can rest on each other, so they are known before they are read.
+    pub(super) fn add_cycles(&mut self, table: Option<&Table<'_, '_>>) {
+        for (id, _) in table.map_or_else(Vec::new, Table::entries) {
             let quantities = super::cycles::result_quantities().to_vec();
-            self.add(id, "a cycle", "cycles", quantities, Vec::new());
+            self.add(&id.value, "a cycle", "cycles", quantities, Vec::new());
         }
     }
 

@@ -1,11 +1,15 @@
 //! Combustion enthalpies that the consulted sources list.
 
+use std::collections::BTreeSet;
+
 use num_traits::Signed;
 
 use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
-use crate::notation::Participant;
+use crate::notation::{Equation, Participant, PhaseLabel, Species};
+use crate::quantity::Exact;
 
 use super::choose::{choice_for, note_identity};
+use super::cycle::CycleSpecies;
 use super::matching::{Match, pick};
 use super::model::Entry;
 use super::path::reference_kelvin;
@@ -64,6 +68,58 @@ impl Resolver<'_> {
             )
         };
         Some(self.enter_value(value, ""))
+    }
+
+    /// Tables do not always print which products their heats of combustion are for.
+    pub(super) fn check_products(
+        &mut self,
+        burnt: &Located<String>,
+        equation: &Located<Equation>,
+        species: &[CycleSpecies],
+        numbers: &[Exact],
+    ) {
+        let formed = species
+            .iter()
+            .zip(numbers)
+            .filter(|(_, nu)| nu.is_positive());
+        let formed: Vec<&Species> = formed.map(|(s, _)| &s.species).collect();
+        let is_gas = |s: &&&Species| {
+            let phase = s.phase.as_ref();
+            phase.is_some_and(|phase| phase.label == PhaseLabel::Gas)
+        };
+        let water = formed
+            .iter()
+            .filter(is_gas)
+            .any(|s| s.formula.hill() == "H2O");
+        let elements = formed.iter().flat_map(|s| s.formula.counts().keys());
+        let others: BTreeSet<&str> = elements
+            .map(|element| element.symbol())
+            .filter(|symbol| !["C", "H", "O", "N"].contains(symbol))
+            .collect();
+        let others: Vec<&str> = others.into_iter().collect();
+        let doubt = match (water, others.is_empty()) {
+            (true, _) => {
+                "that water forms as a gas, and most tables take it as a liquid, 44 kJ/mol \
+                          apart"
+                    .to_string()
+            }
+            (false, false) => format!(
+                "products with {}, for which tables differ (sulfur dioxide or sulfuric acid, \
+                 hydrogen halide as a gas or in water)",
+                others.join(", ")
+            ),
+            (false, true) => return,
+        };
+        self.findings.push(Finding {
+            severity: Severity::Caution,
+            code: FindingCode::CombustionProducts,
+            message: format!(
+                "the combustion enthalpy of `{}` is used with an equation that says {doubt}. \
+                 Compare the equation with what the table says of its products.",
+                burnt.value
+            ),
+            at: self.text.place(equation.span.start),
+        });
     }
 
     fn no_combustion(&mut self, named: &Located<String>) {

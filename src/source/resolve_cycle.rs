@@ -1,5 +1,7 @@
 //! From a cycle of the case to one that can be worked.
 
+use std::collections::BTreeMap;
+
 use num_traits::{Signed, Zero};
 
 use crate::case::{Cycle, CycleStep, Given, Measured, Order, StepHeat, step_name};
@@ -19,7 +21,7 @@ impl Resolver<'_> {
     /// The built-in sources that cycles need.
     pub(super) fn add_for_cycles(&mut self, files: &dyn SourceFiles) {
         let steps = || self.case.cycles.values().flat_map(|cycle| &cycle.steps);
-        let weighed = steps().any(|step| step.per.is_some());
+        let weighed = steps().any(|step| self.is_per_mass(step));
         let bombs = steps().any(|step| step.measured == Measured::InternalEnergy);
         if weighed {
             self.add_built_in(ATOMIC_WEIGHTS, files);
@@ -29,24 +31,33 @@ impl Resolver<'_> {
         }
     }
 
+    fn is_per_mass(&self, step: &CycleStep) -> bool {
+        let StepHeat::Given(given) = &step.heat else {
+            return false;
+        };
+        let quantity = given.quantity(&self.case.inputs);
+        quantity.is_some_and(|q| q.unit.dimension() == Dimension::ENERGY.over(Dimension::MASS))
+    }
+
     /// The cycles of the case, each after those that it rests on.
     pub(super) fn cycles(&mut self) -> Vec<ProblemCycle> {
         let case = self.case;
         let order = Order::of(&case.cycles);
-        let mut found: Vec<ProblemCycle> = Vec::with_capacity(case.cycles.len());
+        let mut found = Resolved::default();
         for index in order.worked {
             let Some((_, cycle)) = case.cycles.get_index(index) else {
                 continue;
             };
-            let resolved = self.cycle(cycle, &found);
-            found.extend(resolved);
+            if let Some(resolved) = self.cycle(cycle, &found) {
+                found.push(resolved);
+            }
         }
-        found
+        found.cycles
     }
 
-    fn cycle(&mut self, cycle: &Cycle, earlier: &[ProblemCycle]) -> Option<ProblemCycle> {
+    fn cycle(&mut self, cycle: &Cycle, earlier: &Resolved) -> Option<ProblemCycle> {
         self.check_balance(&cycle.target);
-        let mut species = Vec::new();
+        let mut species = SpeciesList::default();
         let target = self.sum(&cycle.target.value, &mut species);
         let steps: Vec<Option<ProblemStep>> = cycle
             .steps
@@ -56,16 +67,17 @@ impl Resolver<'_> {
             .collect();
         let mut steps = steps.into_iter().collect::<Option<Vec<_>>>()?;
         let mut numbers = target?;
-        numbers.resize(species.len(), Exact::zero());
+        let size = species.all.len();
+        numbers.resize(size, Exact::zero());
         for step in &mut steps {
-            step.numbers.resize(species.len(), Exact::zero());
+            step.numbers.resize(size, Exact::zero());
         }
         self.state_correlations(cycle, &steps);
         let bomb = steps.iter().any(|step| step.bomb.is_some());
         Some(ProblemCycle {
             id: cycle.id.value.clone(),
             target: cycle.target.value.clone(),
-            species,
+            species: species.all,
             numbers,
             gas_constant: if bomb {
                 self.gas_constant_value(cycle)
@@ -80,12 +92,12 @@ impl Resolver<'_> {
 
     /// An equation as stoichiometric numbers; species that are new are added to the list. None
     /// where the reading of the case has reported a participant.
-    fn sum(&self, equation: &Equation, species: &mut Vec<CycleSpecies>) -> Option<Vec<Exact>> {
+    fn sum(&self, equation: &Equation, species: &mut SpeciesList) -> Option<Vec<Exact>> {
         let mut numbers = Vec::new();
         for (terms, sign) in [(&equation.left, -1), (&equation.right, 1)] {
             for term in terms {
                 let index = self.cycle_species(term, species)?;
-                numbers.resize(species.len().max(numbers.len()), Exact::zero());
+                numbers.resize(species.all.len().max(numbers.len()), Exact::zero());
                 numbers[index] += &term.coefficient * Exact::from_integer(sign.into());
             }
         }
@@ -94,20 +106,16 @@ impl Resolver<'_> {
 
     /// Measured reactions need no source that lists their substances: a species is what the case
     /// writes.
-    fn cycle_species(&self, term: &Term, species: &mut Vec<CycleSpecies>) -> Option<usize> {
+    fn cycle_species(&self, term: &Term, species: &mut SpeciesList) -> Option<usize> {
         let wanted = self.wanted(&term.participant)?;
         let key = match &term.participant {
             Participant::Declared(id) => id.clone(),
             Participant::Species(species) => species.key(),
         };
-        let known = species.iter().position(|s| s.key == key);
-        Some(known.unwrap_or_else(|| {
-            species.push(CycleSpecies {
-                key,
-                label: wanted.label,
-                species: wanted.species,
-            });
-            species.len() - 1
+        Some(species.index(CycleSpecies {
+            key,
+            label: wanted.label,
+            species: wanted.species,
         }))
     }
 
@@ -116,8 +124,8 @@ impl Resolver<'_> {
         cycle: &Cycle,
         index: usize,
         step: &CycleStep,
-        species: &mut Vec<CycleSpecies>,
-        earlier: &[ProblemCycle],
+        species: &mut SpeciesList,
+        earlier: &Resolved,
     ) -> Option<ProblemStep> {
         let name = step_name(step.id.as_ref().map(|id| id.value.as_str()), index);
         if let Some(equation) = &step.equation {
@@ -129,6 +137,9 @@ impl Resolver<'_> {
         let equation = step.equation.as_ref()?;
         let numbers = self.sum(&equation.value, species)?;
         let value = self.step_value(cycle, step, &name)?;
+        if let StepHeat::CombustionOf(burnt) = &step.heat {
+            self.check_products(burnt, equation, &species.all, &numbers);
+        }
         let per = self.basis(step, value, species, &numbers)?;
         Some(ProblemStep {
             name,
@@ -136,14 +147,17 @@ impl Resolver<'_> {
             bomb: self.bomb(step, species, &numbers),
             numbers,
             heat: StepSource::Value { value, per },
-            kelvin: self.step_kelvin(step),
+            kelvin: self.step_kelvin(step, value),
             span: step.span.clone(),
         })
     }
 
-    fn step_kelvin(&self, step: &CycleStep) -> Exact {
+    /// What the case says, the reference temperature of the table, or 298.15 K.
+    fn step_kelvin(&self, step: &CycleStep, value: usize) -> Exact {
         let given = step.temperature.as_ref();
-        let quantity = given.and_then(|given| given.quantity(&self.case.inputs));
+        let stated = given.and_then(|given| given.quantity(&self.case.inputs));
+        let head = &self.sources[self.values[value].source].head;
+        let quantity = stated.or(head.temperature.as_ref());
         quantity.map_or_else(reference_kelvin, Quantity::value_in_si)
     }
 
@@ -153,8 +167,8 @@ impl Resolver<'_> {
         name: String,
         step: &CycleStep,
         result: &Located<String>,
-        species: &mut Vec<CycleSpecies>,
-        earlier: &[ProblemCycle],
+        species: &mut SpeciesList,
+        earlier: &Resolved,
     ) -> Option<ProblemStep> {
         // The reading of the case has checked that the result is there.
         let (id, quantity) = result.value.split_once('.')?;
@@ -164,7 +178,7 @@ impl Resolver<'_> {
                 (reaction.equation.value.clone(), kelvin)
             }
             None => {
-                let cycle = earlier.iter().find(|cycle| cycle.id == id)?;
+                let cycle = earlier.get(id)?;
                 let kelvin = cycle.kelvin().cloned().unwrap_or_else(reference_kelvin);
                 (cycle.target.clone(), kelvin)
             }
@@ -260,7 +274,7 @@ impl Resolver<'_> {
         &mut self,
         step: &CycleStep,
         value: usize,
-        species: &[CycleSpecies],
+        species: &SpeciesList,
         numbers: &[Exact],
     ) -> Option<Basis> {
         let named = match &step.heat {
@@ -270,13 +284,13 @@ impl Resolver<'_> {
         let Some(named) = named else {
             return Some(Basis::Reaction);
         };
-        let index = species.iter().position(|s| s.label == named.value)?;
+        let index = species.all.iter().position(|s| s.label == named.value)?;
         let nu = numbers.get(index)?.abs();
         let dimension = self.values[value].printed.unit.dimension();
         if dimension == Dimension::ENERGY.over(Dimension::AMOUNT) {
             return Some(Basis::Mole { species: index, nu });
         }
-        let formula = &species[index].species;
+        let formula = &species.all[index].species;
         if formula.formula.charge() != 0 {
             self.faults.push(Fault::new(
                 FaultCode::Value,
@@ -296,12 +310,7 @@ impl Resolver<'_> {
         })
     }
 
-    fn bomb(
-        &mut self,
-        step: &CycleStep,
-        species: &[CycleSpecies],
-        numbers: &[Exact],
-    ) -> Option<Bomb> {
+    fn bomb(&mut self, step: &CycleStep, species: &SpeciesList, numbers: &[Exact]) -> Option<Bomb> {
         if step.measured == Measured::Enthalpy {
             return None;
         }
@@ -309,7 +318,7 @@ impl Resolver<'_> {
             let phase = s.species.phase.as_ref();
             phase.is_some_and(|phase| phase.label == PhaseLabel::Gas)
         };
-        let gases = species.iter().zip(numbers).filter(|(s, _)| gas(s));
+        let gases = species.all.iter().zip(numbers).filter(|(s, _)| gas(s));
         let temperature_value = match &step.temperature {
             Some(Given::Input(id)) if self.is_uncertain(&id.value) => self.input_value(&id.value),
             _ => None,
@@ -358,6 +367,43 @@ impl Resolver<'_> {
                 ));
             }
         }
+    }
+}
+
+/// Species in the order in which they first appear.
+#[derive(Default)]
+struct SpeciesList {
+    all: Vec<CycleSpecies>,
+    by_key: BTreeMap<String, usize>,
+}
+
+impl SpeciesList {
+    /// The place of a species, which is added where it is new.
+    fn index(&mut self, species: CycleSpecies) -> usize {
+        let next = self.all.len();
+        let index = *self.by_key.entry(species.key.clone()).or_insert(next);
+        if index == next {
+            self.all.push(species);
+        }
+        index
+    }
+}
+
+/// Cycles that were resolved before, by their id.
+#[derive(Default)]
+struct Resolved {
+    cycles: Vec<ProblemCycle>,
+    by_id: BTreeMap<String, usize>,
+}
+
+impl Resolved {
+    fn push(&mut self, cycle: ProblemCycle) {
+        self.by_id.insert(cycle.id.clone(), self.cycles.len());
+        self.cycles.push(cycle);
+    }
+
+    fn get(&self, id: &str) -> Option<&ProblemCycle> {
+        self.cycles.get(*self.by_id.get(id)?)
     }
 }
 

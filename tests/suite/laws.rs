@@ -11,3 +11,5 @@ mod references;
 mod rerun;
 mod sums;
 pub mod support;
+
+pub use rerun::assert_reruns;

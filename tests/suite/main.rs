@@ -1,6 +1,7 @@
 //! Whole-program tests, in one binary because each links the typesetter.
 
 mod commands;
+mod cycles;
 mod faults;
 mod laws;
 mod outside;

@@ -7,6 +7,7 @@
 mod cantera;
 mod case;
 mod correlation;
+mod cycles;
 mod ferric_chloride;
 mod hydrogenation;
 mod janaf;

@@ -4,7 +4,11 @@ use std::fs;
 
 use crate::program::{Folder, repository, run};
 
-const SHIPPED: [&str; 2] = ["acid-neutralisation", "nitrobenzene-hydrogenation"];
+const SHIPPED: [&str; 3] = [
+    "acid-neutralisation",
+    "formation-from-combustion",
+    "nitrobenzene-hydrogenation",
+];
 
 #[test]
 fn the_working_of_the_shipped_cases_reads_as_expected() {
@@ -27,7 +31,7 @@ fn the_working_of_the_shipped_cases_reads_as_expected() {
 fn json_is_the_attached_results_byte_for_byte() {
     let folder = Folder::new();
     folder.copy("cases", "cases");
-    for (name, record) in SHIPPED.iter().zip(["HV-0077-B", "LA-0412-A"]) {
+    for (name, record) in SHIPPED.iter().zip(["HV-0077-B", "KT-2207-A", "LA-0412-A"]) {
         let case = format!("cases/{name}.toml");
         let computed = folder.run(&["compute", &case, "--json"]);
         assert_eq!((computed.status, computed.err.as_str()), (0, ""));

@@ -7,7 +7,8 @@ use hesswright::calculation::Calculation;
 use hesswright::finding::{Fault, Text};
 use hesswright::source::SourceFiles;
 
-const CASES: [&str; 2] = [
+const CASES: [&str; 3] = [
+    include_str!("../../../cases/formation-from-combustion.toml"),
     include_str!("../../../cases/nitrobenzene-hydrogenation.toml"),
     include_str!("../../../cases/acid-neutralisation.toml"),
 ];

@@ -69,6 +69,7 @@ fn the_shipped_cases() {
     for name in [
         "nitrobenzene-hydrogenation.toml",
         "acid-neutralisation.toml",
+        "formation-from-combustion.toml",
     ] {
         let path = folder.join(name);
         let text = Text::new(

@@ -36,6 +36,11 @@ pub fn reactions(consult: &[&str], list: &[(&str, &str)], more: &str) -> String 
     format!("{RECORD}[sources]\nconsult = {consult:?}\n{tables}{more}\n")
 }
 
+/// A case with tables of its own.
+pub fn without_reactions(consult: &[&str], tables: &str) -> String {
+    format!("{RECORD}[sources]\nconsult = {consult:?}\n{tables}")
+}
+
 /// A source `given` in one unit, with entries (substance, formation enthalpy).
 pub fn source(unit: &str, entries: &[(&str, &str)], more: &str) -> String {
     let mut text = format!(
@@ -125,6 +130,13 @@ impl Results {
     /// A field that is a number; NaN, which equals and is near to nothing, where it is not.
     pub fn number(&self, result: &str, key: &str) -> f64 {
         self.field(result, key).as_f64().unwrap_or(f64::NAN)
+    }
+
+    /// The codes of the findings.
+    pub fn codes(&self) -> Vec<String> {
+        let findings = self.0["findings"].as_array().into_iter().flatten();
+        let codes = findings.filter_map(|finding| finding["code"].as_str());
+        codes.map(str::to_string).collect()
     }
 
     pub fn exact(&self, result: &str) -> BigRational {

@@ -10,7 +10,11 @@ use sha2::{Digest, Sha256};
 use super::case::{Folder, Results, run};
 use super::tools::tool;
 
-const CASES: [&str; 2] = ["nitrobenzene-hydrogenation", "acid-neutralisation"];
+const CASES: [&str; 3] = [
+    "nitrobenzene-hydrogenation",
+    "acid-neutralisation",
+    "formation-from-combustion",
+];
 
 /// A shipped case, issued, with the files around it.
 struct Issued {
