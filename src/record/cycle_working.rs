@@ -7,7 +7,7 @@ use crate::engine::{
     Adjustment, COVERAGE, CRITICAL_RESIDUAL, CycleSum, CycleWorking, Multipliers, Outcome,
     SIGNIFICANCE_LEVEL, decimals, global_test, local_test, weakness,
 };
-use crate::quantity::{Exact, exact_text};
+use crate::quantity::{Exact, Quantity, Significance, exact_text, to_f64, two_digits};
 use crate::source::{Basis, Problem, ProblemCycle, StepSource};
 
 use super::cycle_symbols::{
@@ -139,8 +139,9 @@ impl Parts<'_> {
             .and(format!(" = {kelvin} K, "))
             .run(Run::Italic("R·T".into()))
             .and(format!(
-                " = {} J/mol. Gases alone count; the volume of the rest is left out. {}",
-                in_full(&product, crate::quantity::Significance::Exact),
+                " = {} J/mol. Gases alone count; the volume of the rest is left out. {} {}",
+                in_full(&product, Significance::Exact),
+                temperature_error(self.cycle, value),
                 reduced(self.cycle)
             ));
         vec![
@@ -344,6 +345,17 @@ fn sum_of_weights(problem: &Problem, weights: &[(usize, Exact)], text: Rich) -> 
             text.and(format!("{plus}{count} · {printed} "))
                 .run(Run::ValueUsed(index + 1))
         })
+}
+
+/// What the temperature, taken as it is stated, can do to the correction.
+fn temperature_error(cycle: &ProblemCycle, r: &Quantity) -> String {
+    let bombs = cycle.steps.iter().filter_map(|step| step.bomb.as_ref());
+    let most = bombs.map(|bomb| bomb.gas_moles.abs()).max();
+    let per_kelvin = most.unwrap_or_default() * r.value_in_si();
+    format!(
+        "An error of 0.1 K in T would move Δn·R·T by {} J/mol at the most.",
+        two_digits(to_f64(&per_kelvin) * 0.1)
+    )
 }
 
 /// Whether the bomb results hold for standard states.
