@@ -2,20 +2,19 @@
 
 use std::collections::BTreeMap;
 
-use num_traits::{Signed, Zero};
+use num_traits::Zero;
 
 use crate::case::{Cycle, CycleStep, Given, Measured, Order, StepHeat, step_name};
-use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
-use crate::notation::{Equation, Participant, PhaseLabel, Term};
-use crate::quantity::{Dimension, Exact, Quantity, to_f64};
+use crate::finding::{Fault, FaultCode, Located};
+use crate::notation::{Equation, Participant, Term};
+use crate::quantity::{Dimension, Exact, to_f64};
 
 use super::builtin::{ATOMIC_WEIGHTS, CONSTANTS};
-use super::case_values::CaseValue;
 use super::consult::SourceFiles;
-use super::cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};
+use super::cycle::{CycleSpecies, ProblemCycle, ProblemStep, StepSource};
 use super::path::reference_kelvin;
-use super::problem::ValueKind;
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
+use super::species_list::SpeciesList;
 
 impl Resolver<'_> {
     /// The built-in sources that cycles need.
@@ -152,13 +151,31 @@ impl Resolver<'_> {
         })
     }
 
-    /// What the case says, the reference temperature of the table, or 298.15 K.
-    fn step_kelvin(&self, step: &CycleStep, value: usize) -> Exact {
-        let given = step.temperature.as_ref();
-        let stated = given.and_then(|given| given.quantity(&self.case.inputs));
-        let head = &self.sources[self.values[value].source].head;
-        let quantity = stated.or(head.temperature.as_ref());
-        quantity.map_or_else(reference_kelvin, Quantity::value_in_si)
+    /// The equation that a result is of, its temperature, and what the equation is divided by
+    /// where the result is per mole of a participant. The reading of the case has checked that
+    /// the result is there.
+    fn result_equation(
+        &mut self,
+        result: &str,
+        earlier: &Resolved,
+    ) -> Option<(Equation, Exact, Exact)> {
+        let one = Exact::from_integer(1.into());
+        let (id, quantity) = result.split_once('.')?;
+        let Some(reaction) = self.case.reactions.get(id) else {
+            let cycle = earlier.get(id)?;
+            let kelvin = cycle.kelvin().cloned().unwrap_or_else(reference_kelvin);
+            return Some((cycle.target.clone(), kelvin, one));
+        };
+        let equation = reaction.equation.value.clone();
+        let kelvin = self.temperature(reaction.temperature.as_ref()).0;
+        if quantity != "heat-per" {
+            return Some((equation, kelvin, one));
+        }
+        let per = reaction.per.as_ref()?;
+        let mut terms = equation.left.iter().chain(&equation.right);
+        let named = terms.find(|term| term.participant.to_string() == per.value)?;
+        let nu = named.coefficient.clone();
+        Some((equation, kelvin, nu))
     }
 
     /// A step whose heat is a result of a reaction or of a cycle that was resolved before.
@@ -170,27 +187,9 @@ impl Resolver<'_> {
         species: &mut SpeciesList,
         earlier: &Resolved,
     ) -> Option<ProblemStep> {
-        // The reading of the case has checked that the result is there.
-        let (id, quantity) = result.value.split_once('.')?;
-        let (equation, kelvin) = match self.case.reactions.get(id) {
-            Some(reaction) => {
-                let kelvin = self.temperature(reaction.temperature.as_ref()).0;
-                (reaction.equation.value.clone(), kelvin)
-            }
-            None => {
-                let cycle = earlier.get(id)?;
-                let kelvin = cycle.kelvin().cloned().unwrap_or_else(reference_kelvin);
-                (cycle.target.clone(), kelvin)
-            }
-        };
+        let (equation, kelvin, divisor) = self.result_equation(&result.value, earlier)?;
         let mut numbers = self.sum(&equation, species)?;
-        if quantity == "heat-per" {
-            let per = self.case.reactions.get(id)?.per.as_ref()?;
-            let terms = equation.left.iter().chain(&equation.right);
-            let mut named = terms.filter(|term| term.participant.to_string() == per.value);
-            let nu = named.next()?.coefficient.clone();
-            numbers.iter_mut().for_each(|number| *number /= &nu);
-        }
+        numbers.iter_mut().for_each(|number| *number /= &divisor);
         if let Some(stated) = &step.equation {
             let own = self.sum(&stated.value, species)?;
             if !same(&own, &numbers) {
@@ -221,131 +220,6 @@ impl Resolver<'_> {
         })
     }
 
-    /// The value used that a step's heat is.
-    fn step_value(&mut self, cycle: &Cycle, step: &CycleStep, name: &str) -> Option<usize> {
-        match &step.heat {
-            StepHeat::CombustionOf(participant) => self.combustion_value(participant),
-            StepHeat::Given(Given::Input(id)) => self.input_value(&id.value),
-            StepHeat::Given(Given::Stated(quantity)) => {
-                let place = format!("cycles.{}, {name}", cycle.id.value);
-                if step.source.is_none() {
-                    self.no_source(step, &place);
-                }
-                let from = [&step.source, &step.locator];
-                let from: Vec<&str> = from.into_iter().flatten().map(String::as_str).collect();
-                let from = match from.is_empty() {
-                    true => "no source stated".to_string(),
-                    false => from.join(", "),
-                };
-                let measured = match step.measured {
-                    Measured::Enthalpy => "enthalpy",
-                    Measured::InternalEnergy => "internal energy",
-                };
-                let equation = step.equation.as_ref()?;
-                Some(self.case_value(CaseValue {
-                    kind: ValueKind::MeasuredHeat,
-                    label: format!("{name}: {measured} of {}", equation.value),
-                    species: None,
-                    quantity: quantity.value.clone(),
-                    locator: format!("{place}; {from}"),
-                    note: None,
-                    span: &quantity.span,
-                }))
-            }
-            // Results are no values used.
-            StepHeat::Given(Given::Result(_)) => None,
-        }
-    }
-
-    fn no_source(&mut self, step: &CycleStep, place: &str) {
-        self.findings.push(Finding {
-            severity: Severity::Caution,
-            code: FindingCode::NotLocated,
-            message: format!(
-                "{place}: the measured heat names no source. Give the report and the place in it: \
-                 source = \"…\", locator = \"…\"."
-            ),
-            at: self.text.place(step.span.start),
-        });
-    }
-
-    /// What the heat is referred to. None where no mass can be had, as a fault then says.
-    fn basis(
-        &mut self,
-        step: &CycleStep,
-        value: usize,
-        species: &SpeciesList,
-        numbers: &[Exact],
-    ) -> Option<Basis> {
-        let named = match &step.heat {
-            StepHeat::CombustionOf(participant) => Some(participant),
-            StepHeat::Given(_) => step.per.as_ref(),
-        };
-        let Some(named) = named else {
-            return Some(Basis::Reaction);
-        };
-        let index = species.all.iter().position(|s| s.label == named.value)?;
-        let nu = numbers.get(index)?.abs();
-        let dimension = self.values[value].printed.unit.dimension();
-        if dimension == Dimension::ENERGY.over(Dimension::AMOUNT) {
-            return Some(Basis::Mole { species: index, nu });
-        }
-        let formula = &species.all[index].species;
-        if formula.formula.charge() != 0 {
-            self.faults.push(Fault::new(
-                FaultCode::Value,
-                self.text,
-                &named.span,
-                format!("a heat per mass of {formula}"),
-                "a neutral substance: no mass of an ion alone is weighed",
-                "give the heat per mole",
-            ));
-            return None;
-        }
-        let weights = self.weights(formula, &named.span);
-        Some(Basis::Mass {
-            species: index,
-            nu,
-            weights,
-        })
-    }
-
-    fn bomb(&mut self, step: &CycleStep, species: &SpeciesList, numbers: &[Exact]) -> Option<Bomb> {
-        if step.measured == Measured::Enthalpy {
-            return None;
-        }
-        let gas = |s: &CycleSpecies| {
-            let phase = s.species.phase.as_ref();
-            phase.is_some_and(|phase| phase.label == PhaseLabel::Gas)
-        };
-        let gases = species.all.iter().zip(numbers).filter(|(s, _)| gas(s));
-        let temperature_value = match &step.temperature {
-            Some(Given::Input(id)) if self.is_uncertain(&id.value) => self.input_value(&id.value),
-            _ => None,
-        };
-        Some(Bomb {
-            gas_moles: gases.map(|(_, nu)| nu).sum(),
-            reduced: step.reduced,
-            temperature_value,
-        })
-    }
-
-    fn is_uncertain(&self, input: &str) -> bool {
-        let input = self.case.inputs.get(input);
-        input.is_some_and(|i| i.tolerance.is_some() || i.value.value.uncertainty.is_some())
-    }
-
-    /// The molar gas constant, exact since 2019.
-    fn gas_constant_value(&mut self, cycle: &Cycle) -> Option<usize> {
-        let source = self.sources.iter().position(|s| s.id() == CONSTANTS)?;
-        let entry = self.sources[source].of_symbol("R")?;
-        let printed = entry.value.clone()?;
-        let head = &self.sources[source].head;
-        let span = &cycle.target.span;
-        let value = value_of(source, head, ValueKind::GasConstant, &entry, printed, span);
-        Some(self.enter_value(value, ""))
-    }
-
     /// Correlations between heats that the case states.
     fn state_correlations(&mut self, cycle: &Cycle, steps: &[ProblemStep]) {
         for stated in &cycle.correlations {
@@ -367,25 +241,6 @@ impl Resolver<'_> {
                 ));
             }
         }
-    }
-}
-
-/// Species in the order in which they first appear.
-#[derive(Default)]
-struct SpeciesList {
-    all: Vec<CycleSpecies>,
-    by_key: BTreeMap<String, usize>,
-}
-
-impl SpeciesList {
-    /// The place of a species, which is added where it is new.
-    fn index(&mut self, species: CycleSpecies) -> usize {
-        let next = self.all.len();
-        let index = *self.by_key.entry(species.key.clone()).or_insert(next);
-        if index == next {
-            self.all.push(species);
-        }
-        index
     }
 }
 

@@ -1,7 +1,8 @@
 //! A heat from the measured heats of other reactions.
 //!
 //! Heats of steps (`heat`), their multipliers (`multipliers`), the adjustment of redundant
-//! determinations (`covariance`, `adjust`, `chi_square`), and what has to be said (`findings`).
+//! determinations (`covariance`, `adjust`, `chi_square`), and what has to be said (`findings`,
+//! `words`).
 
 mod adjust;
 mod chi_square;
@@ -9,6 +10,7 @@ mod covariance;
 mod findings;
 mod heat;
 mod multipliers;
+mod words;
 
 use num_traits::Zero;
 
@@ -20,9 +22,9 @@ use super::work::{WorkOptions, Working};
 use super::worked::Worked;
 
 pub use adjust::Adjustment;
-pub use findings::{closure_text, decimals, global_test, local_test, weakness};
 pub use heat::StepHeat;
 pub use multipliers::{Multipliers, NoMultipliers};
+pub use words::{closure_text, decimals, global_test, local_test, weakness};
 
 use adjust::adjust;
 use covariance::Covariances;
