@@ -14,7 +14,7 @@ use super::model::Input;
 #[derive(Clone, Debug, PartialEq)]
 pub enum Given {
     /// Written where it is used.
-    Stated(Located<Quantity>),
+    Stated(Box<Located<Quantity>>),
     /// The id of an input.
     Input(Located<String>),
     /// `id.quantity`, a result of this case.
@@ -69,7 +69,7 @@ pub(super) fn read_given(
     } else if wanted.results && is_result_name(&text.value) {
         return Some(Given::Result(text.clone()));
     } else {
-        Given::Stated(quantity(reader, text)?)
+        Given::Stated(Box::new(quantity(reader, text)?))
     };
     let fits = given
         .quantity(inputs)
