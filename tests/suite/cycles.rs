@@ -231,7 +231,7 @@ fn a_weak_test_says_what_it_cannot_see() {
     let result = outcome(&calculation, "c.heat");
     assert_eq!(result.value.to_f64(), -602.0);
     // u = 0.5/√2, not inflated by itself.
-    assert!(near(result.combined.standard, Some(0.125f64.sqrt())));
+    assert!(near(result.combined.standard, Some(libm::sqrt(0.125))));
 }
 
 #[test]
@@ -251,7 +251,7 @@ fn inflation_is_asked_for_or_not_there() {
     assert_eq!(messages(&calculation, "cycle-inflated").len(), 2);
     assert!(near(
         outcome(&calculation, "e.heat").combined.standard,
-        Some(0.5f64.sqrt())
+        Some(libm::sqrt(0.5))
     ));
 }
 
@@ -399,12 +399,16 @@ proptest! {
         let (adjustment, sum) = (working.adjustment.as_ref().unwrap(), working.sum.as_ref().unwrap());
         let parts = sum.weights.iter().zip(&adjustment.standard);
         let variance: f64 =
-            parts.map(|(w, u)| (hesswright::quantity::to_f64(w) * u).powi(2)).sum();
-        let least_squares = variance.sqrt();
+            parts.map(|(w, u)| square(hesswright::quantity::to_f64(w) * u)).sum();
+        let least_squares = libm::sqrt(variance);
         let by_form = result.combined.standard.unwrap();
         prop_assert!((by_form - least_squares).abs() <= 1e-12 * least_squares);
         prop_assert!(matches!(result.value, Real::Float(_)));
     }
+}
+
+fn square(x: f64) -> f64 {
+    x * x
 }
 
 /// The step turned, doubled, with twice the uncertainty.
@@ -445,7 +449,7 @@ fn simulation_of_a_whole_case_agrees_with_its_uncertainty() {
         squares += value * value;
     }
     let n = f64::from(trials);
-    let scatter = ((squares - sum * sum / n) / (n - 1.0)).sqrt();
+    let scatter = libm::sqrt((squares - sum * sum / n) / (n - 1.0));
     let u = drawn(&mut || 0.0).0;
     // The standard deviation of a standard deviation from 1500 trials is 1.8 %.
     assert!((scatter / u - 1.0).abs() < 0.06, "{scatter} {u}");
@@ -510,7 +514,7 @@ impl Normal {
     }
 
     fn next(&mut self) -> f64 {
-        let radius = (-2.0 * libm::log(self.uniform())).sqrt();
+        let radius = libm::sqrt(-2.0 * libm::log(self.uniform()));
         radius * libm::cos(std::f64::consts::TAU * self.uniform())
     }
 }
