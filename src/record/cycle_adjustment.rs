@@ -7,7 +7,7 @@ use crate::engine::{
 use crate::quantity::Exact;
 use crate::source::ProblemCycle;
 
-use super::cycle_symbols::{birge_ratio, chi_square, misclosure, residuals, spread};
+use super::cycle_symbols::{birge_ratio, chi_square, correlates, misclosure, residuals, spread};
 use super::cycle_tables::Shown;
 use super::cycle_working::{heading, plain};
 use super::numerals::minus;
@@ -28,14 +28,17 @@ pub(super) fn adjustment_steps(
             "q is the heat of a step. Each line below adds steps up to no reaction at all, so \
              that its heat m should be zero; the numbers before the steps are n.",
         ),
-        Step::Table(shown.closures(closures, adjustment)),
         displayed(spread()),
+        displayed(correlates()),
+        Step::Table(shown.closures(closures, adjustment)),
         displayed(residuals()),
         displayed(chi_square()),
         plain(format!(
             "Generalised least squares (Aitken 1935), as conditions: N holds the numbers n, V \
-             the variances and covariances of the heats. v is what each measured heat exceeds \
-             the adjusted one by. {}",
+             the variances u² of the heats and, for each correlated pair, r times both u; S then \
+             holds the variances and covariances of the sums m. v is what each measured heat \
+             exceeds the adjusted one by; for a heat that is correlated with no other it is u² \
+             times the sum of n·y over the lines. {}",
             correlations(shown.cycle, adjustment)
         )),
         Step::Table(shown.adjusted(adjustment)),

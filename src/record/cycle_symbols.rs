@@ -95,26 +95,30 @@ pub(super) fn spread() -> Math {
     ])
 }
 
-/// v = V N S⁻¹ m
+/// y = S⁻¹ m
+pub(super) fn correlates() -> Math {
+    row(vec![symbol("y"), upright("="), inverse("S"), symbol("m")])
+}
+
+/// v = V N y
 pub(super) fn residuals() -> Math {
     row(vec![
         symbol("v"),
         upright("="),
         symbol("V"),
         symbol("N"),
-        inverse("S"),
-        symbol("m"),
+        symbol("y"),
     ])
 }
 
-/// χ² = mᵀ S⁻¹ m
+/// χ² = Σ_k m_k y_k
 pub(super) fn chi_square() -> Math {
     row(vec![
         squared(symbol("χ")),
         upright("="),
-        transposed("m"),
-        inverse("S"),
-        symbol("m"),
+        sum("k"),
+        with_sub(symbol("m"), symbol("k")),
+        with_sub(symbol("y"), symbol("k")),
     ])
 }
 

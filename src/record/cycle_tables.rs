@@ -143,16 +143,14 @@ impl Shown<'_> {
 
     /// What should be zero, and how far it is from it.
     pub(super) fn closures(&self, closures: &[Vec<Exact>], adjustment: &Adjustment) -> Table {
-        let each = closures.iter().zip(&adjustment.misclosures);
-        let rows = each
-            .zip(&adjustment.misclosure_uncertainty)
-            .map(|((by, m), u)| {
-                vec![
-                    Rich::plain(closure_text(self.cycle, by)),
-                    Rich::plain(minus(&cut(m, 10))),
-                    Rich::plain(two_digits(*u)),
-                ]
-            });
+        let rows = closures.iter().enumerate().map(|(k, by)| {
+            vec![
+                Rich::plain(closure_text(self.cycle, by)),
+                Rich::plain(minus(&cut(&adjustment.misclosures[k], 10))),
+                Rich::plain(two_digits(adjustment.misclosure_uncertainty[k])),
+                Rich::plain(correlate(adjustment.correlates[k])),
+            ]
+        });
         Table {
             caption: format!(
                 "Sums of steps that are no reaction at all: their heats, in {}",
@@ -168,6 +166,7 @@ impl Shown<'_> {
                         .run(Run::Italic("m".into()))
                         .and(")"),
                 ),
+                number(Rich::default().run(Run::Italic("y".into()))),
             ],
             rows: rows.collect(),
             total: None,
@@ -227,6 +226,11 @@ fn uncertainty(u: f64) -> String {
     } else {
         two_digits(u)
     }
+}
+
+/// Six digits of a correlate.
+fn correlate(y: f64) -> String {
+    Exact::from_float(y).map_or("–".to_string(), |y| minus(&cut(&y, 6)))
 }
 
 /// One place more than the two digits of the uncertainty.

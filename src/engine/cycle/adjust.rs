@@ -31,6 +31,8 @@ pub struct Adjustment {
     pub misclosures: Vec<Exact>,
     /// The standard uncertainty of each misclosure.
     pub misclosure_uncertainty: Vec<f64>,
+    /// For each closure S⁻¹m, in one over the unit of the heats: its part in χ² is m times that.
+    pub correlates: Vec<f64>,
     /// For each step the measured less the adjusted heat.
     pub residuals: Vec<Exact>,
     /// For each step its residual over what the residual may scatter by; none for a heat that no
@@ -142,6 +144,7 @@ pub fn adjust(
             })
             .collect(),
         probability: exceedance(chi_square, degrees_of_freedom),
+        correlates: solved.iter().map(to_f64).collect(),
         misclosures,
         chi_square,
         degrees_of_freedom,

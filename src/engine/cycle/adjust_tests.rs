@@ -80,6 +80,8 @@ fn a_ring_shares_out_its_misclosure() {
     let adjusted = adjust(&heats, &independent(&[1, 1, 1]), &found).unwrap();
     assert_eq!(adjusted.misclosures, [exact("0.6")]);
     assert_eq!(adjusted.residuals, vec![exact("0.2"); 3]);
+    // 0.6/(3·0.1²) = 20, and 20·0.1² is the residual.
+    assert!(near(adjusted.correlates[0], 20.0));
     assert_eq!(dot(&adjusted.weights, &heats), exact("2.6"));
     // 0.6²/(3·0.1²) = 12, and the uncertainty of the sum of three is 0.1·√3.
     assert!(near(adjusted.chi_square, 12.0));
