@@ -14,11 +14,13 @@ pub enum IdKind {
     Input,
     Reaction,
     Cycle,
+    HeatingValue,
 }
 
 impl IdKind {
     /// The kinds of which a case has results.
-    pub(super) const WITH_RESULTS: [IdKind; 2] = [IdKind::Reaction, IdKind::Cycle];
+    pub(super) const WITH_RESULTS: [IdKind; 3] =
+        [IdKind::Reaction, IdKind::Cycle, IdKind::HeatingValue];
 
     pub(super) fn has_results(self) -> bool {
         IdKind::WITH_RESULTS.contains(&self)
@@ -31,6 +33,7 @@ impl IdKind {
             IdKind::Input => "an input",
             IdKind::Reaction => "a reaction",
             IdKind::Cycle => "a cycle",
+            IdKind::HeatingValue => "a heating value",
         }
     }
 }

@@ -5,13 +5,17 @@
 
 mod allowances;
 mod assumptions;
+mod composition;
 mod cycle;
 mod cycle_references;
 mod cycle_steps;
 mod cycles;
+mod fuel;
 mod given;
+mod heating_values;
 mod ids;
 mod inputs;
+mod metering;
 mod model;
 mod output;
 mod prose;
@@ -23,10 +27,13 @@ mod sources;
 mod substances;
 
 pub use allowances::{Allowance, AllowedKind};
+pub use composition::{Composition, Moisture, Part, Share};
 pub use cycle::{Cycle, CycleStep, Measured, StepCorrelation, StepHeat, step_name};
 pub(crate) use cycle_references::Order;
 pub use given::Given;
+pub use heating_values::{Constant, HEATING_VALUE_QUANTITIES, HeatingValue};
 pub use ids::IdKind;
+pub use metering::{Compression, Metering};
 pub use model::{
     Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText,
     Reaction, RecordHead, ResultUnits, Revision, Role, RoundingRule, Status,

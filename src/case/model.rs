@@ -5,6 +5,7 @@ use indexmap::IndexMap;
 
 use super::cycle::Cycle;
 use super::given::Given;
+use super::heating_values::HeatingValue;
 use crate::finding::Located;
 use crate::notation::{Equation, Formula, Phase};
 use crate::quantity::{Quantity, Unit};
@@ -24,6 +25,7 @@ pub struct Case {
     pub inputs: IndexMap<String, Input>,
     pub reactions: IndexMap<String, Reaction>,
     pub cycles: IndexMap<String, Cycle>,
+    pub heating_values: IndexMap<String, HeatingValue>,
     pub rounding: Vec<RoundingRule>,
     pub units: ResultUnits,
 }
@@ -186,6 +188,7 @@ pub struct ResultUnits {
     pub energy: Unit,
     pub temperature: Unit,
     pub mass: Unit,
+    pub volume: Unit,
     pub amount: Unit,
     pub time: Unit,
 }

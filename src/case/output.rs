@@ -12,12 +12,13 @@ use super::results::Results;
 
 pub(super) fn read_units(table: Option<&Table<'_, '_>>) -> ResultUnits {
     if let Some(table) = table {
-        table.only(&["energy", "temperature", "mass", "amount", "time"]);
+        table.only(&["energy", "temperature", "mass", "volume", "amount", "time"]);
     }
     ResultUnits {
         energy: read_unit(table, "energy", "kJ"),
         temperature: read_unit(table, "temperature", "K"),
         mass: read_unit(table, "mass", "kg"),
+        volume: read_unit(table, "volume", "m3"),
         amount: read_unit(table, "amount", "mol"),
         time: read_unit(table, "time", "s"),
     }
@@ -50,7 +51,9 @@ fn read_unit(table: Option<&Table<'_, '_>>, key: &str, default: &str) -> Unit {
 /// Results are given in quotients of these units, so each has to be one symbol.
 fn simple(reader: &Reader<'_>, text: &Located<String>, given: Unit) -> Option<Unit> {
     let compound = |c: char| matches!(c, '/' | ' ' | '(' | '·' | '^') || c.is_ascii_digit();
-    if !given.symbol().contains(compound) {
+    // A cubed length is one factor, and can stand in a quotient.
+    let symbol = given.symbol().strip_suffix('3').unwrap_or(given.symbol());
+    if !symbol.contains(compound) {
         return Some(given);
     }
     reader.fault(

@@ -8,6 +8,7 @@ use crate::finding::{FaultCode, Faults, Text};
 use super::assumptions::read_assumptions;
 use super::cycle_references::report_rings;
 use super::cycles::{Surroundings, read_cycles};
+use super::heating_values::read_heating_values;
 use super::ids::{IdKind, Ids};
 use super::inputs::read_inputs;
 use super::model::Case;
@@ -22,7 +23,7 @@ use super::substances::read_substances;
 /// What a case is called in findings, whatever its file is called.
 pub const CASE_NAME: &str = "case.toml";
 
-const TABLES: [&str; 10] = [
+const TABLES: [&str; 11] = [
     "record",
     "prose",
     "assumptions",
@@ -31,18 +32,13 @@ const TABLES: [&str; 10] = [
     "inputs",
     "reactions",
     "cycles",
+    "heating-values",
     "rounding",
     "units",
 ];
 
 /// Tables of the case format that this version does not work.
-const NOT_WORKED: [&str; 5] = [
-    "streams",
-    "balances",
-    "adiabatic",
-    "heating-values",
-    "criteria",
-];
+const NOT_WORKED: [&str; 4] = ["streams", "balances", "adiabatic", "criteria"];
 
 /// Reads a case. Where there are faults it holds what could be read in spite of them, so that the
 /// rest can be checked as well; such a case is not to be worked.
@@ -59,11 +55,13 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     let inputs = root.table("inputs");
     let reactions = root.table("reactions");
     let cycles = root.table("cycles");
+    let fuels = root.table("heating-values");
     let mut ids = Ids::default();
     ids.take(substances.as_ref(), IdKind::Substance);
     ids.take(inputs.as_ref(), IdKind::Input);
     ids.take(reactions.as_ref(), IdKind::Reaction);
     ids.take(cycles.as_ref(), IdKind::Cycle);
+    ids.take(fuels.as_ref(), IdKind::HeatingValue);
 
     let record = root.table("record");
     if record.is_none() {
@@ -75,11 +73,11 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     let record = record.map(|table| read_record(&table));
     let substances = substances.map_or_else(IndexMap::new, |t| read_substances(&t));
     let inputs = inputs.map_or_else(IndexMap::new, |t| read_inputs(&t));
-    let tables = [&reactions, &cycles].into_iter().flatten();
+    let tables = [&reactions, &cycles, &fuels].into_iter().flatten();
     let stated: usize = tables.map(|table| table.entries().len()).sum();
     let reactions = match reactions {
         Some(table) => read_reactions(&table, &ids, &inputs, &substances),
-        None if cycles.is_some() => IndexMap::new(),
+        None if cycles.is_some() || fuels.is_some() => IndexMap::new(),
         None => {
             root.missing(
                 "reactions",
@@ -88,6 +86,9 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
             IndexMap::new()
         }
     };
+    let heating_values = fuels.map_or_else(IndexMap::new, |table| {
+        read_heating_values(&table, &ids, &inputs, &substances)
+    });
     let mut results = Results::default();
     results.add_reactions(&reactions);
     results.add_cycles(cycles.as_ref());
@@ -99,6 +100,7 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     };
     let read_cycles = read_cycles(cycles.as_ref(), &around);
     report_rings(root.reader(), &read_cycles);
+    results.add_heating_values(&heating_values);
     let units = read_units(root.table("units").as_ref());
     let sources = root.table("sources");
     if sources.is_none() {
@@ -109,8 +111,8 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     }
     let mut choices = read_choices(sources.as_ref());
     let mut assumptions = read_assumptions(root, &ids);
-    if reactions.len() + read_cycles.len() < stated {
-        // They may be for a substance of an equation that could not be read.
+    if reactions.len() + read_cycles.len() + heating_values.len() < stated {
+        // They may be for a substance of an equation or a fuel that could not be read.
         choices.clear();
         for assumption in &mut assumptions {
             assumption.allows.clear();
@@ -127,6 +129,7 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
         inputs,
         reactions,
         cycles: read_cycles,
+        heating_values,
         units,
     })
 }

@@ -6,6 +6,7 @@ use crate::document::{Reader, Table, is_id};
 use crate::finding::{FaultCode, Located, Span, nearest};
 use crate::quantity::Dimension;
 
+use super::heating_values::HeatingValue;
 use super::ids::{IdKind, Ids};
 use super::model::Reaction;
 
@@ -52,6 +53,14 @@ impl Results {
         for (id, _) in table.map_or_else(Vec::new, Table::entries) {
             let quantities = super::cycles::result_quantities().to_vec();
             self.add(&id.value, "a cycle", "cycles", quantities, Vec::new());
+        }
+    }
+
+    pub(super) fn add_heating_values(&mut self, fuels: &IndexMap<String, HeatingValue>) {
+        for (id, fuel) in fuels {
+            let quantities = super::heating_values::result_quantities();
+            let states = fuel.states();
+            self.add(id, "a heating value", "heating-values", quantities, states);
         }
     }
 

@@ -10,6 +10,7 @@ mod exit;
 mod extract;
 mod faults;
 mod findings;
+mod heating_value_text;
 mod issue;
 mod source;
 mod terminal;

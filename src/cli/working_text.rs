@@ -4,6 +4,7 @@ use std::path::Path;
 
 use super::cycle_text::cycle;
 use super::findings;
+use super::heating_value_text;
 use super::terminal::{Style, Tone, plain, wrap};
 use crate::calculation::Calculation;
 use crate::engine::{HeatAt, Hess, Outcome, ReactionWorking, Worked};
@@ -33,6 +34,9 @@ pub fn shown(case: &Path, calculation: &Calculation, style: Style) -> String {
     }
     for working in &calculation.working.cycles {
         text += &cycle(calculation, working);
+    }
+    for working in &calculation.working.heating_values {
+        text += &heating_value_text::shown(calculation, working);
     }
     text += &format!("\n{}\n", style.paint(Tone::Strong, "Values used"));
     text + &values(&calculation.problem)

@@ -5,6 +5,7 @@
 
 mod cycle;
 mod formation;
+mod heating_value;
 mod hess;
 mod kirchhoff;
 mod outcome;
@@ -19,6 +20,10 @@ pub use cycle::{
     SIGNIFICANCE_LEVEL, StepHeat, closure_text, decimals, global_test, local_test, weakness,
 };
 pub use formation::{FormationEquation, formation_equation};
+pub use heating_value::{
+    ComponentWorking, CompressionWorking, HeatingValueWorking, Mixture, SUMMATION_PRESSURE,
+    VolumeWorking,
+};
 pub use hess::{Hess, HessTerm};
 pub use kirchhoff::{HeatAt, HeatTerm, heat_at, molar_enthalpy};
 pub use outcome::{COVERAGE, Direction, Outcome, StatedBy};

@@ -21,6 +21,8 @@ pub enum Direction {
     Released,
     Absorbed,
     Neither,
+    /// Counted positive, as heating values are.
+    GivenOff,
 }
 
 impl Direction {
@@ -28,6 +30,7 @@ impl Direction {
         match self {
             Direction::Released => "released",
             Direction::Absorbed => "absorbed",
+            Direction::GivenOff => "given off",
             Direction::Neither => "neither released nor absorbed",
         }
     }
@@ -64,6 +67,8 @@ pub struct Outcome {
     pub remark: Option<Stated>,
     /// What `combined` was multiplied by beyond the uncertainties stated; one where nothing was.
     pub inflation: f64,
+    /// Whether heat given off counts positive, as for heating values (ISO 6976).
+    pub given_off_is_positive: bool,
 }
 
 impl Outcome {
@@ -115,14 +120,30 @@ impl Outcome {
             stated_by,
             remark,
             inflation,
+            given_off_is_positive: false,
             value,
         }
     }
 
+    /// The same value with heat given off counted positive.
+    #[must_use]
+    pub(super) fn given_off(mut self) -> Outcome {
+        self.given_off_is_positive = true;
+        self
+    }
+
     pub fn direction(&self) -> Direction {
-        match self.value.to_exact() {
-            Some(value) if value.is_negative() => Direction::Released,
-            Some(value) if value.is_positive() => Direction::Absorbed,
+        let Some(value) = self.value.to_exact() else {
+            return Direction::Neither;
+        };
+        match (
+            value.is_positive(),
+            value.is_negative(),
+            self.given_off_is_positive,
+        ) {
+            (true, _, true) => Direction::GivenOff,
+            (true, _, false) | (_, true, true) => Direction::Absorbed,
+            (_, true, false) => Direction::Released,
             _ => Direction::Neither,
         }
     }

@@ -4,10 +4,10 @@ use std::collections::BTreeSet;
 
 use num_traits::Zero;
 
-use crate::finding::{Finding, FindingCode, Severity, Text};
+use crate::finding::{Finding, FindingCode, Severity, Span, Text};
 use crate::notation::{Element, PhaseLabel, Species};
 use crate::quantity::{Exact, exact_text, to_f64, two_digits};
-use crate::source::{Problem, ProblemReaction, ProblemTerm, ValueKind, ValueUsed};
+use crate::source::{ComponentHeat, Problem, ProblemTerm, ValueKind, ValueUsed};
 
 use super::work::Working;
 
@@ -19,8 +19,8 @@ fn conventional_temperature() -> Exact {
 /// All findings about mixed references, one for each reaction and kind.
 pub(super) fn check(problem: &Problem, working: &Working, text: &Text) -> Vec<Finding> {
     let mut findings = pressure(problem, text);
-    for reaction in working.reactions.iter().filter(|r| r.is_worked()) {
-        let reaction = &problem.reactions[reaction.reaction];
+    let mut said = BTreeSet::new();
+    for reaction in &sums(problem, working) {
         let place = text.place(reaction.span.start);
         for (severity, code, message) in temperature(problem, reaction)
             .into_iter()
@@ -28,15 +28,55 @@ pub(super) fn check(problem: &Problem, working: &Working, text: &Text) -> Vec<Fi
             .chain(free_electrons(problem, reaction))
             .chain(states(problem, reaction))
         {
-            findings.push(Finding {
+            let finding = Finding {
                 severity,
                 code,
                 message,
                 at: place.clone(),
-            });
+            };
+            // Components of one fuel can have the same to say.
+            if said.insert(finding.message.clone()) {
+                findings.push(finding);
+            }
         }
     }
     findings
+}
+
+/// A sum of formation enthalpies: a reaction, or the combustion of a component of a fuel.
+struct Sum<'a> {
+    id: &'a str,
+    terms: &'a [ProblemTerm],
+    span: &'a Span,
+}
+
+fn sums<'a>(problem: &'a Problem, working: &Working) -> Vec<Sum<'a>> {
+    let worked = working.reactions.iter().filter(|r| r.is_worked());
+    let reactions = worked.map(|reaction| {
+        let reaction = &problem.reactions[reaction.reaction];
+        Sum {
+            id: &reaction.id,
+            terms: &reaction.terms,
+            span: &reaction.span,
+        }
+    });
+    let fuels = working
+        .heating_values
+        .iter()
+        .filter(|f| f.mixture.is_some());
+    let fuels = fuels.map(|fuel| &problem.heating_values[fuel.heating_value]);
+    let combustions = fuels.flat_map(|fuel| {
+        let heats = fuel.components.iter().map(|component| &component.heat);
+        heats.filter_map(|heat| match heat {
+            ComponentHeat::Hess { terms } => Some(Sum {
+                id: &fuel.id,
+                terms,
+                span: &fuel.span,
+            }),
+            ComponentHeat::Nothing | ComponentHeat::Printed { .. } => None,
+        })
+    });
+    reactions.chain(combustions).collect()
 }
 
 type Said = (Severity, FindingCode, String);
@@ -105,7 +145,7 @@ fn standard_pressures(problem: &Problem) -> Vec<Standard<'_>> {
 
 /// Enthalpies of ions in water rest on the convention that H+(aq) is zero, which cancels only
 /// where the ions on the two sides carry the same charge (IUPAC Green Book, from memory).
-fn charge_in_water(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
+fn charge_in_water(problem: &Problem, reaction: &Sum<'_>) -> Option<Said> {
     let charge: Exact = reaction
         .terms
         .iter()
@@ -139,7 +179,7 @@ fn charge_in_water(problem: &Problem, reaction: &ProblemReaction) -> Option<Said
 
 /// Tables of gas ions differ in whether the electron is at rest or in thermal motion: 5/2·R·T, or
 /// 6.197 kJ/mol at 298.15 K, for each electron (NASA/TP-2002-211556 prints 6197.428 J/mol).
-fn free_electrons(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
+fn free_electrons(problem: &Problem, reaction: &Sum<'_>) -> Option<Said> {
     let species = |term: &ProblemTerm| &problem.substances[term.substance].species;
     let electron = reaction
         .terms
@@ -165,11 +205,11 @@ fn free_electrons(problem: &Problem, reaction: &ProblemReaction) -> Option<Said>
 
 /// A formation enthalpy at another temperature is off by ΔCp of the formation reaction times the
 /// difference (Kirchhoff); the heat capacities come from whatever source consulted has them.
-fn temperature(problem: &Problem, reaction: &ProblemReaction) -> Option<Said> {
+fn temperature(problem: &Problem, reaction: &Sum<'_>) -> Option<Said> {
     let mut cost = 0.0;
     let mut names = Vec::new();
     let mut unknown = Vec::new();
-    for term in &reaction.terms {
+    for term in reaction.terms {
         let Some(value) = problem.substances[term.substance].value else {
             continue;
         };
@@ -253,7 +293,7 @@ fn heat_capacity(problem: &Problem, species: &Species) -> Option<f64> {
 
 /// Sources that count an element from another form do not add up with the others unless the
 /// atoms of that element cancel within them.
-fn states(problem: &Problem, reaction: &ProblemReaction) -> Vec<Said> {
+fn states(problem: &Problem, reaction: &Sum<'_>) -> Vec<Said> {
     let mut said = Vec::new();
     for (index, source) in problem.sources.iter().enumerate() {
         for (element, state) in &source.head.reference_states {
@@ -272,12 +312,7 @@ fn states(problem: &Problem, reaction: &ProblemReaction) -> Vec<Said> {
 }
 
 /// Σ ν·n of an element over the terms whose value comes from one source.
-fn net_atoms(
-    problem: &Problem,
-    reaction: &ProblemReaction,
-    source: usize,
-    element: Element,
-) -> Exact {
+fn net_atoms(problem: &Problem, reaction: &Sum<'_>, source: usize, element: Element) -> Exact {
     let atoms = reaction.terms.iter().map(|term| {
         let substance = &problem.substances[term.substance];
         let count = substance.species.formula.counts().get(&element);
@@ -291,7 +326,7 @@ fn net_atoms(
 
 fn mixed_state(
     problem: &Problem,
-    reaction: &ProblemReaction,
+    reaction: &Sum<'_>,
     source: usize,
     element: Element,
     state: &Species,

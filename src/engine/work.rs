@@ -8,6 +8,7 @@ use crate::quantity::{Exact, InputUncertainty, LinearForm, Real, Unit, exact_tex
 use crate::source::{Problem, ProblemReaction, reference_kelvin};
 
 use super::cycle::{CycleWorking, work_cycle};
+use super::heating_value::{HeatingValueWorking, work_heating_value};
 use super::hess::{Hess, hess_sum};
 use super::kirchhoff::{HeatAt, heat_at, heat_capacity_change};
 use super::outcome::{Outcome, place_in};
@@ -42,6 +43,7 @@ impl WorkOptions<'_> {
 pub struct Working {
     pub reactions: Vec<ReactionWorking>,
     pub cycles: Vec<CycleWorking>,
+    pub heating_values: Vec<HeatingValueWorking>,
     /// All results, in the order of the case.
     pub outcomes: Vec<Outcome>,
     pub findings: Vec<Finding>,
@@ -92,6 +94,7 @@ pub fn work(problem: &Problem, options: &WorkOptions<'_>) -> Working {
     let mut working = Working {
         reactions: Vec::with_capacity(problem.reactions.len()),
         cycles: Vec::with_capacity(problem.cycles.len()),
+        heating_values: Vec::with_capacity(problem.heating_values.len()),
         outcomes: Vec::with_capacity(problem.reactions.len()),
         findings: problem.findings.clone(),
         by_id: BTreeMap::new(),
@@ -101,6 +104,9 @@ pub fn work(problem: &Problem, options: &WorkOptions<'_>) -> Working {
     }
     for index in 0..problem.cycles.len() {
         work_cycle(problem, options, index, &mut working);
+    }
+    for index in 0..problem.heating_values.len() {
+        work_heating_value(problem, options, index, &mut working);
     }
     let text = options.text;
     working

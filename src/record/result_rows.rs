@@ -6,6 +6,7 @@ use crate::engine::{COVERAGE, Outcome};
 use crate::quantity::{exact_text, two_digits};
 
 use super::cycle_working::target;
+use super::heating_value_rows::{heating_value_rows, heating_value_what};
 use super::numerals::{minus, unit};
 use super::pages::ResultRow;
 use super::working::equation;
@@ -20,7 +21,11 @@ pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
         let first = rows.len();
         rows.extend(own.map(|outcome| result_row(calculation, outcome, section)));
         if !reaction.is_worked() {
-            rows.push(not_worked(id, section));
+            rows.push(not_worked(
+                &format!("{id}.heat"),
+                "Heat of reaction",
+                section,
+            ));
         }
         if let Some(row) = rows.get_mut(first) {
             let reaction = &calculation.problem.reactions[reaction.reaction];
@@ -33,15 +38,25 @@ pub(super) fn result_rows(calculation: &Calculation) -> Vec<ResultRow> {
         let outcome = calculation.working.outcome(&format!("{}.heat", cycle.id));
         let mut row = match outcome {
             Some(outcome) => result_row(calculation, outcome, first + at),
-            None => not_worked(&cycle.id, first + at),
+            None => not_worked(
+                &format!("{}.heat", cycle.id),
+                "Heat of reaction",
+                first + at,
+            ),
         };
         row.equation = Some(target(cycle));
         rows.push(row);
     }
+    let first = first + calculation.working.cycles.len();
+    rows.extend(heating_value_rows(calculation, first));
     rows
 }
 
-fn result_row(calculation: &Calculation, outcome: &Outcome, section: usize) -> ResultRow {
+pub(super) fn result_row(
+    calculation: &Calculation,
+    outcome: &Outcome,
+    section: usize,
+) -> ResultRow {
     ResultRow {
         id: outcome.id.clone(),
         what: what(calculation, outcome),
@@ -55,11 +70,11 @@ fn result_row(calculation: &Calculation, outcome: &Outcome, section: usize) -> R
     }
 }
 
-/// A reaction that was not worked stands in the list all the same.
-fn not_worked(id: &str, section: usize) -> ResultRow {
+/// What was not worked stands in the list all the same.
+pub(super) fn not_worked(id: &str, what: &str, section: usize) -> ResultRow {
     ResultRow {
-        id: format!("{id}.heat"),
-        what: "Heat of reaction: not worked, see the findings".to_string(),
+        id: id.to_string(),
+        what: format!("{what}: not worked, see the findings"),
         equation: None,
         section,
         stated: None,
@@ -73,6 +88,9 @@ fn not_worked(id: &str, section: usize) -> ResultRow {
 /// What a result is, in words.
 pub(super) fn what(calculation: &Calculation, outcome: &Outcome) -> String {
     let (id, quantity) = outcome.id.split_once('.').unwrap_or((&outcome.id, ""));
+    if let Some(what) = heating_value_what(calculation, id, quantity) {
+        return what;
+    }
     let reaction = calculation.case.reactions.get(id);
     let per = reaction
         .and_then(|r| r.per.as_ref())

@@ -8,6 +8,7 @@ use crate::source::{Problem, ProblemReaction};
 use super::cycle_working::cycle_sections;
 use super::formation_table::{cancelled, formation_table};
 use super::heat_working::heat_steps;
+use super::heating_value_working::heating_value_sections;
 use super::math::Math;
 use super::numerals::{exact_fraction, in_full, minus, printed, signed, unit};
 use super::pages::{Step, Table, WorkingSection};
@@ -21,7 +22,9 @@ use super::tables::{enthalpy, mark, number, text};
 pub(super) fn working_sections(calculation: &Calculation) -> Vec<WorkingSection> {
     let reactions = calculation.working.reactions.iter();
     let reactions = reactions.map(|reaction| section(calculation, reaction));
-    reactions.chain(cycle_sections(calculation)).collect()
+    let others = cycle_sections(calculation).into_iter();
+    let others = others.chain(heating_value_sections(calculation));
+    reactions.chain(others).collect()
 }
 
 fn section(calculation: &Calculation, working: &ReactionWorking) -> WorkingSection {

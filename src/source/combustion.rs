@@ -6,7 +6,7 @@ use num_traits::Signed;
 
 use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
 use crate::notation::{Equation, Participant, PhaseLabel, Species};
-use crate::quantity::Exact;
+use crate::quantity::{Exact, Quantity};
 
 use super::choose::{choice_for, note_identity};
 use super::cycle::CycleSpecies;
@@ -51,6 +51,17 @@ impl Resolver<'_> {
         };
         note_identity(self, &wanted, &reference_kelvin(), span, &entry);
         let printed = entry.combustion_enthalpy.clone()?;
+        Some(self.enter_combustion(named, source, &entry, printed))
+    }
+
+    /// A combustion enthalpy among the values used; a `stop` where it is not negative.
+    pub(super) fn enter_combustion(
+        &mut self,
+        named: &Located<String>,
+        source: usize,
+        entry: &Entry,
+        printed: Quantity,
+    ) -> usize {
         if !printed.decimal.value().is_negative() {
             self.not_released(named, source);
         }
@@ -62,12 +73,12 @@ impl Resolver<'_> {
                 source,
                 head,
                 ValueKind::CombustionEnthalpy,
-                &entry,
+                entry,
                 printed,
-                span,
+                &named.span,
             )
         };
-        Some(self.enter_value(value, ""))
+        self.enter_value(value, "")
     }
 
     /// Tables do not always print which products their heats of combustion are for.

@@ -8,12 +8,11 @@ use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
 use crate::notation::PhaseLabel;
 use crate::quantity::{Dimension, Exact, Quantity};
 
-use super::builtin::CONSTANTS;
 use super::case_values::CaseValue;
 use super::cycle::{Basis, Bomb, CycleSpecies};
 use super::path::reference_kelvin;
 use super::problem::ValueKind;
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 use super::species_list::SpeciesList;
 
 impl Resolver<'_> {
@@ -150,17 +149,6 @@ impl Resolver<'_> {
     fn is_uncertain(&self, input: &str) -> bool {
         let input = self.case.inputs.get(input);
         input.is_some_and(|i| i.tolerance.is_some() || i.value.value.uncertainty.is_some())
-    }
-
-    /// The molar gas constant, exact since 2019.
-    pub(super) fn gas_constant_value(&mut self, cycle: &Cycle) -> Option<usize> {
-        let source = self.sources.iter().position(|s| s.id() == CONSTANTS)?;
-        let entry = self.sources[source].of_symbol("R")?;
-        let printed = entry.value.clone()?;
-        let head = &self.sources[source].head;
-        let span = &cycle.target.span;
-        let value = value_of(source, head, ValueKind::GasConstant, &entry, printed, span);
-        Some(self.enter_value(value, ""))
     }
 
     /// What the case says, the reference temperature of the table, or 298.15 K.

@@ -9,14 +9,17 @@ mod builtin;
 mod case_values;
 mod choose;
 mod combustion;
+mod combustion_equation;
 mod compare;
 mod consult;
 mod cycle;
 mod cycle_heats;
 mod excerpt;
+mod gas_constant;
 mod glenn;
 mod glenn_entries;
 mod heat_capacity;
+mod heating_value;
 mod index;
 #[cfg(test)]
 mod index_tests;
@@ -44,10 +47,15 @@ mod unbalanced;
 mod walk;
 
 pub use builtin::{BUILT_IN, built_in};
+pub use combustion_equation::Combustion;
 pub use consult::{Consultation, SourceFiles, consult};
 pub use cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};
 pub use excerpt::{attachment_name, excerpts};
 pub use heat_capacity::{Form, FunctionTerm, HeatCapacity};
+pub use heating_value::{
+    ComponentHeat, FuelComponent, FuelShare, ProblemCompression, ProblemHeatingValue,
+    ProblemMetering,
+};
 pub use model::{Digits, Entry, SourceHead, Subject};
 pub use path::reference_kelvin;
 pub use problem::{

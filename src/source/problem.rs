@@ -6,6 +6,7 @@ use crate::quantity::{Correlations, Decimal, Exact, InputUncertainty, Quantity, 
 
 use super::cycle::ProblemCycle;
 use super::heat_capacity::HeatCapacity;
+use super::heating_value::ProblemHeatingValue;
 use super::reference_states::ReferenceStates;
 use super::standing::Standing;
 use super::store::Source;
@@ -26,6 +27,7 @@ pub struct Problem {
     pub reactions: Vec<ProblemReaction>,
     /// Each after those that it rests on.
     pub cycles: Vec<ProblemCycle>,
+    pub heating_values: Vec<ProblemHeatingValue>,
     /// Molar enthalpies of substances at the temperatures asked for.
     pub paths: Vec<EnthalpyPath>,
     /// Between values used, by their index.

@@ -9,11 +9,12 @@ use crate::finding::{Fault, FaultCode, Faults, Finding, Span, Text};
 use crate::notation::{Element, Participant, Species};
 use crate::quantity::{Correlations, Decimal, Exact, Quantity, to_f64};
 
-use super::builtin::ATOMIC_WEIGHTS;
+use super::builtin::{ATOMIC_WEIGHTS, CONSTANTS};
 use super::choose::choose;
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
 use super::cycle::ProblemCycle;
+use super::heating_value::ProblemHeatingValue;
 use super::matching::Wanted;
 use super::model::{Entry, SourceHead, Subject};
 use super::path::{Candidate, Material, reference_kelvin};
@@ -42,18 +43,24 @@ pub fn resolve(
         resolver.add_built_in(ATOMIC_WEIGHTS, files);
     }
     resolver.add_for_cycles(files);
+    if !case.heating_values.is_empty() {
+        resolver.add_built_in(ATOMIC_WEIGHTS, files);
+        resolver.add_built_in(CONSTANTS, files);
+    }
     let reactions = case.reactions.values();
     let reactions: Vec<_> = reactions
         .map(|reaction| resolver.reaction(reaction))
         .collect();
     let cycles = resolver.cycles();
+    let fuels = case.heating_values.values();
+    let fuels: Vec<_> = fuels.map(|fuel| resolver.heating_value(fuel)).collect();
     resolver.check_choices();
     resolver.check_allowances();
     resolver.check_correlations();
     let faults = std::mem::take(&mut resolver.faults);
     let problem = faults
         .is_empty()
-        .then(|| resolver.problem(reactions, cycles));
+        .then(|| resolver.problem(reactions, cycles, fuels));
     (problem, faults)
 }
 
@@ -163,6 +170,7 @@ impl<'a> Resolver<'a> {
         self,
         reactions: Vec<Option<ProblemReaction>>,
         cycles: Vec<ProblemCycle>,
+        heating_values: Vec<ProblemHeatingValue>,
     ) -> Problem {
         let correlations = self.correlations();
         let counts = self.substances.iter().map(|s| s.species.formula.counts());
@@ -178,6 +186,7 @@ impl<'a> Resolver<'a> {
             values: self.values,
             reactions: reactions.into_iter().flatten().collect(),
             cycles,
+            heating_values,
             correlations,
             findings: self.findings,
             sources: self.sources,

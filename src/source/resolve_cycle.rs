@@ -79,7 +79,7 @@ impl Resolver<'_> {
             species: species.all,
             numbers,
             gas_constant: if bomb {
-                self.gas_constant_value(cycle)
+                self.gas_constant_value(&cycle.target.span)
             } else {
                 None
             },

@@ -9,6 +9,7 @@ mod case;
 mod correlation;
 mod cycles;
 mod ferric_chloride;
+mod heating_values;
 mod hydrogenation;
 mod janaf;
 mod judges;

@@ -6,6 +6,7 @@
 mod accessible;
 mod archive;
 mod contents;
+mod heating_values;
 mod hostile;
 mod issued;
 mod reader;

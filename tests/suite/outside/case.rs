@@ -9,7 +9,7 @@ use tempfile::TempDir;
 
 use super::rational::rational;
 
-const RECORD: &str = r#"[record]
+pub const RECORD: &str = r#"[record]
 number = "OUT-1"
 revision = "A"
 title = "Held against an outside value"
