@@ -28,7 +28,7 @@ pub enum Form {
     /// formation scale; b2 belongs to the entropy. Ranges meet at 1000 K and 6000 K for gases,
     /// and at transitions for condensed forms.
     Nasa9,
-    /// Straight lines between printed points; nothing beyond them.
+    /// Straight lines between printed points.
     Table,
 }
 

@@ -19,22 +19,20 @@ impl<N: Number + PartialOrd> Lines<N> {
         }
     }
 
-    /// Cp on the line over a temperature; the first line goes on below its first point, by as
-    /// much as a function may start too high. None where no line is.
-    pub(super) fn at(&self, kelvin: &N, lenience: &N) -> Option<N> {
-        let first = self.points.first()?;
-        let on_line = |pair: &[(N, N)]| -> Option<N> {
-            let [a, b] = pair else { return None };
-            let extended = a.0 == first.0 && *kelvin >= a.0.clone() - lenience.clone();
-            let inside = (*kelvin >= a.0 || extended) && *kelvin <= b.0 && a.0 < b.0;
-            inside.then(|| line(a, b, kelvin))
-        };
-        self.points.windows(2).find_map(on_line)
+    /// Cp on the line over a temperature. The first and the last line go on beyond their ends, as
+    /// other functions do beyond their range. None without two points.
+    pub(super) fn at(&self, kelvin: &N) -> Option<N> {
+        let mut lines = self.points.windows(2);
+        let over = lines.find(|pair| *kelvin <= pair[1].0);
+        match over.or_else(|| self.points.windows(2).last())? {
+            [a, b] => Some(line(a, b, kelvin)),
+            _ => None,
+        }
     }
 
-    /// The integral of Cp from the first point to a temperature that a line covers.
-    pub(super) fn integral(&self, kelvin: &N, lenience: &N) -> Option<N> {
-        let end = (kelvin.clone(), self.at(kelvin, lenience)?);
+    /// The integral of Cp from the first point to a temperature.
+    pub(super) fn integral(&self, kelvin: &N) -> Option<N> {
+        let end = (kelvin.clone(), self.at(kelvin)?);
         let first = self.points.first()?;
         let between = self.points.iter().skip(1).filter(|(t, _)| t < kelvin);
         let mut sum = N::zero();

@@ -70,15 +70,15 @@ impl HeatCapacity {
         distance >= -lenience() && !distance.is_positive()
     }
 
-    /// Cp at a temperature in K, J/(mol K), inside the range or not. `gas_constant` is the R of
-    /// the source's fits. None where a table does not reach (it goes on for 2 K below its first
-    /// point), and at 0 K and below.
+    /// Cp at a temperature in K, J/(mol K), inside the range or not: whether the function may
+    /// serve there is the caller's to ask. `gas_constant` is the R of the source's fits. None at
+    /// 0 K and below, and for a table without two points.
     pub fn at(&self, kelvin: f64, gas_constant: f64) -> Option<f64> {
         if kelvin <= 0.0 {
             return None;
         }
         match self.form {
-            Form::Table => self.lines().at(&kelvin, &to_f64(&lenience())),
+            Form::Table => self.lines().at(&kelvin),
             _ => Some(self.powers(gas_constant).at(&kelvin)),
         }
     }
@@ -135,10 +135,9 @@ impl HeatCapacity {
             return None;
         }
         if self.form == Form::Table {
-            let (lines, lenience) = (self.lines(), N::of(&lenience()));
-            let [from, to] = [from, to].map(|kelvin| lines.integral(kelvin, &lenience));
+            let lines = self.lines();
             return Some(Integral {
-                sum: to? - from?,
+                sum: lines.integral(to)? - lines.integral(from)?,
                 of_logarithm: N::zero(),
             });
         }

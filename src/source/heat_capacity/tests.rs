@@ -111,9 +111,11 @@ fn integrals_worked_by_hand() {
         (corner.clone(), "300", "500", "5750"),
         // Inside one line: 25 at 350 K, 27.5 at 375 K.
         (corner.clone(), "350", "375", "656.25"),
-        // Down again; and 2 K below the first point, where the line has 19.8.
+        // Down again; 2 K below the first point, where the line has 19.8; 100 K beyond the last one,
+        // where it has 45.
         (corner.clone(), "500", "300", "-5750"),
-        (corner, "298", "300", "39.8"),
+        (corner.clone(), "298", "300", "39.8"),
+        (corner, "600", "700", "4250"),
     ] {
         let worked = increment(&function, from, to);
         let expected = Real::Exact(exact(joules));
@@ -218,14 +220,13 @@ fn only_forms_with_an_integration_constant_have_a_scale() {
 }
 
 #[test]
-fn absolute_zero_and_what_no_line_covers_have_no_value() {
+fn there_is_no_value_at_absolute_zero_and_none_of_a_table_without_points() {
     let constant = function(Form::Constant, &["30"]);
-    let line = table(&[["300", "20"], ["400", "30"]]);
     for (function, from, to) in [
         (&constant, "0", "300"),
         (&constant, "300", "-1"),
-        (&line, "297.9", "350"),
-        (&line, "350", "400.1"),
+        (&nitrogen(), "0", "300"),
+        (&table(&[["300", "20"]]), "300", "301"),
         (&table(&[]), "300", "301"),
     ] {
         assert_eq!(increment(function, from, to), None, "{from} to {to}");
@@ -233,8 +234,9 @@ fn absolute_zero_and_what_no_line_covers_have_no_value() {
         assert_eq!(function.increment_f64(from, to, 8.0), None);
     }
     assert_eq!(constant.at(0.0, 8.0), None);
-    assert_eq!(line.at(297.9, 8.0), None);
+    let line = table(&[["300", "20"], ["400", "30"]]);
     assert_eq!(line.at(350.0, 8.0), Some(25.0));
+    assert_eq!(line.at(450.0, 8.0), Some(35.0));
 }
 
 #[test]

@@ -11,7 +11,7 @@ Temperatures lie anywhere in the ranges that the participants share, two decimal
 
 How a heat is worked: H(T) = H + f(T) - f(298.15 K), where H is the enthalpy printed for 298.15 K
 and f is Cantera's. Where nothing is printed for 298.15 K (forms of a solid that begin above it,
-liquids, all of the seven coefficients' source), f(T) stands alone: its integration constant puts it
+liquids, the compounds of the seven coefficients' source), f(T) stands alone: its integration constant puts it
 on the same scale. Of a condensed substance the form is taken whose range holds the temperature.
 
 - nasa-9: the records of NASA's thermo.inp, read by ../glenn/parse_thermo.py. The functions were
@@ -54,6 +54,10 @@ CONDENSED = (
     "Fe Al Si Ti Mg Ca Na C S Cu Pb Fe2O3 Fe3O4 Al2O3 O2Si O2Ti MgO CaO CuO H2O ClNa Cl2Mg CaCl2"
 ).split()
 WRITTEN = {"Al2O3": "Al2O3", "O2Si": "SiO2", "O2Ti": "TiO2", "ClNa": "NaCl", "Cl2Mg": "MgCl2"}
+
+
+# Zero at 298.15 K by convention, whatever their functions leave of it there (some 1e-5 J/mol).
+REFERENCE = ["H2(g)", "O2(g)", "N2(g)", "F2(g)", "Cl2(g)", "Ar(g)", "C(cr, graphite)"]
 
 
 class Function:
@@ -127,7 +131,8 @@ def nasa_seven():
         halves = [half for half in halves_of(c, low, middle, high) if half[0] < half[1]]
         entries.append(entry(label, "nasa-7", halves))
         elements = {e: Fraction(n) for e, n in species.composition.items()}
-        made = Function(label, elements, low, high, joule(species.thermo), None)
+        printed = 0.0 if label in REFERENCE else None
+        made = Function(label, elements, low, high, joule(species.thermo), printed)
         substances.append([made])
     return substances, source("seven", f'gas-constant = "{cantera.gas_constant / 1000.0!r}"', entries)
 
@@ -145,7 +150,7 @@ def shomate(rng):
     substances, entries = [], []
     for label in SHOMATE:
         drawn = f"{rng.uniform(-400, 100):.3f}"
-        formation = "0.000" if label in ("H2(g)", "O2(g)", "N2(g)") else drawn
+        formation = "0.000" if label in REFERENCE else drawn
         low, middle, high = 298.0, float(rng.randrange(800, 1300, 50)), 3000.0
 
         def draw():
