@@ -10,9 +10,11 @@ mod cycle_references;
 mod cycle_steps;
 mod cycles;
 mod given;
+mod heat_capacity;
 mod ids;
 mod inputs;
 mod model;
+mod molality;
 mod output;
 mod prose;
 mod reactions;
@@ -26,11 +28,13 @@ pub use allowances::{Allowance, AllowedKind};
 pub use cycle::{Cycle, CycleStep, Measured, StepCorrelation, StepHeat, step_name};
 pub(crate) use cycle_references::Order;
 pub use given::Given;
+pub use heat_capacity::{CaseHeatCapacity, HeatCapacityStatement};
 pub use ids::IdKind;
 pub use model::{
     Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText,
     Reaction, RecordHead, ResultUnits, Revision, Role, RoundingRule, Status,
 };
+pub use molality::Molality;
 pub use prose::{Binding, MARKDOWN, bindings, is_escaped};
 pub use reactions::RESULT_QUANTITIES;
 pub use read::{CASE_NAME, read_case};

@@ -8,6 +8,7 @@ use crate::quantity::{
 };
 use crate::source::Problem;
 
+use super::bounds::AdverseBound;
 use super::work::WorkOptions;
 use super::worked::Worked;
 
@@ -64,6 +65,8 @@ pub struct Outcome {
     pub remark: Option<Stated>,
     /// What `combined` was multiplied by beyond the uncertainties stated; one where nothing was.
     pub inflation: f64,
+    /// The bounds of heat capacities that it was worked with.
+    pub adverse: Vec<AdverseBound>,
 }
 
 impl Outcome {
@@ -116,6 +119,7 @@ impl Outcome {
             remark,
             inflation,
             value,
+            adverse: Vec::new(),
         }
     }
 

@@ -14,12 +14,15 @@ mod consult;
 mod cycle;
 mod cycle_heats;
 mod excerpt;
+mod given;
+mod given_findings;
 mod glenn;
 mod glenn_entries;
 mod heat_capacity;
 mod index;
 #[cfg(test)]
 mod index_tests;
+mod kopp;
 mod matching;
 mod model;
 mod molar_mass;
@@ -34,6 +37,7 @@ mod reference_states;
 mod resolve;
 mod resolve_cycle;
 mod search;
+mod solution;
 mod species_list;
 mod stable;
 mod standing;
@@ -41,9 +45,10 @@ mod store;
 mod suggest;
 mod transitions;
 mod unbalanced;
+mod vapour;
 mod walk;
 
-pub use builtin::{BUILT_IN, built_in};
+pub use builtin::{BUILT_IN, KOPP, built_in};
 pub use consult::{Consultation, SourceFiles, consult};
 pub use cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};
 pub use excerpt::{attachment_name, excerpts};
@@ -51,8 +56,8 @@ pub use heat_capacity::{Form, FunctionTerm, HeatCapacity};
 pub use model::{Digits, Entry, SourceHead, Subject};
 pub use path::reference_kelvin;
 pub use problem::{
-    Comparison, EnthalpyPath, Judgement, Leg, Problem, ProblemReaction, ProblemTerm, Start,
-    Substance, ValueKind, ValueUsed,
+    BoundedPath, Comparison, EnthalpyPath, Judgement, Leg, Problem, ProblemReaction, ProblemTerm,
+    Start, Substance, ValueKind, ValueUsed,
 };
 pub use read::{Provenance, read_source, sha256_hex};
 pub use reference_states::ReferenceStates;

@@ -65,7 +65,7 @@ impl Resolver<'_> {
         ));
     }
 
-    fn atomic_weight(&mut self, symbol: &str, span: &Span) -> Option<usize> {
+    pub(super) fn atomic_weight(&mut self, symbol: &str, span: &Span) -> Option<usize> {
         if let Some(index) = self.atomic_weights.get(symbol) {
             return Some(*index);
         }

@@ -5,6 +5,7 @@
 
 mod balance;
 mod digits;
+mod given;
 mod invented;
 mod order;
 mod references;

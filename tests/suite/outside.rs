@@ -16,6 +16,7 @@ mod published;
 mod random_heats;
 mod rational;
 mod rounding;
+mod solution;
 mod tools;
 mod units;
 mod water;
