@@ -179,14 +179,17 @@ fn kind_of(table: &Table<'_, '_>) -> Option<Kind> {
     if let (Some((_, kind)), None) = (found.next(), found.next()) {
         return Some(*kind);
     }
-    let found = match ways.iter().any(|(there, _)| *there) {
-        true => "a heat capacity that is stated in several ways",
-        false => "a heat capacity without a number or an estimate",
-    };
+    if ways.iter().all(|(there, _)| !there) {
+        table.missing(
+            "value",
+            "give a value, bounds `low` and `high`, or estimate = \"kopp\" for a solid",
+        );
+        return None;
+    }
     value_fault(
         table.reader(),
         &table.span,
-        found,
+        "a heat capacity that is stated in several ways",
         "either `value`, or `low` and `high`, or `estimate`",
         "keep the one that you have a source for",
     );
@@ -252,6 +255,15 @@ fn read_estimate(table: &Table<'_, '_>, phase: Option<&Phase>) -> Option<HeatCap
     let reader = table.reader();
     let text = table.string("estimate")?;
     one_of(reader, &text, &[("kopp", ())])?;
+    if let Some(range) = table.get("range") {
+        value_fault(
+            reader,
+            &range.key_span,
+            "a range of an estimate",
+            "no range: the rule is for 298 K, and the working says how far it is used",
+            "leave it out",
+        );
+    }
     let solid = |phase: &Phase| {
         matches!(
             phase.label,

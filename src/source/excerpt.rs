@@ -9,7 +9,7 @@ use crate::quantity::{Decimal, Exact, Quantity};
 
 use super::heat_capacity::HeatCapacity;
 use super::model::{Digits, Entry, SourceHead, Subject};
-use super::problem::Problem;
+use super::problem::{Problem, ValueKind};
 use super::standing::Standing;
 use super::store::Source;
 

@@ -84,3 +84,40 @@ fn hydrogen_chloride_dissolves_with_the_measured_heat() {
     let heat = worked(&case).number("r.heat", "value");
     assert!((heat + 17.888 * 4.184).abs() < 0.15, "{heat}");
 }
+
+/// 13.336 kcal_th/mol by calorimetry (C. E. Vanderzee, J. A. Swanson, J. Phys. Chem. 67 (1963) 2608,
+/// from memory); CODATA carries 0.06 of uncertainty for the sum, the measurement some 0.08.
+#[test]
+fn strong_acid_and_base_at_infinite_dilution_give_the_measured_heat() {
+    let case = one_reaction(&["codata-1989"], "H+(aq) + OH-(aq) -> H2O(l)", "");
+    let results = worked(&case);
+    assert_eq!(results.text("r.heat", "exact"), "-55.815");
+    let heat = results.number("r.heat", "value");
+    assert!((heat + 13.336 * 4.184).abs() < 0.1, "{heat}");
+}
+
+/// Published for the hydrogenation of nitrobenzene to aniline: −544 kJ/mol, said for 200 °C
+/// (Ullmann's Encyclopedia of Industrial Chemistry, Aniline), and −560 kJ/mol as the typical heat of
+/// hydrogenating a nitro group (F. Stoessel, Thermal Safety of Chemical Processes); both from memory,
+/// neither to better than 2 %.
+#[test]
+fn hydrogenation_of_nitrobenzene_lies_at_the_published_heats() {
+    let folder = Folder::new();
+    let liquids = concat!(
+        env!("CARGO_MANIFEST_DIR"),
+        "/cases/sources/organic-liquids.toml"
+    );
+    let liquids = std::fs::read_to_string(liquids).expect("a shipped source");
+    folder.write("liquids.toml", &liquids);
+    let more = "[substances]\nnitrobenzene = { formula = \"C6H5NO2\", phase = \"l\", cas = \
+                \"98-95-3\" }\naniline = { formula = \"C6H7N\", phase = \"l\", cas = \"62-53-3\" }";
+    let equation = "nitrobenzene + 3 H2(g) -> aniline + 2 H2O(l)";
+    let case = one_reaction(&["codata-1989", "liquids.toml"], equation, more);
+    let heat = folder
+        .results(&case)
+        .expect("worked")
+        .number("r.heat", "value");
+    for published in [-544.0, -560.0] {
+        assert!((heat / published - 1.0).abs() < 0.02, "{heat} {published}");
+    }
+}
