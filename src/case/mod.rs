@@ -12,11 +12,13 @@ mod cycle_steps;
 mod cycles;
 mod fuel;
 mod given;
+mod heat_capacity;
 mod heating_values;
 mod ids;
 mod inputs;
 mod metering;
 mod model;
+mod molality;
 mod output;
 mod prose;
 mod reactions;
@@ -31,6 +33,7 @@ pub use composition::{Composition, Moisture, Part, Share};
 pub use cycle::{Cycle, CycleStep, Measured, StepCorrelation, StepHeat, step_name};
 pub(crate) use cycle_references::Order;
 pub use given::Given;
+pub use heat_capacity::{CaseHeatCapacity, HeatCapacityStatement};
 pub use heating_values::{Constant, HEATING_VALUE_QUANTITIES, HeatingValue};
 pub use ids::IdKind;
 pub use metering::{Compression, Metering};
@@ -38,6 +41,7 @@ pub use model::{
     Assumption, Case, Choice, DeclaredKind, DeclaredSubstance, Hold, Input, ProsePart, ProseText,
     Reaction, RecordHead, ResultUnits, Revision, Role, RoundingRule, Status,
 };
+pub use molality::Molality;
 pub use prose::{Binding, MARKDOWN, bindings, is_escaped};
 pub use reactions::RESULT_QUANTITIES;
 pub use read::{CASE_NAME, read_case};

@@ -11,6 +11,8 @@ use crate::notation::{Equation, Formula, Phase};
 use crate::quantity::{Quantity, Unit};
 
 use super::allowances::Allowance;
+use super::heat_capacity::CaseHeatCapacity;
+use super::molality::Molality;
 
 /// Everything that a case states.
 #[derive(Clone, Debug)]
@@ -137,6 +139,8 @@ pub struct DeclaredSubstance {
     pub kind: DeclaredKind,
     pub name: Option<String>,
     pub cas: Option<String>,
+    /// What the case itself says of its heat capacity.
+    pub heat_capacity: Option<CaseHeatCapacity>,
 }
 
 /// What a declared substance is made of.
@@ -170,6 +174,8 @@ pub struct Reaction {
     pub per: Option<Located<String>>,
     /// Whether the case says `per`, be it rightly or not.
     pub says_per: bool,
+    /// How concentrated aqueous participants are, where the case says it.
+    pub molalities: Vec<Molality>,
 }
 
 /// A place that a result is to be stated to.

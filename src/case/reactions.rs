@@ -4,12 +4,13 @@ use indexmap::IndexMap;
 
 use crate::document::{Reader, Table, is_id, notation_fault, value_fault};
 use crate::finding::{FaultCode, Located};
-use crate::notation::{Equation, Participant};
+use crate::notation::{Equation, Participant, Phase};
 use crate::quantity::Dimension;
 
 use super::given::{Given, read_temperature};
 use super::ids::{IdKind, Ids};
 use super::model::{DeclaredKind, DeclaredSubstance, Input, Reaction};
+use super::molality::MolalityReader;
 use super::results::ResultQuantity;
 
 /// The results that a reaction can have.
@@ -61,7 +62,8 @@ struct Context<'a, 'r, 'd> {
 
 impl Context<'_, '_, '_> {
     fn read_reaction(&self, id: Located<String>) -> Option<Reaction> {
-        self.table.only(&["equation", "temperature", "per"]);
+        self.table
+            .only(&["equation", "temperature", "per", "molality"]);
         let temperature = self.read_temperature();
         let per = self.table.string("per");
         let advice = "write equation = \"N2(g) + 3 H2(g) -> 2 NH3(g)\"";
@@ -83,12 +85,18 @@ impl Context<'_, '_, '_> {
         let says_per = per.is_some();
         let per =
             per.and_then(|text| named_participant(self.table.reader(), &equation.value, &text));
+        let molalities = MolalityReader {
+            ids: self.ids,
+            inputs: self.inputs,
+        };
+        let molalities = molalities.read(self.table, |name| self.dissolved(&equation.value, name));
         Some(Reaction {
             id,
             equation,
             temperature,
             per,
             says_per,
+            molalities,
         })
     }
 
@@ -96,6 +104,42 @@ impl Context<'_, '_, '_> {
     fn read_temperature(&self) -> Option<Given> {
         let text = self.table.string("temperature")?;
         read_temperature(self.table.reader(), self.ids, self.inputs, &text)
+    }
+
+    /// The aqueous participant at infinite dilution that a name stands for.
+    fn dissolved(&self, equation: &Equation, name: &Located<String>) -> Option<String> {
+        let terms = equation.left.iter().chain(&equation.right);
+        let aqueous: Vec<String> = terms
+            .filter(|term| self.is_dissolved(&term.participant))
+            .map(|term| term.participant.to_string())
+            .collect();
+        let wanted = canonical_participant(&name.value);
+        if aqueous.contains(&wanted) {
+            return Some(wanted);
+        }
+        let expected = match aqueous.is_empty() {
+            true => "no molality: the equation has no solute at infinite dilution".to_string(),
+            false => format!("a solute of the equation: {}", aqueous.join(", ")),
+        };
+        value_fault(
+            self.table.reader(),
+            &name.span,
+            format!("`{}`", name.value),
+            expected,
+            "a molality belongs to a participant in (aq) without water of its own",
+        );
+        None
+    }
+
+    fn is_dissolved(&self, participant: &Participant) -> bool {
+        let phase = match participant {
+            Participant::Species(species) => species.phase.as_ref(),
+            Participant::Declared(id) => match self.substances.get(id).map(|s| &s.kind) {
+                Some(DeclaredKind::Compound { phase, .. }) => Some(phase),
+                _ => None,
+            },
+        };
+        phase.is_some_and(Phase::is_infinite_dilution)
     }
 }
 

@@ -71,8 +71,8 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
         );
     }
     let record = record.map(|table| read_record(&table));
-    let substances = substances.map_or_else(IndexMap::new, |t| read_substances(&t));
     let inputs = inputs.map_or_else(IndexMap::new, |t| read_inputs(&t));
+    let substances = substances.map_or_else(IndexMap::new, |t| read_substances(&t, &ids, &inputs));
     let tables = [&reactions, &cycles, &fuels].into_iter().flatten();
     let stated: usize = tables.map(|table| table.entries().len()).sum();
     let reactions = match reactions {

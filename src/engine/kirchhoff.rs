@@ -101,6 +101,7 @@ fn leg_enthalpy(problem: &Problem, leg: &Leg) -> Worked {
             to_value,
             to,
         } => scale(problem, (*from_value, from), (*to_value, to)),
+        Leg::Concentration { value } => Worked::printed(problem, *value, 1),
         Leg::Transition { value, forward, .. } => {
             let sign = if *forward { 1 } else { -1 };
             Worked::printed(problem, *value, sign)
@@ -116,6 +117,9 @@ fn heating(problem: &Problem, value: usize, from: &Exact, to: &Exact) -> Worked 
     let way = to - from;
     let mut form = LinearForm::default();
     form.add_scaled(value, &Real::Exact(way.clone()));
+    for (part, sensitivity) in &problem.values[value].made_of {
+        form.add_scaled(*part, &Real::Exact(sensitivity * &way));
+    }
     Worked {
         significance: heating_significance(&problem.values[value], &increment, &way),
         value: increment,

@@ -3,6 +3,7 @@
 //! One file per method. Each method's docstring names its published source, its units and its
 //! limits.
 
+mod bounds;
 mod cycle;
 mod formation;
 mod heating_value;
@@ -15,6 +16,7 @@ mod standing;
 mod work;
 mod worked;
 
+pub use bounds::{AdverseBound, AdverseHeat, Bound, adverse_heat};
 pub use cycle::{
     Adjustment, CRITICAL_RESIDUAL, CycleSum, CycleWorking, Multipliers, NoMultipliers,
     SIGNIFICANCE_LEVEL, StepHeat, closure_text, decimals, global_test, local_test, weakness,

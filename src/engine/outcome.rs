@@ -8,6 +8,7 @@ use crate::quantity::{
 };
 use crate::source::Problem;
 
+use super::bounds::AdverseBound;
 use super::work::WorkOptions;
 use super::worked::Worked;
 
@@ -69,6 +70,8 @@ pub struct Outcome {
     pub inflation: f64,
     /// Whether heat given off counts positive, as for heating values (ISO 6976).
     pub given_off_is_positive: bool,
+    /// The bounds of heat capacities that it was worked with.
+    pub adverse: Vec<AdverseBound>,
 }
 
 impl Outcome {
@@ -122,6 +125,7 @@ impl Outcome {
             inflation,
             given_off_is_positive: false,
             value,
+            adverse: Vec::new(),
         }
     }
 

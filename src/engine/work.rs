@@ -7,10 +7,11 @@ use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::quantity::{Exact, InputUncertainty, LinearForm, Real, Unit, exact_text, to_f64};
 use crate::source::{Problem, ProblemReaction, reference_kelvin};
 
+use super::bounds::{adverse_heat, bounds_finding};
 use super::cycle::{CycleWorking, work_cycle};
 use super::heating_value::{HeatingValueWorking, work_heating_value};
 use super::hess::{Hess, hess_sum};
-use super::kirchhoff::{HeatAt, heat_at, heat_capacity_change};
+use super::kirchhoff::{HeatAt, heat_capacity_change};
 use super::outcome::{Outcome, place_in};
 use super::per::{MolarMass, molar_mass, per_mass, per_mole};
 use super::worked::Worked;
@@ -149,9 +150,17 @@ fn work_reaction(
     let hess = paths
         .as_ref()
         .and_then(|_| hess_sum(problem, reaction, &unit));
-    let at_reference = reaction.kelvin == reference_kelvin() && hess.is_some();
+    let at_reference = hess.is_some() && is_sum_alone(problem, reaction, paths.as_deref());
     let heat = paths.as_ref().filter(|_| !at_reference);
-    let heat = heat.map(|terms| heat_at(problem, terms, &unit));
+    let heat = heat.map(|terms| adverse_heat(problem, terms, &unit));
+    let (heat, adverse) = match heat {
+        Some(heat) => {
+            let said = bounds_finding(problem, reaction, &heat, &unit, options.text);
+            working.findings.extend(said);
+            (Some(heat.heat), heat.bounds)
+        }
+        None => (None, Vec::new()),
+    };
     let mut worked = match (&heat, &hess) {
         (Some(heat), _) => Some(heat.sum.clone()),
         (None, Some(hess)) => Some(hess.worked()),
@@ -163,7 +172,14 @@ fn work_reaction(
         working.findings.extend(said);
     }
     let molar_mass = match worked {
-        Some(worked) => work_results(problem, options, reaction, worked, &unit, working),
+        Some(worked) => {
+            let first = working.outcomes.len();
+            let mass = work_results(problem, options, reaction, worked, &unit, working);
+            for outcome in &mut working.outcomes[first..] {
+                outcome.adverse = adverse.clone();
+            }
+            mass
+        }
         None => None,
     };
     working.reactions.push(ReactionWorking {
@@ -172,6 +188,17 @@ fn work_reaction(
         heat,
         molar_mass,
     });
+}
+
+/// Whether the sum of the printed formation enthalpies is the whole heat.
+fn is_sum_alone(
+    problem: &Problem,
+    reaction: &ProblemReaction,
+    paths: Option<&[(usize, Exact)]>,
+) -> bool {
+    let mut paths = paths.unwrap_or_default().iter();
+    let no_legs = paths.all(|(path, _)| problem.paths[*path].legs.is_empty());
+    reaction.kelvin == reference_kelvin() && no_legs
 }
 
 /// The paths of the participants with their stoichiometric numbers; none where one is missing.

@@ -118,6 +118,11 @@ impl PhaseLabel {
 }
 
 impl Phase {
+    /// Whether it stands for a solute at infinite dilution.
+    pub fn is_infinite_dilution(&self) -> bool {
+        self.label == PhaseLabel::Aqueous && self.dilution.is_none()
+    }
+
     /// The phase with a label alone.
     pub fn plain(label: PhaseLabel) -> Self {
         Self {

@@ -3,7 +3,7 @@
 use crate::calculation::Calculation;
 use crate::engine::{HeatAt, HeatTerm, Outcome, Worked};
 use crate::quantity::{Exact, exact_text, working_text};
-use crate::source::{EnthalpyPath, Problem, ProblemReaction, Start};
+use crate::source::{EnthalpyPath, Problem, ProblemReaction, Start, reference_kelvin};
 
 use super::numerals::{minus, signed, unit};
 use super::pages::{Step, Table};
@@ -23,9 +23,27 @@ pub(super) fn heat_steps(
 ) {
     let problem = &calculation.problem;
     let kelvin = minus(&exact_text(&reaction.kelvin));
-    steps.push(Step::Heading {
-        text: format!("At {kelvin} K"),
+    match reaction.kelvin == reference_kelvin() {
+        true => steps.push(Step::Heading {
+            text: "At the stated concentrations".to_string(),
+        }),
+        false => steps.extend(temperature_steps(&kelvin)),
+    }
+    for term in &heat.terms {
+        steps.extend(path_steps(problem, term));
+    }
+    steps.push(displayed(heat_at_temperature()));
+    steps.push(Step::Table(contributions(problem, heat, outcome)));
+    steps.push(Step::Text {
+        text: substitution(heat, outcome, &kelvin),
     });
+}
+
+/// What is done to come from 298.15 K to another temperature.
+fn temperature_steps(kelvin: &str) -> Vec<Step> {
+    let mut steps = vec![Step::Heading {
+        text: format!("At {kelvin} K"),
+    }];
     steps.push(displayed(enthalpy_at_temperature()));
     steps.push(Step::Text {
         text: Rich::run(Rich::plain(""), Run::Italic("T".into()))
@@ -37,14 +55,7 @@ pub(super) fn heat_steps(
                  not taken along."
             )),
     });
-    for term in &heat.terms {
-        steps.extend(path_steps(problem, term));
-    }
-    steps.push(displayed(heat_at_temperature()));
-    steps.push(Step::Table(contributions(problem, heat, outcome)));
-    steps.push(Step::Text {
-        text: substitution(heat, outcome, &kelvin),
-    });
+    steps
 }
 
 /// ν, substance, rows, H(298.15 K), increment, H(T), ν·H(T).

@@ -17,6 +17,7 @@ mod cycle_working;
 mod formation_table;
 mod front;
 mod function_rows;
+mod given_working;
 mod heat_working;
 mod heating_value_components;
 mod heating_value_rows;

@@ -4,6 +4,7 @@ use crate::engine::{HeatTerm, Worked};
 use crate::quantity::{Exact, Real, Significance, exact_text, working_text};
 use crate::source::{Form, FunctionTerm, HeatCapacity, Leg, Problem, Start};
 
+use super::given_working::{concentration_step, made_of_steps};
 use super::heat_working::shown;
 use super::numerals::minus;
 use super::pages::{Step, Table};
@@ -48,8 +49,12 @@ fn leg_steps(problem: &Problem, leg: &Leg, worked: &Worked, name: &Rich) -> Vec<
                     kelvin(to)
                 ))
                 .run(Run::ValueUsed(value + 1));
-            function_steps(problem, *value, [Some(from), Some(to)], said, worked)
+            let mut steps = made_of_steps(problem, *value);
+            let along = [Some(from), Some(to)];
+            steps.extend(function_steps(problem, *value, along, said, worked));
+            steps
         }
+        Leg::Concentration { value } => vec![concentration_step(problem, *value, worked, name)],
         Leg::Scale {
             from_value,
             from,

@@ -5,7 +5,7 @@ use serde_json::{Map, Value, json};
 
 use super::cycle_json::adjustments;
 use crate::calculation::Calculation;
-use crate::engine::{COVERAGE, Outcome};
+use crate::engine::{AdverseBound, COVERAGE, Outcome};
 use crate::finding::{Finding, Place};
 use crate::quantity::{Real, exact_text};
 use crate::source::{Problem, ValueUsed};
@@ -54,7 +54,7 @@ fn record(calculation: &Calculation) -> Value {
 fn results(calculation: &Calculation) -> Map<String, Value> {
     let outcomes = calculation.working.outcomes.iter();
     let mut results: Map<String, Value> = outcomes
-        .map(|outcome| (outcome.id.clone(), result(outcome)))
+        .map(|outcome| (outcome.id.clone(), result(&calculation.problem, outcome)))
         .collect();
     for (id, adjustment) in adjustments(calculation) {
         if let Some(Value::Object(result)) = results.get_mut(&id) {
@@ -64,7 +64,7 @@ fn results(calculation: &Calculation) -> Map<String, Value> {
     results
 }
 
-fn result(outcome: &Outcome) -> Value {
+fn result(problem: &Problem, outcome: &Outcome) -> Value {
     let mut map = Map::new();
     map.insert("value".into(), json!(outcome.value.to_f64()));
     if let Some(exact) = outcome.value.exact() {
@@ -83,7 +83,21 @@ fn result(outcome: &Outcome) -> Value {
         json!({ "stated": outcome.combined.stated, "of": outcome.combined.of }),
     );
     map.insert("budget".into(), json!(budget(outcome)));
+    if !outcome.adverse.is_empty() {
+        map.insert("adverse".into(), json!(adverse(problem, outcome)));
+    }
     Value::Object(map)
+}
+
+/// The bound of each heat capacity that the result was worked with.
+fn adverse(problem: &Problem, outcome: &Outcome) -> Vec<Value> {
+    let row = |bound: &AdverseBound| {
+        json!({
+            "substance": problem.substances[bound.substance].label,
+            "bound": bound.bound.word(),
+        })
+    };
+    outcome.adverse.iter().map(row).collect()
 }
 
 fn budget(outcome: &Outcome) -> Vec<Value> {

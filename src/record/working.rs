@@ -7,6 +7,7 @@ use crate::source::{Problem, ProblemReaction};
 
 use super::cycle_working::cycle_sections;
 use super::formation_table::{cancelled, formation_table};
+use super::given_working::bounds_step;
 use super::heat_working::heat_steps;
 use super::heating_value_working::heating_value_sections;
 use super::math::Math;
@@ -89,6 +90,7 @@ fn result_steps(
     if let Some(heat) = &working.heat {
         heat_steps(calculation, reaction, heat, outcome, steps);
     }
+    steps.extend(bounds_step(&calculation.problem, outcome));
     steps.push(Step::Heading {
         text: "Uncertainty and stated digits".to_string(),
     });

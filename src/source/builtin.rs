@@ -13,9 +13,11 @@ pub(super) const CONVENTIONS: &str = "conventions";
 pub(super) const ATOMIC_WEIGHTS: &str = "atomic-weights-2021";
 pub(super) const CONSTANTS: &str = "constants-2022";
 pub(super) const GLENN: &str = glenn::ID;
+/// What atoms add to the heat capacities of solids.
+pub const KOPP: &str = "kopp-1992";
 
 /// Source files that are part of the program.
-pub(super) const FILES: [(&str, &str); 4] = [
+pub(super) const FILES: [(&str, &str); 5] = [
     (CONVENTIONS, include_str!("data/conventions.toml")),
     ("codata-1989", include_str!("data/codata-1989.toml")),
     (
@@ -23,10 +25,18 @@ pub(super) const FILES: [(&str, &str); 4] = [
         include_str!("data/atomic-weights-2021.toml"),
     ),
     (CONSTANTS, include_str!("data/constants-2022.toml")),
+    (KOPP, include_str!("data/kopp-1992.toml")),
 ];
 
 /// The ids of all built-in sources.
-pub const BUILT_IN: [&str; 5] = [CONVENTIONS, "codata-1989", GLENN, ATOMIC_WEIGHTS, CONSTANTS];
+pub const BUILT_IN: [&str; 6] = [
+    CONVENTIONS,
+    "codata-1989",
+    GLENN,
+    ATOMIC_WEIGHTS,
+    CONSTANTS,
+    KOPP,
+];
 
 /// A built-in source by its id.
 pub fn built_in(id: &str) -> Option<Source> {

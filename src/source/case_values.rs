@@ -64,6 +64,7 @@ impl Resolver<'_> {
             uncertainty,
             printed: quantity,
             function: None,
+            made_of: Vec::new(),
             locator: stated.locator,
             note: stated.note,
             standing: Standing::Stated,

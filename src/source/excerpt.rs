@@ -90,9 +90,9 @@ fn entries(
         .iter()
         .flat_map(|f| source.of_composition(f))
         .collect();
-    let by_symbol = [ValueKind::AtomicWeight, ValueKind::GasConstant];
+    // Atomic weights, constants, and what atoms contribute to a heat capacity.
     let symbols = problem.values.iter();
-    let symbols = symbols.filter(|v| v.source == index && by_symbol.contains(&v.kind));
+    let symbols = symbols.filter(|v| v.source == index && v.species.is_none());
     entries.extend(symbols.filter_map(|v| source.of_symbol(&v.substance)));
     entries
 }

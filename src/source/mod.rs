@@ -16,6 +16,8 @@ mod cycle;
 mod cycle_heats;
 mod excerpt;
 mod gas_constant;
+mod given;
+mod given_findings;
 mod glenn;
 mod glenn_entries;
 mod heat_capacity;
@@ -23,6 +25,7 @@ mod heating_value;
 mod index;
 #[cfg(test)]
 mod index_tests;
+mod kopp;
 mod matching;
 mod model;
 mod molar_mass;
@@ -37,6 +40,7 @@ mod reference_states;
 mod resolve;
 mod resolve_cycle;
 mod search;
+mod solution;
 mod species_list;
 mod stable;
 mod standing;
@@ -44,9 +48,10 @@ mod store;
 mod suggest;
 mod transitions;
 mod unbalanced;
+mod vapour;
 mod walk;
 
-pub use builtin::{BUILT_IN, built_in};
+pub use builtin::{BUILT_IN, KOPP, built_in};
 pub use combustion_equation::Combustion;
 pub use consult::{Consultation, SourceFiles, consult};
 pub use cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};
@@ -59,8 +64,8 @@ pub use heating_value::{
 pub use model::{Digits, Entry, SourceHead, Subject};
 pub use path::reference_kelvin;
 pub use problem::{
-    Comparison, EnthalpyPath, Judgement, Leg, Problem, ProblemReaction, ProblemTerm, Start,
-    Substance, ValueKind, ValueUsed,
+    BoundedPath, Comparison, EnthalpyPath, Judgement, Leg, Problem, ProblemReaction, ProblemTerm,
+    Start, Substance, ValueKind, ValueUsed,
 };
 pub use read::{Provenance, read_source, sha256_hex};
 pub use reference_states::ReferenceStates;

@@ -72,10 +72,11 @@ impl Resolver<'_> {
         if let Some(known) = self.known_paths.get(&key) {
             return *known;
         }
-        let path = self.new_path(substance, kelvin, span);
-        let index = path.map(|path| {
+        let given = self.given_path(substance, kelvin, span);
+        let index = given.unwrap_or_else(|| {
+            let path = self.new_path(substance, kelvin, span)?;
             self.paths.push(path);
-            self.paths.len() - 1
+            Some(self.paths.len() - 1)
         });
         self.known_paths.insert(key, index);
         index
@@ -98,7 +99,7 @@ impl Resolver<'_> {
         self.enter(substance, kelvin, route, span)
     }
 
-    fn material(&mut self, substance: usize, span: &Span) -> Rc<Material> {
+    pub(super) fn material(&mut self, substance: usize, span: &Span) -> Rc<Material> {
         if let Some(known) = self.materials.get(&substance) {
             return Rc::clone(known);
         }

@@ -13,10 +13,11 @@ use super::heat_capacity::{Form, HeatCapacity};
 use super::model::Entry;
 use super::path::{Candidate, Material, Route, RouteStep, on_formation_scale, reference_kelvin};
 use super::resolve::Resolver;
+use super::solution::is_infinitely_dilute;
 use super::walk::{Reach, Stretch, covering, distance, walk};
 
 /// A constant heat capacity over more than this many kelvin carries a caution.
-const LONG: i64 = 100;
+pub(super) const LONG: i64 = 100;
 
 /// Printed value and function further apart than this, in J/mol, carry a caution.
 const APART: f64 = 10.0;
@@ -32,7 +33,13 @@ impl Resolver<'_> {
         }
     }
 
-    fn say_of(&mut self, severity: Severity, code: FindingCode, message: String, span: &Span) {
+    pub(super) fn say_of(
+        &mut self,
+        severity: Severity,
+        code: FindingCode,
+        message: String,
+        span: &Span,
+    ) {
         let at = self.text.place(span.start);
         self.say(Finding {
             severity,
@@ -50,6 +57,9 @@ impl Resolver<'_> {
     }
 
     pub(super) fn say_missing(&mut self, substance: usize, kelvin: &Exact, span: &Span) {
+        if is_infinitely_dilute(&self.substances[substance].species) {
+            return self.say_no_partial(substance, kelvin, span);
+        }
         let message = format!(
             "{}: no consulted source gives a heat capacity, so its enthalpy at {} K is not known. \
              Consult a source that has one, or give one in [substances]: a value with its source, \
@@ -192,7 +202,7 @@ impl Resolver<'_> {
     }
 
     /// What the function of another consulted source would make of the same stretch.
-    fn change(
+    pub(super) fn change(
         &self,
         candidates: &[Candidate],
         constant: &HeatCapacity,
@@ -226,7 +236,7 @@ impl Resolver<'_> {
     }
 
     /// A form that its source calls unstable at the temperature is worked as stated.
-    fn check_stability(
+    pub(super) fn check_stability(
         &mut self,
         substance: usize,
         material: &Material,

@@ -1,13 +1,14 @@
 //! What a path rests on, among the values used.
 
 use crate::finding::Span;
-use crate::quantity::{Quantity, Significance};
+use crate::quantity::{InputUncertainty, Quantity, Significance};
 
 use super::heat_capacity::{Form, HeatCapacity};
 use super::model::{Digits, SourceHead};
 use super::path::Candidate;
 use super::problem::{ValueKind, ValueUsed};
 use super::resolve::{Resolver, value_of};
+use super::standing::Standing;
 
 impl Resolver<'_> {
     /// A heat-capacity function of an entry.
@@ -21,11 +22,16 @@ impl Resolver<'_> {
         let function = &entry.heat_capacity[index];
         let head = &self.sources[*source].head;
         let printed = error_of(function);
-        let value = ValueUsed {
+        let mut value = ValueUsed {
             significance: significance(function),
             function: Some(function.clone()),
             ..value_of(*source, head, ValueKind::HeatCapacity, entry, printed, span)
         };
+        if entry.standing == Standing::ByDefinition {
+            // The zero of the hydrogen ion is agreed, not measured.
+            value.significance = Significance::Exact;
+            value.uncertainty = InputUncertainty::Exact;
+        }
         let key = format!("{index} {}", value.locator);
         self.enter_value(value, &key)
     }
@@ -110,15 +116,19 @@ pub(super) fn formation_significance(printed: &Quantity, head: &SourceHead) -> S
     }
 }
 
+/// The error of a heat capacity of which nothing is stated.
+pub(super) fn zero_error() -> Quantity {
+    // The unit is one of the unit table.
+    Quantity::parse("0 J/(mol K)").expect("a plain quantity")
+}
+
 /// The error of a function as a quantity: zero, known as well as the source states.
 fn error_of(function: &HeatCapacity) -> Quantity {
     let stated = function.uncertainty.as_ref();
     let width = stated.map_or(String::new(), |u| format!(" ± {}", u.printed()));
     let text = format!("0{width} J/(mol K)");
-    // The reader of sources has checked the uncertainty; the unit is one of the unit table.
-    Quantity::parse(&text)
-        .or_else(|_| Quantity::parse("0 J/(mol K)"))
-        .expect("a plain quantity")
+    // The reader of sources has checked the uncertainty.
+    Quantity::parse(&text).unwrap_or_else(|_| zero_error())
 }
 
 /// A constant keeps the digits that it was printed with; the coefficients of a fit limit none.

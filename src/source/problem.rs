@@ -30,6 +30,8 @@ pub struct Problem {
     pub heating_values: Vec<ProblemHeatingValue>,
     /// Molar enthalpies of substances at the temperatures asked for.
     pub paths: Vec<EnthalpyPath>,
+    /// Paths along a heat capacity of which the case states two bounds, by rising `low`.
+    pub bounded: Vec<BoundedPath>,
     /// Between values used, by their index.
     pub correlations: Correlations,
     pub reference_states: ReferenceStates,
@@ -125,6 +127,9 @@ pub struct ValueUsed {
     /// that is stated for it; what is printed is then `function`.
     pub printed: Quantity,
     pub function: Option<HeatCapacity>,
+    /// Values used that a heat capacity is worked from, with ∂C_p/∂x in J/(mol K) per unit of
+    /// each as printed. Its own uncertainty is then what they leave.
+    pub made_of: Vec<(usize, Exact)>,
     pub significance: Significance,
     pub uncertainty: InputUncertainty,
     pub locator: String,
@@ -186,7 +191,9 @@ impl EnthalpyPath {
         let mut values = vec![start];
         for leg in &self.legs {
             match leg {
-                Leg::Heating { value, .. } | Leg::Transition { value, .. } => values.push(*value),
+                Leg::Heating { value, .. }
+                | Leg::Concentration { value }
+                | Leg::Transition { value, .. } => values.push(*value),
                 Leg::Scale {
                     from_value,
                     to_value,
@@ -198,6 +205,13 @@ impl EnthalpyPath {
         values.retain(|value| seen.insert(*value));
         values
     }
+}
+
+/// The two paths of a substance whose heat capacity lies between bounds; indices of paths.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub struct BoundedPath {
+    pub low: usize,
+    pub high: usize,
 }
 
 /// Where a path begins; indices are those of values used.
@@ -226,6 +240,8 @@ pub enum Leg {
         to_value: usize,
         to: Exact,
     },
+    /// From infinite dilution to the stated concentration, at the end of the path.
+    Concentration { value: usize },
     /// A change of phase; `forward` as the source lists it.
     Transition {
         value: usize,

@@ -9,7 +9,7 @@ use crate::finding::{Fault, FaultCode, Faults, Finding, Span, Text};
 use crate::notation::{Element, Participant, Species};
 use crate::quantity::{Correlations, Decimal, Exact, Quantity, to_f64};
 
-use super::builtin::{ATOMIC_WEIGHTS, CONSTANTS};
+use super::builtin::{ATOMIC_WEIGHTS, CONSTANTS, KOPP};
 use super::choose::choose;
 use super::compare::compare;
 use super::consult::{Consultation, SourceFiles, load_built_in};
@@ -19,7 +19,8 @@ use super::matching::Wanted;
 use super::model::{Entry, SourceHead, Subject};
 use super::path::{Candidate, Material, reference_kelvin};
 use super::problem::{
-    EnthalpyPath, Problem, ProblemReaction, ProblemTerm, Substance, ValueKind, ValueUsed,
+    BoundedPath, EnthalpyPath, Problem, ProblemReaction, ProblemTerm, Substance, ValueKind,
+    ValueUsed,
 };
 use super::reference_states::ReferenceStates;
 use super::stable::is_stable;
@@ -39,8 +40,12 @@ pub fn resolve(
         .reactions
         .values()
         .any(|reaction| reaction.per.is_some())
+        || resolver.gives_specific_heat_capacity()
     {
         resolver.add_built_in(ATOMIC_WEIGHTS, files);
+    }
+    if resolver.estimates_heat_capacity() {
+        resolver.add_built_in(KOPP, files);
     }
     resolver.add_for_cycles(files);
     if !case.heating_values.is_empty() {
@@ -80,6 +85,7 @@ pub(super) struct Resolver<'a> {
     /// What the paths of each substance are made from, once a path was asked for.
     pub(super) materials: BTreeMap<usize, Rc<Material>>,
     pub(super) paths: Vec<EnthalpyPath>,
+    pub(super) bounded: Vec<BoundedPath>,
     pub(super) known_paths: BTreeMap<(usize, Exact), Option<usize>>,
     pub(super) values: Vec<ValueUsed>,
     /// Values that were entered, by source, kind and what tells them apart.
@@ -120,6 +126,7 @@ impl<'a> Resolver<'a> {
             serving: Vec::new(),
             materials: BTreeMap::new(),
             paths: Vec::new(),
+            bounded: Vec::new(),
             known_paths: BTreeMap::new(),
             entered: BTreeMap::new(),
             said: BTreeSet::new(),
@@ -181,6 +188,7 @@ impl<'a> Resolver<'a> {
             consulted: self.consulted,
             case_source: self.case_source,
             paths: self.paths,
+            bounded: self.bounded,
             became: self.became,
             substances: self.substances,
             values: self.values,
@@ -221,6 +229,8 @@ impl<'a> Resolver<'a> {
             // A fault says why, and then there is no problem; or a `stop`.
             terms.clear();
         }
+        self.check_vapours(reaction, &terms, &kelvin);
+        self.dissolve(reaction, &mut terms);
         let all = equation.value.left.iter().chain(&equation.value.right);
         let names: Vec<String> = all.map(|term| term.participant.to_string()).collect();
         let per = reaction.per.as_ref();
@@ -438,6 +448,7 @@ pub(super) fn value_of(
         uncertainty: input_uncertainty(&printed, head),
         printed,
         function: None,
+        made_of: Vec::new(),
         locator: entry.locator.clone(),
         note: entry.note.clone(),
         standing: entry.standing,

@@ -5,6 +5,7 @@
 
 mod balance;
 mod digits;
+mod given;
 pub mod heating_values;
 mod invented;
 mod order;

@@ -17,6 +17,7 @@ mod published;
 mod random_heats;
 mod rational;
 mod rounding;
+mod solution;
 mod tools;
 mod units;
 mod water;
