@@ -3,7 +3,7 @@
 use num_traits::{Signed, Zero};
 
 use crate::engine::{Adjustment, CycleSum, StepHeat, Worked, closure_text, decimals};
-use crate::quantity::{Exact, order_of_magnitude, round_to_place, two_digits};
+use crate::quantity::{Exact, order_of_magnitude, round_to_place};
 use crate::source::{Basis, Problem, ProblemCycle, ProblemStep, StepSource};
 
 use super::cycle_equation::{cut, equation, gases, multiplier};
@@ -147,8 +147,8 @@ impl Shown<'_> {
             vec![
                 Rich::plain(closure_text(self.cycle, by)),
                 Rich::plain(minus(&cut(&adjustment.misclosures[k], 10))),
-                Rich::plain(two_digits(adjustment.misclosure_uncertainty[k])),
-                Rich::plain(correlate(adjustment.correlates[k])),
+                Rich::plain(digits(adjustment.misclosure_uncertainty[k], 4)),
+                Rich::plain(digits(adjustment.correlates[k], 6)),
             ]
         });
         Table {
@@ -182,7 +182,7 @@ impl Shown<'_> {
             vec![
                 Rich::plain(step.name.clone()),
                 Rich::plain(shown(&heat.heat)),
-                Rich::plain(uncertainty(adjustment.standard[index])),
+                Rich::plain(digits(adjustment.standard[index], 4)),
                 Rich::plain(adjusted.map_or(String::new(), |q| at(&q, place))),
                 Rich::plain(at(residual, place)),
                 Rich::plain(
@@ -220,17 +220,14 @@ fn turned(heat: &StepHeat, weight: &Exact) -> Worked {
     }
 }
 
-fn uncertainty(u: f64) -> String {
-    if u == 0.0 {
-        "0".to_string()
-    } else {
-        two_digits(u)
+/// A number that others are worked out with by hand, to so many significant digits.
+fn digits(size: f64, count: i64) -> String {
+    let exact = Exact::from_float(size);
+    let order = exact.as_ref().and_then(order_of_magnitude);
+    match (exact, order) {
+        (Some(size), Some(order)) => at(&size, (order + 1 - count).min(0)),
+        _ => "0".to_string(),
     }
-}
-
-/// Six digits of a correlate.
-fn correlate(y: f64) -> String {
-    Exact::from_float(y).map_or("–".to_string(), |y| minus(&cut(&y, 6)))
 }
 
 /// One place more than the two digits of the uncertainty.
