@@ -78,6 +78,21 @@ impl Resolver<'_> {
         Some(Some(low))
     }
 
+    /// A path where no choice between two bounds can be made: there is a `stop` where it would be
+    /// needed.
+    pub(super) fn one_path(
+        &mut self,
+        substance: usize,
+        kelvin: &Exact,
+        span: &Span,
+    ) -> Option<usize> {
+        let path = self.path(substance, kelvin, span)?;
+        if self.bounded.binary_search_by_key(&path, |b| b.low).is_ok() {
+            self.say_bounds_refused(substance, span);
+        }
+        Some(path)
+    }
+
     fn along_given(
         &mut self,
         substance: usize,

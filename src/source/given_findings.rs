@@ -110,6 +110,20 @@ impl Resolver<'_> {
         }
     }
 
+    pub(super) fn say_bounds_refused(&mut self, substance: usize, span: &Span) {
+        let message = format!(
+            "{}: the case gives two bounds of its heat capacity, and a heating value takes one \
+             number. The low bound was taken; give a value with its source instead.",
+            self.substances[substance].label
+        );
+        self.say_of(
+            Severity::Stop,
+            FindingCode::HeatCapacityBounds,
+            message,
+            span,
+        );
+    }
+
     pub(super) fn say_estimated(
         &mut self,
         substance: usize,

@@ -241,7 +241,7 @@ impl Resolver<'_> {
                 true => self.participant(participant, kelvin, span),
                 false => self.participant(&Participant::Species(species.clone()), kelvin, span),
             };
-            let path = found.and_then(|substance| self.path(substance, kelvin, span));
+            let path = found.and_then(|substance| self.one_path(substance, kelvin, span));
             complete &= path.is_some();
             terms.extend(found.map(|substance| ProblemTerm {
                 substance,

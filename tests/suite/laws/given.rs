@@ -343,3 +343,14 @@ fn a_record_with_all_of_it_runs_again_from_its_attachments() {
         &Files::of(&[]),
     );
 }
+
+#[test]
+fn a_heating_value_takes_no_bounds() {
+    let text = "[substances]\nmethane = { formula = \"CH4\", phase = \"g\", heat-capacity = { low = \
+                \"35 J/(mol K)\", high = \"36 J/(mol K)\", range = [\"280 K\", \"300 K\"], source = \
+                \"S\" } }\n[heating-values.f]\ncomposition = { basis = \"mole\", methane = \"exact \
+                1\" }\ntemperature = \"15 °C\"\n";
+    let consult = ["codata-1989", "nasa-glenn-2021"];
+    let worked = worked(&case(&consult, text), &Files::of(&[]));
+    assert_eq!(severities(&worked, "heat-capacity-bounds"), ["stop"]);
+}
