@@ -18,6 +18,7 @@ mod excerpt;
 mod gas_constant;
 mod given;
 mod given_findings;
+mod given_kopp;
 mod glenn;
 mod glenn_entries;
 mod heat_capacity;
