@@ -66,7 +66,10 @@ fn every_value_used_is_there_as_printed_with_its_origin() {
             says(
                 &body,
                 [
-                    with_minus(&value.substance.replace("^", "")),
+                    match value.species {
+                        Some(_) => with_minus(&value.substance.replace('^', "")),
+                        None => value.substance.clone(),
+                    },
                     value.locator.clone(),
                     value.standing.word().to_string(),
                     head.sha256[..16].to_string(),
