@@ -22,12 +22,13 @@ pub(super) const VERIFICATION: [&str; 3] = [
     "Sums are worked in exact rational arithmetic; nothing is rounded before a result is stated \
      (ASTM E29, half to even). Uncertainty is combined to first order with the correlations that \
      sources state (JCGM 100:2008, 5.1.2 and 5.2.2).",
-    "The test suite of this version compares it with published heats of reaction, with an \
-     independent thermochemistry library on the same data, and with worked examples of ASTM E29 \
-     and JCGM 100; each source stands beside its test.",
-    "Limits: heats at the reference temperature of the formation enthalpies (298.15 K) between \
-     standard states. Other temperatures, balances of plant and safety figures are outside this \
-     version.",
+    "The test suite of this version compares it with published heats of reaction, tables of \
+     enthalpies over temperature, calorific values of ISO 6976 (as transcribed), measured heats, an \
+     independent thermochemistry library on the same data, and worked examples of ASTM E29 and \
+     JCGM 100; each source stands beside its test.",
+    "Limits: heats between standard states, at temperatures inside the ranges of the heat \
+     capacities cited. The pressure has no part in them. Balances of plant and safety figures are \
+     outside this version.",
 ];
 
 /// What it takes to run the record again.
