@@ -91,6 +91,7 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     });
     let mut results = Results::default();
     results.add_reactions(&reactions);
+    results.add_heating_values(&heating_values);
     results.add_cycles(cycles.as_ref());
     let around = Surroundings {
         ids: &ids,
@@ -100,7 +101,6 @@ fn read_root(root: &Table<'_, '_>) -> Option<Case> {
     };
     let read_cycles = read_cycles(cycles.as_ref(), &around);
     report_rings(root.reader(), &read_cycles);
-    results.add_heating_values(&heating_values);
     let units = read_units(root.table("units").as_ref());
     let sources = root.table("sources");
     if sources.is_none() {
