@@ -27,10 +27,13 @@ pub(super) fn references(problem: &Problem) -> Vec<Reference> {
 }
 
 fn reference(head: &SourceHead, number: usize) -> Reference {
+    let silent = match head.id.as_str() {
+        CASE => "as each statement says",
+        _ => "not stated",
+    };
     let stated = |quantity: &Option<Quantity>| {
-        quantity
-            .as_ref()
-            .map_or_else(|| "not stated".to_string(), Quantity::to_string)
+        let text = quantity.as_ref().map(Quantity::to_string);
+        text.unwrap_or_else(|| silent.to_string())
     };
     Reference {
         number,

@@ -329,3 +329,51 @@ fn a_fit_that_contradicts_the_printed_value_is_cautioned() {
     // 3.8 + 8.31451·(2.5·201.85 − 2.5·500 + 845.375)/1000 = 3.8 + 4.19570960875 − 3.36425860875
     assert_eq!(tried.exact("r.heat"), "4.631451");
 }
+
+/// Numbers that pass for chance, the same in every run (a linear congruential generator with the
+/// constants of Knuth, The Art of Computer Programming 2, from memory).
+struct Chance(u64);
+
+impl Chance {
+    fn uniform(&mut self) -> f64 {
+        self.0 = self
+            .0
+            .wrapping_mul(6_364_136_223_846_793_005)
+            .wrapping_add(1_442_695_040_888_963_407);
+        (self.0 >> 11) as f64 / (1_u64 << 53) as f64
+    }
+
+    /// Standard normal, by Box and Muller (Ann. Math. Stat. 29 (1958) 610, from memory).
+    fn normal(&mut self) -> f64 {
+        let radius = libm::sqrt(-2.0 * libm::log(1.0 - self.uniform()));
+        radius * libm::cos(core::f64::consts::TAU * self.uniform())
+    }
+}
+
+#[test]
+fn the_uncertainty_agrees_with_a_monte_carlo_propagation() {
+    // JCGM 101:2008: the model is sampled by hand here, with the temperature uncertain as well.
+    let input = "[inputs]\nplant = { value = \"2000.0 ± 40.0 K\", source = \"log (invented)\", \
+                 confirmed = true }\n\n";
+    let rest = format!("{input}{}", reaction("Ti(cr) + O2(g) -> TiO2(l)", "plant"));
+    let stated = forms(&rest).result("r.heat")["standard-uncertainty"].as_f64();
+    let mut chance = Chance(20_261_201);
+    let mut heat = || {
+        let mut about = |value: f64, u: f64| value + u * chance.normal();
+        let kelvin = about(2000.0, 20.0);
+        let solid = about(-900.0, 0.5) + about(60.0, 1.0) * 0.70185 + about(5.0, 0.1);
+        let liquid =
+            about(70.0, 1.0) * 0.5 + about(40.0, 0.5) + about(100.0, 1.0) * (kelvin - 1500.0) / 1e3;
+        let elements = (about(30.0, 0.5) + about(32.0, 0.5)) * (kelvin - 298.15) / 1e3;
+        solid + liquid - elements
+    };
+    let sample: Vec<f64> = (0..200_000).map(|_| heat()).collect();
+    let mean = sample.iter().sum::<f64>() / sample.len() as f64;
+    let squares = sample.iter().map(|x| (x - mean) * (x - mean)).sum::<f64>();
+    let spread = libm::sqrt(squares / (sample.len() - 1) as f64);
+    // The spread of 200 000 draws is itself uncertain by 1/√(2·200 000), that is 0.16 %.
+    assert!(
+        (stated.unwrap_or_default() / spread - 1.0).abs() < 0.006,
+        "{stated:?} {spread}"
+    );
+}

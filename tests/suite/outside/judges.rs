@@ -242,13 +242,7 @@ fn the_structure_tree_holds_every_value_used() {
                 let said = squeezed(&number);
                 assert!(text.contains(&said), "{said} of {value}");
             }
-            for key in [
-                "substance",
-                "unit",
-                "source",
-                "locator",
-                "standing",
-            ] {
+            for key in ["substance", "unit", "source", "locator", "standing"] {
                 let said = squeezed(value[key].as_str().expect("a text"));
                 assert!(text.contains(&said), "{key} {said} of {value}");
             }
