@@ -1,6 +1,6 @@
 //! Enthalpies at a temperature, and the heat of a reaction there.
 
-use crate::quantity::{Exact, LinearForm, Real, Significance, Unit};
+use crate::quantity::{Exact, LinearForm, Real, Significance, Unit, to_f64};
 use crate::source::{EnthalpyPath, HeatCapacity, Leg, Problem, Start, ValueUsed};
 
 use super::worked::Worked;
@@ -176,18 +176,15 @@ fn worked(value: Option<Real>) -> Real {
 }
 
 /// ΔC_p = Σ ν_i·C_p,i(T), J/(mol K), where every path knows its heat capacity at the end.
-pub(super) fn heat_capacity_change(
-    problem: &Problem,
-    terms: &[(usize, Exact)],
-    kelvin: &Exact,
-) -> Option<f64> {
-    let mut sum = 0.0;
-    for (path, nu) in terms {
-        let end = problem.paths[*path].end?;
-        let (function, r) = function(problem, end);
-        let at = crate::quantity::to_f64(kelvin);
-        let cp = function.at(at, crate::quantity::to_f64(&r))?;
-        sum += crate::quantity::to_f64(nu) * cp;
-    }
-    Some(sum)
+pub(super) fn heat_capacity_change(problem: &Problem, terms: &[(usize, Exact)]) -> Option<f64> {
+    let parts = terms.iter();
+    let parts = parts.map(|(path, nu)| Some(to_f64(nu) * heat_capacity_at(problem, *path)?));
+    parts.sum()
+}
+
+/// C_p of a substance at the end of a path, J/(mol K), where a function is known there.
+pub fn heat_capacity_at(problem: &Problem, path: usize) -> Option<f64> {
+    let path = problem.paths.get(path)?;
+    let (function, r) = function(problem, path.end?);
+    function.at(to_f64(&path.kelvin), to_f64(&r))
 }

@@ -27,7 +27,7 @@ pub use heating_value::{
     VolumeWorking,
 };
 pub use hess::{Hess, HessTerm};
-pub use kirchhoff::{HeatAt, HeatTerm, heat_at, molar_enthalpy};
+pub use kirchhoff::{HeatAt, HeatTerm, heat_at, heat_capacity_at, molar_enthalpy};
 pub use outcome::{COVERAGE, Direction, Outcome, StatedBy};
 pub use per::MolarMass;
 pub use work::{ReactionWorking, WorkOptions, Working, work};

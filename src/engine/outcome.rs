@@ -72,6 +72,8 @@ pub struct Outcome {
     pub given_off_is_positive: bool,
     /// The bounds of heat capacities that it was worked with.
     pub adverse: Vec<AdverseBound>,
+    /// What its uncertainty does not cover although it covers all values used.
+    pub not_covered: Vec<String>,
 }
 
 impl Outcome {
@@ -126,6 +128,7 @@ impl Outcome {
             given_off_is_positive: false,
             value,
             adverse: Vec::new(),
+            not_covered: Vec::new(),
         }
     }
 

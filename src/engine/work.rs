@@ -5,7 +5,7 @@ use std::collections::BTreeMap;
 use crate::case::{ResultUnits, RoundingRule};
 use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::quantity::{Exact, InputUncertainty, LinearForm, Real, Unit, exact_text, to_f64};
-use crate::source::{Problem, ProblemReaction, reference_kelvin};
+use crate::source::{EnthalpyPath, Leg, Problem, ProblemReaction, reference_kelvin};
 
 use super::bounds::{adverse_heat, bounds_finding};
 use super::cycle::{CycleWorking, work_cycle};
@@ -177,6 +177,7 @@ fn work_reaction(
             let mass = work_results(problem, options, reaction, worked, &unit, working);
             for outcome in &mut working.outcomes[first..] {
                 outcome.adverse = adverse.clone();
+                outcome.not_covered = not_covered(problem, reaction);
             }
             mass
         }
@@ -188,6 +189,37 @@ fn work_reaction(
         heat,
         molar_mass,
     });
+}
+
+/// What an assumption of the case lets the heat leave out or go beyond.
+fn not_covered(problem: &Problem, reaction: &ProblemReaction) -> Vec<String> {
+    let paths = reaction.terms.iter().filter_map(|term| term.path);
+    let extended = paths
+        .map(|path| &problem.paths[path])
+        .filter(|path| is_extended(problem, path));
+    let beyond = extended.map(|path| {
+        let label = &problem.substances[path.substance].label;
+        format!("the heat capacity of {label} beyond its range")
+    });
+    reaction.left_out.iter().cloned().chain(beyond).collect()
+}
+
+/// Whether a path follows a function beyond its range, but for the 2 K below which one may begin.
+fn is_extended(problem: &Problem, path: &EnthalpyPath) -> bool {
+    let outside = |value: usize, kelvin: &Exact| {
+        let function = problem.values[value].function.as_ref();
+        function.is_some_and(|f| !f.covers(kelvin) && !f.serves(kelvin))
+    };
+    path.legs.iter().any(|leg| match leg {
+        Leg::Heating { value, from, to } => outside(*value, from) || outside(*value, to),
+        Leg::Scale {
+            from_value,
+            from,
+            to_value,
+            to,
+        } => outside(*from_value, from) || outside(*to_value, to),
+        Leg::Transition { .. } | Leg::Concentration { .. } => false,
+    })
 }
 
 /// Whether the sum of the printed formation enthalpies is the whole heat.
@@ -226,7 +258,7 @@ fn temperature_error(
     if used.uncertainty == InputUncertainty::Exact {
         return None;
     }
-    let Some(change) = heat_capacity_change(problem, terms, &reaction.kelvin) else {
+    let Some(change) = heat_capacity_change(problem, terms) else {
         return Some(format!(
             "the uncertainty of its temperature, `{}`, is not carried: the heat capacities at {} \
              K are not all known",

@@ -40,16 +40,26 @@ pub fn working_text(value: &Real, significance: Significance) -> String {
             return full;
         }
     }
+    let order = value
+        .to_exact()
+        .and_then(|exact| order_of_magnitude(&exact));
+    // Digits before the point are never cut.
+    let place = order.map_or(0, |order| (order + 1 - SHOWN_DIGITS).min(-2));
+    cut_text(value, place)
+}
+
+/// The number cut at a decimal place, with an ellipsis where more digits follow.
+pub fn cut_text(value: &Real, place: i64) -> String {
     let Some(exact) = value.to_exact() else {
         return "not a number".to_string();
     };
-    let Some(order) = order_of_magnitude(&exact) else {
-        return "0".to_string();
-    };
-    let place = order + 1 - SHOWN_DIGITS;
     let cut = (&exact * power_of_ten(-place)).trunc() * power_of_ten(place);
     let more = if cut == exact { "" } else { "…" };
-    format!("{}{more}", round_to_place(&cut, place).text)
+    let text = round_to_place(&cut, place).text;
+    match text.split_once('e') {
+        Some((mantissa, exponent)) => format!("{mantissa}{more}e{exponent}"),
+        None => format!("{text}{more}"),
+    }
 }
 
 /// Zeros up to a decimal place.

@@ -56,7 +56,7 @@ pub use exact::{
     Exact, Rounded, exact_text, order_of_magnitude, power_of_ten, round_to_place,
     terminating_decimal,
 };
-pub use full_text::{full_text, working_text};
+pub use full_text::{cut_text, full_text, working_text};
 pub use linear_form::LinearForm;
 pub use nearest_float::to_f64;
 pub use printed_quantity::Quantity;
@@ -64,6 +64,6 @@ pub use quantity_error::QuantityError;
 pub use real::Real;
 pub use significance::Significance;
 pub use stated_uncertainty::{Coverage, CoverageError, StatedUncertainty};
-pub use stating::{Stated, two_digits};
+pub use stating::{Stated, three_digits, two_digits};
 pub use unit::{FractionBasis, Unit, UnitKind};
 pub use unit_error::UnitError;

@@ -69,14 +69,24 @@ impl Stated {
 
 /// A number to two significant digits, for a size that is told in words: `0.084`, `1.2e3`.
 pub fn two_digits(size: f64) -> String {
+    digits(size, 2)
+}
+
+/// A number to three significant digits, for uncertainties on the way to a result.
+pub fn three_digits(size: f64) -> String {
+    digits(size, 3)
+}
+
+fn digits(size: f64, count: u32) -> String {
     let Some(size) = Exact::from_float(size) else {
         return "an unknown amount".to_owned();
     };
     match order_of_magnitude(&size) {
         Some(order) => {
+            let place = order + 1 - i64::from(count);
             // 9.96 carries to 10, which has two digits one place further up.
-            let carries = units_at(&size, order - 1).magnitude() == &100_u32.into();
-            round_to_place(&size, order - 1 + i64::from(carries)).text
+            let carries = units_at(&size, place).magnitude() == &10_u32.pow(count).into();
+            round_to_place(&size, place + i64::from(carries)).text
         }
         None => "0".to_owned(),
     }

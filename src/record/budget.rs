@@ -2,7 +2,7 @@
 
 use crate::calculation::Calculation;
 use crate::engine::Outcome;
-use crate::quantity::{InputUncertainty, Real, two_digits};
+use crate::quantity::{InputUncertainty, Real, Unit, UnitKind, three_digits};
 use crate::source::Problem;
 
 use super::numerals::{minus, unit};
@@ -29,8 +29,8 @@ fn budget(problem: &Problem, outcome: &Outcome) -> Budget {
         rows: rows
             .map(|(index, s)| budget_row(problem, outcome, index, s))
             .collect(),
-        standard: outcome.combined.standard.map(|u| minus(&two_digits(u))),
-        expanded: outcome.expanded.map(|u| minus(&two_digits(u))),
+        standard: outcome.combined.standard.map(|u| minus(&three_digits(u))),
+        expanded: outcome.expanded.map(|u| minus(&three_digits(u))),
         coverage: coverage(outcome),
         remark: remark(problem, outcome),
     }
@@ -51,17 +51,26 @@ fn budget_row(problem: &Problem, outcome: &Outcome, index: usize, sensitivity: &
         standard: standard.map_or("not stated".into(), |u| {
             let text = format!(
                 "{}\u{a0}{}",
-                minus(&two_digits(u)),
-                unit(&value.printed.unit)
+                minus(&three_digits(u)),
+                difference(&value.printed.unit)
             );
             text.trim_end().to_string()
         }),
         sensitivity: minus(&short(sensitivity)),
-        contribution: standard.map_or("–".into(), |u| minus(&two_digits(f64::abs(size) * u))),
+        contribution: standard.map_or("–".into(), |u| minus(&three_digits(f64::abs(size) * u))),
         share: share.map_or("–".into(), |share| {
             minus(&format!("{:.1} %", share * 100.0))
         }),
         share_permille: share.and_then(permille),
+    }
+}
+
+/// The unit of an uncertainty: that of a temperature read in °C is in K.
+fn difference(of: &Unit) -> String {
+    match (of.kind(), of.symbol()) {
+        (UnitKind::Reading, "°C") => "K".to_string(),
+        (UnitKind::Reading, symbol) => format!("Δ{symbol}"),
+        _ => unit(of),
     }
 }
 
@@ -75,7 +84,7 @@ fn short(sensitivity: &Real) -> String {
         _ => {
             let size = sensitivity.to_f64();
             let sign = if size < 0.0 { "-" } else { "" };
-            format!("{sign}{}", two_digits(f64::abs(size)))
+            format!("{sign}{}", three_digits(f64::abs(size)))
         }
     }
 }
@@ -94,7 +103,8 @@ fn remark(problem: &Problem, outcome: &Outcome) -> Option<String> {
         .pairs()
         .any(|(a, b)| outcome.form.get(a).is_some() && outcome.form.get(b).is_some());
     let mut remarks = vec![format!(
-        "Sensitivity: {0} of the result for each unit of the value as printed; contribution in {0}.",
+        "Sensitivity: {0} of the result for each unit of the value as printed (of a heat-capacity \
+         function for each J/(mol K) added to it over the way); contribution in {0}.",
         unit(&outcome.unit)
     )];
     if !outcome.is_complete() {

@@ -1,11 +1,11 @@
 //! The heat of a reaction at its temperature, participant by participant.
 
 use crate::calculation::Calculation;
-use crate::engine::{HeatAt, HeatTerm, Outcome, Worked};
-use crate::quantity::{Exact, exact_text, working_text};
-use crate::source::{EnthalpyPath, Problem, ProblemReaction, Start, reference_kelvin};
+use crate::engine::{HeatAt, HeatTerm, Outcome, Worked, heat_capacity_at};
+use crate::quantity::{Exact, Real, cut_text, exact_text, to_f64, working_text};
+use crate::source::{EnthalpyPath, Leg, Problem, ProblemReaction, Start, reference_kelvin};
 
-use super::numerals::{minus, signed, unit};
+use super::numerals::{minus, printed, signed, unit};
 use super::pages::{Step, Table};
 use super::path_working::path_steps;
 use super::rich::{Rich, Run};
@@ -27,7 +27,7 @@ pub(super) fn heat_steps(
         true => steps.push(Step::Heading {
             text: "At the stated concentrations".to_string(),
         }),
-        false => steps.extend(temperature_steps(&kelvin)),
+        false => steps.extend(temperature_steps(problem, reaction, heat)),
     }
     for term in &heat.terms {
         steps.extend(path_steps(problem, term));
@@ -37,25 +37,67 @@ pub(super) fn heat_steps(
     steps.push(Step::Text {
         text: substitution(heat, outcome, &kelvin),
     });
+    let error = temperature_error(problem, reaction, heat);
+    steps.extend(error.map(|text| Step::Text { text }));
 }
 
 /// What is done to come from 298.15 K to another temperature.
-fn temperature_steps(kelvin: &str) -> Vec<Step> {
-    let mut steps = vec![Step::Heading {
-        text: format!("At {kelvin} K"),
-    }];
-    steps.push(displayed(enthalpy_at_temperature()));
-    steps.push(Step::Text {
-        text: Rich::run(Rich::plain(""), Run::Italic("T".into()))
-            .run(Run::Sub("0".into()))
-            .and(" = 298.15 K, ")
-            .run(Run::Italic("T".into()))
-            .and(format!(
-                " = {kelvin} K. The formation enthalpies are those of 298.15 K; the elements are \
-                 not taken along."
+fn temperature_steps(problem: &Problem, reaction: &ProblemReaction, heat: &HeatAt) -> Vec<Step> {
+    let kelvin = minus(&exact_text(&reaction.kelvin));
+    let crossed = heat.terms.iter().any(|term| crosses(problem, term));
+    let mut said = Rich::default()
+        .run(Run::Italic("T".into()))
+        .run(Run::Sub("0".into()))
+        .and(" = 298.15 K, ")
+        .run(Run::Italic("T".into()))
+        .and(" = ");
+    if let Some(value) = reaction.temperature_value {
+        let given = printed(&problem.values[value].printed);
+        said = said.and(given).run(Run::ValueUsed(value + 1)).and(" = ");
+    }
+    vec![
+        Step::Heading {
+            text: format!("At {kelvin} K"),
+        },
+        displayed(enthalpy_at_temperature(crossed)),
+        Step::Text {
+            text: said.and(format!(
+                "{kelvin} K. The reference states of the elements stay at 298.15 K, so the sum of \
+                 these enthalpies is the heat of reaction at the temperature."
             )),
-    });
-    steps
+        },
+    ]
+}
+
+fn crosses(problem: &Problem, term: &HeatTerm) -> bool {
+    let legs = &problem.paths[term.path].legs;
+    legs.iter().any(|leg| matches!(leg, Leg::Transition { .. }))
+}
+
+/// How an error of the temperature counts: with the change of heat capacity, term by term.
+fn temperature_error(problem: &Problem, reaction: &ProblemReaction, heat: &HeatAt) -> Option<Rich> {
+    let value = reaction.temperature_value?;
+    let mut sum = 0.0;
+    let mut parts = Vec::new();
+    for term in &heat.terms {
+        let cp = heat_capacity_at(problem, term.path)?;
+        sum += to_f64(&term.nu) * cp;
+        parts.push(format!("({})·{}", signed(&term.nu), decimals(cp)));
+    }
+    let text = Rich::plain("An error of the temperature ")
+        .run(Run::ValueUsed(value + 1))
+        .and(" counts with Δ")
+        .run(Run::Italic("C".into()))
+        .run(Run::Sub("p".into()));
+    Some(text.and(format!(
+        " at this temperature: {} = {} J/(mol K).",
+        parts.join(" + "),
+        decimals(sum)
+    )))
+}
+
+fn decimals(value: f64) -> String {
+    minus(&cut_text(&Real::Float(value), -3))
 }
 
 /// ν, substance, rows, H(298.15 K), increment, H(T), ν·H(T).

@@ -9,7 +9,7 @@ use crate::quantity::{Exact, Quantity, Significance, Unit, exact_text, full_text
 pub fn minus(text: &str) -> String {
     let text = text.replace('-', "\u{2212}");
     match text.split_once(['e', 'E']) {
-        Some((mantissa, rest)) if mantissa.ends_with(|c: char| c.is_ascii_digit()) => {
+        Some((mantissa, rest)) if mantissa.ends_with(|c: char| c.is_ascii_digit() || c == '…') => {
             power_of_ten(mantissa, rest)
         }
         _ => text,

@@ -1,7 +1,7 @@
 //! The molar enthalpy of one participant, from 298.15 K to the temperature, leg by leg.
 
 use crate::engine::{HeatTerm, Worked};
-use crate::quantity::{Exact, Real, Significance, exact_text, working_text};
+use crate::quantity::{Exact, Real, Significance, cut_text, exact_text, order_of_magnitude};
 use crate::source::{Form, FunctionTerm, HeatCapacity, Leg, Problem, Start};
 
 use super::given_working::{concentration_step, made_of_steps};
@@ -27,8 +27,8 @@ pub(super) fn path_steps(problem: &Problem, term: &HeatTerm) -> Vec<Step> {
             .and(": the function ")
             .run(Run::ValueUsed(value + 1))
             .and(
-                " carries its integration constant, so it gives the enthalpy on the scale of its \
-             source itself.",
+                " carries its integration constant, so it gives the enthalpy on the scale of formation \
+             enthalpies itself.",
             );
         steps.extend(function_steps(problem, value, at, said, &term.start));
     }
@@ -175,8 +175,8 @@ fn explained(function: &HeatCapacity, r: &Exact) -> String {
     let form = function.form.word();
     match function.form {
         Form::Nasa7 | Form::Nasa9 => format!(
-            " ({form}): each coefficient times its factor and R = {} J/(mol K), the constant of the \
-             fit.",
+            " ({form}): each coefficient times its factor and R = {} J/(mol K), which the source \
+             states for its functions; b2 or a7 belongs to the entropy.",
             exact_text(r)
         ),
         Form::Shomate => format!(
@@ -187,14 +187,28 @@ fn explained(function: &HeatCapacity, r: &Exact) -> String {
     }
 }
 
+/// Products are shown to this place, so that large ones that cancel still give the sum.
+const PRODUCT_PLACE: i64 = -4;
+
+/// Digits of a factor.
+const FACTOR_DIGITS: i64 = 14;
+
+fn factor(value: &Real) -> String {
+    let order = value
+        .to_exact()
+        .and_then(|exact| order_of_magnitude(&exact));
+    let place = order.map_or(0, |order| order + 1 - FACTOR_DIGITS);
+    cut_text(value, place.min(PRODUCT_PLACE))
+}
+
 fn terms_table(terms: &[FunctionTerm], total: &Worked) -> Table {
-    let cell = |value: &Real| Rich::plain(minus(&working_text(value, Significance::Exact)));
+    let cell = |text: String| Rich::plain(minus(&text));
     let rows = terms.iter().map(|term| {
         vec![
             Rich::plain(term.name.clone()),
             Rich::plain(minus(&term.coefficient)),
-            cell(&term.factor),
-            cell(&term.product),
+            cell(factor(&term.factor)),
+            cell(cut_text(&term.product, PRODUCT_PLACE)),
         ]
     });
     Table {

@@ -128,9 +128,23 @@ pub(super) fn stated_uncertainty(outcome: &Outcome) -> Option<String> {
 
 /// What the uncertainty covers, in words.
 pub fn coverage(outcome: &Outcome) -> String {
+    let covered = values_covered(outcome);
+    match outcome.not_covered.is_empty() {
+        true => covered,
+        false => format!(
+            "{covered}; does not cover {}",
+            outcome.not_covered.join(", ")
+        ),
+    }
+}
+
+fn values_covered(outcome: &Outcome) -> String {
     let (stated, of) = (outcome.combined.stated, outcome.combined.of);
     match (outcome.expanded, of) {
         (_, 0) => "exact".to_string(),
+        (Some(_), 1) if outcome.is_complete() => {
+            format!("k = {COVERAGE}, about 95 %; covers the one value used")
+        }
         (Some(_), _) if outcome.is_complete() => {
             format!("k = {COVERAGE}, about 95 %; covers all {of} values used")
         }

@@ -83,6 +83,9 @@ fn result(problem: &Problem, outcome: &Outcome) -> Value {
         json!({ "stated": outcome.combined.stated, "of": outcome.combined.of }),
     );
     map.insert("budget".into(), json!(budget(outcome)));
+    if !outcome.not_covered.is_empty() {
+        map.insert("not-covered".into(), json!(outcome.not_covered));
+    }
     if !outcome.adverse.is_empty() {
         map.insert("adverse".into(), json!(adverse(problem, outcome)));
     }

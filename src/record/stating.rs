@@ -1,7 +1,7 @@
 //! How a result comes to its stated digits, in words.
 
 use crate::engine::{COVERAGE, Outcome, StatedBy};
-use crate::quantity::{Significance, Stated, two_digits};
+use crate::quantity::{Significance, Stated, three_digits};
 
 use super::numerals::{minus, superscript, unit};
 use super::rich::{Rich, Run};
@@ -22,12 +22,12 @@ fn uncertainty(outcome: &Outcome) -> Rich {
     match (outcome.combined.standard, outcome.expanded) {
         (Some(standard), Some(expanded)) => Rich::default()
             .run(Run::Italic("u".to_string()))
-            .and(format!(" = {} {unit}, ", two_digits(standard)))
+            .and(format!(" = {} {unit}, ", three_digits(standard)))
             .run(Run::Italic("U".to_string()))
             .and(format!(
                 " = {COVERAGE}·u = {} {unit} (k = {COVERAGE}), covering {stated} of {of} values \
                  used that are not exact. ",
-                two_digits(expanded)
+                three_digits(expanded)
             )),
         _ if of == 0 => Rich::plain("All values used are exact. "),
         _ => Rich::plain(format!(

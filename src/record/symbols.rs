@@ -60,13 +60,9 @@ pub(super) fn hess_law() -> Math {
     ])
 }
 
-/// H_i(T) = Δ_fH°_i + ∫ C_p,i dT + Σ Δ_trsH_i
-pub(super) fn enthalpy_at_temperature() -> Math {
-    let transition = row(vec![
-        with_sub(upright("Δ"), upright("trs")),
-        with_sub(symbol("H"), symbol("i")),
-    ]);
-    row(vec![
+/// H_i(T) = Δ_fH°_i + ∫ C_p,i dT, and + Σ Δ_trsH_i where a change of phase is crossed.
+pub(super) fn enthalpy_at_temperature(crossed: bool) -> Math {
+    let mut of = vec![
         with_sub(symbol("H"), symbol("i")),
         upright("("),
         symbol("T"),
@@ -84,10 +80,16 @@ pub(super) fn enthalpy_at_temperature() -> Math {
         ),
         upright("d"),
         symbol("T"),
-        upright("+"),
-        upright("Σ"),
-        transition,
-    ])
+    ];
+    if crossed {
+        of.extend([
+            upright("+"),
+            upright("Σ"),
+            with_sub(upright("Δ"), upright("trs")),
+            with_sub(symbol("H"), symbol("i")),
+        ]);
+    }
+    row(of)
 }
 
 /// Δ_rH°(T) = Σ_i ν_i H_i(T)

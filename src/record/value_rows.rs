@@ -1,6 +1,8 @@
 //! The table of values used, and what other sources say of the same values.
 
-use crate::quantity::{terminating_decimal, to_f64, two_digits};
+use crate::quantity::{
+    Quantity, StatedUncertainty, exact_text, terminating_decimal, to_f64, two_digits,
+};
 use crate::source::{Comparison, Form, Judgement, Problem, Substance, ValueUsed};
 
 use super::function_rows::range;
@@ -52,10 +54,21 @@ fn quantity(value: &ValueUsed) -> String {
     }
 }
 
+/// A number as printed, with the tolerance that stands beside it in the case.
+fn with_tolerance(quantity: &Quantity) -> String {
+    let number = printed_number(quantity);
+    match &quantity.uncertainty {
+        Some(StatedUncertainty::Tolerance { half_width }) => {
+            format!("{number} (tolerance ±{})", exact_text(half_width))
+        }
+        _ => number,
+    }
+}
+
 /// As the source prints it; of a function the constant, or where its coefficients stand.
 fn printed_value(value: &ValueUsed) -> String {
     let Some(function) = &value.function else {
-        return printed_number(&value.printed);
+        return with_tolerance(&value.printed);
     };
     match (function.form, function.coefficients.first()) {
         (Form::Constant, Some(constant)) => {

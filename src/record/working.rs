@@ -116,7 +116,7 @@ fn hess_steps(
     steps.push(Step::Text {
         text: Rich::plain(
             "Standard enthalpies of formation at 298.15 K; the number in brackets is the row of \
-             the table of values used. ν is negative for what is consumed.",
+             the table of values used. ν is negative for what is consumed; a negative heat is released.",
         ),
     });
     steps.push(Step::Table(participants(problem, hess, &unit)));

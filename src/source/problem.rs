@@ -267,6 +267,8 @@ pub struct ProblemReaction {
     /// The input that states the temperature, where its uncertainty counts: index among the
     /// values used.
     pub temperature_value: Option<usize>,
+    /// What the heat leaves out because the case allows it; its uncertainty does not cover that.
+    pub left_out: Vec<String>,
     pub span: Span,
 }
 

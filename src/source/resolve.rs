@@ -230,7 +230,7 @@ impl<'a> Resolver<'a> {
             terms.clear();
         }
         self.check_vapours(reaction, &terms, &kelvin);
-        self.dissolve(reaction, &mut terms);
+        let left_out = self.dissolve(reaction, &mut terms);
         let all = equation.value.left.iter().chain(&equation.value.right);
         let names: Vec<String> = all.map(|term| term.participant.to_string()).collect();
         let per = reaction.per.as_ref();
@@ -248,6 +248,7 @@ impl<'a> Resolver<'a> {
             molar_mass,
             kelvin,
             temperature_value,
+            left_out,
             span: equation.span.clone(),
         })
     }

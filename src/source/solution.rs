@@ -31,7 +31,12 @@ pub(super) fn is_infinitely_dilute(species: &Species) -> bool {
 impl Resolver<'_> {
     /// Takes the molalities of a reaction into account: the paths of solutes whose relative
     /// enthalpy is stated gain a leg, and the others are judged.
-    pub(super) fn dissolve(&mut self, reaction: &Reaction, terms: &mut [ProblemTerm]) {
+    /// Returns what is left out because the case allows it.
+    pub(super) fn dissolve(
+        &mut self,
+        reaction: &Reaction,
+        terms: &mut [ProblemTerm],
+    ) -> Vec<String> {
         let mut unknown = Vec::new();
         let mut dilute = Vec::new();
         let mut concentrated = Vec::new();
@@ -57,6 +62,10 @@ impl Resolver<'_> {
             }
         }
         self.say_concentrations(reaction, &unknown, &dilute, &concentrated);
+        let solutes = concentrated.iter();
+        solutes
+            .map(|solute| format!("the heat of dilution of {solute}"))
+            .collect()
     }
 
     /// h = h∞ + L_φ for one participant of one reaction.

@@ -71,6 +71,11 @@ impl Source {
             id: CASE.to_string(),
             title: "Stated in this case".to_string(),
             authors: Some(preparer.to_string()),
+            coverage_text: Some("2".to_string()),
+            note: Some(
+                "Its tolerances are bounds of a rectangular distribution, read as u = a/√3."
+                    .to_string(),
+            ),
             sha256: sha256_hex(text.as_str().as_bytes()),
             ..SourceHead::default()
         };
