@@ -104,7 +104,8 @@ pub(super) fn read_composition(
         span: table.span.clone(),
     };
     let single = refuse_repeated(table.reader(), &composition);
-    (complete && single && check_sum(table, &composition, context)).then_some(composition)
+    let holds = complete && single && check_sum(table, &composition, context);
+    holds.then(|| composition.alone_is_whole())
 }
 
 fn refuse_number(table: &Table<'_, '_>, found: usize) {
@@ -346,6 +347,14 @@ fn check_sum(table: &Table<'_, '_>, composition: &Composition, context: &Context
 }
 
 impl Composition {
+    /// A substance that is alone is the whole, exactly, whatever digits its fraction has.
+    fn alone_is_whole(mut self) -> Composition {
+        if let [part] = &mut self.parts[..] {
+            part.share = Share::Balance;
+        }
+        self
+    }
+
     /// The substance that is what the others leave.
     pub fn balance(&self) -> Option<&Part> {
         let mut parts = self.parts.iter();

@@ -2,7 +2,7 @@
 
 use crate::calculation::Calculation;
 use crate::engine::{HeatAt, HeatTerm, Outcome, Worked, heat_capacity_at};
-use crate::quantity::{Exact, Real, cut_text, exact_text, to_f64, working_text};
+use crate::quantity::{Exact, exact_text, round_to_place, to_f64, working_text};
 use crate::source::{EnthalpyPath, Leg, Problem, ProblemReaction, Start, reference_kelvin};
 
 use super::numerals::{minus, printed, signed, unit};
@@ -97,7 +97,8 @@ fn temperature_error(problem: &Problem, reaction: &ProblemReaction, heat: &HeatA
 }
 
 fn decimals(value: f64) -> String {
-    minus(&cut_text(&Real::Float(value), -3))
+    let exact = Exact::from_float(value).unwrap_or_default();
+    minus(&round_to_place(&exact, -3).text)
 }
 
 /// ν, substance, rows, H(298.15 K), increment, H(T), ν·H(T).

@@ -25,6 +25,9 @@ pub struct Typesetting {
 pub struct Manifest {
     pub record: Identity,
     pub engine: String,
+    /// SHA-256 of the source that the engine was built from.
+    #[serde(default)]
+    pub engine_source: String,
     pub typesetter: String,
     pub template: String,
     pub fonts: Map<String, Value>,
@@ -59,6 +62,7 @@ impl Manifest {
         Manifest {
             record: input.identity.clone(),
             engine: input.engine.clone(),
+            engine_source: env!("HESSWRIGHT_SOURCE").to_string(),
             typesetter: input.typesetting.version.clone(),
             template: input.typesetting.template_sha256.clone(),
             fonts: input.typesetting.fonts.iter().map(text).collect(),

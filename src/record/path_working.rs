@@ -22,14 +22,22 @@ pub(super) fn path_steps(problem: &Problem, term: &HeatTerm) -> Vec<Step> {
     let name = Rich::from(substance.species.pieces());
     if let Start::Function { value } = path.start {
         let at = [None, Some(&path.kelvin)];
+        steps.push(Step::Text {
+            text: name
+                .clone()
+                .and(": the function ")
+                .run(Run::ValueUsed(value + 1))
+                .and(format!(
+                    " carries its integration constant, so it gives the enthalpy at {} K on the \
+                     scale of formation enthalpies itself; changes of phase at lower temperatures \
+                     are contained in that constant.",
+                    kelvin(&path.kelvin)
+                )),
+        });
         let said = name
             .clone()
-            .and(": the function ")
-            .run(Run::ValueUsed(value + 1))
-            .and(
-                " carries its integration constant, so it gives the enthalpy on the scale of formation \
-             enthalpies itself.",
-            );
+            .and(", function ")
+            .run(Run::ValueUsed(value + 1));
         steps.extend(function_steps(problem, value, at, said, &term.start));
     }
     for (leg, worked) in path.legs.iter().zip(&term.legs) {

@@ -7,8 +7,8 @@
 use crate::case::{CaseHeatCapacity, Given, HeatCapacityStatement};
 use crate::finding::Span;
 use crate::quantity::{
-    Decimal, Dimension, Exact, InputUncertainty, Quantity, StatedUncertainty, order_of_magnitude,
-    round_to_place, terminating_decimal,
+    Decimal, Dimension, Exact, InputUncertainty, Quantity, Significance, StatedUncertainty,
+    order_of_magnitude, round_to_place, terminating_decimal,
 };
 
 use super::case_values::CaseValue;
@@ -210,9 +210,13 @@ impl Resolver<'_> {
             let parts = weights.into_iter().map(|(w, n)| (w, &si * n / &thousand));
             made_of.extend(parts);
         }
-        let significance = quantity
-            .significance_in_si()
-            .times_exact(&si, &(&sum / &si));
+        // A bound is where the working is put on purpose: it limits no digits.
+        let significance = match stated.which {
+            "" => quantity
+                .significance_in_si()
+                .times_exact(&si, &(&sum / &si)),
+            _ => Significance::Unlimited,
+        };
         let function = constant(decimal(&sum)?, Some(stated.range.clone()));
         let row = &self.values[printed];
         let value = ValueUsed {

@@ -132,8 +132,9 @@ impl Resolver<'_> {
     ) {
         let message = format!(
             "{}: its heat capacity is estimated by Kopp's rule from the formula, {} J/(mol K) at \
-             298 K. The published average absolute error of the rule is 9 %, taken as a standard \
-             uncertainty of {} J/(mol K); a single compound can be farther off.",
+             298 K. The published average absolute error of the rule is 9 %, that is a standard \
+             uncertainty of 11.3 % or {} J/(mol K) where errors are normal; a single compound can \
+             be farther off, and a heat capacity rises with the temperature.",
             self.substances[substance].label,
             exact_text(&estimate.sum),
             two_digits(estimate.standard),

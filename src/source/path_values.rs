@@ -3,8 +3,10 @@
 use crate::finding::Span;
 use crate::quantity::{InputUncertainty, Quantity, Significance};
 
+use num_traits::Zero;
+
 use super::heat_capacity::{Form, HeatCapacity};
-use super::model::{Digits, SourceHead};
+use super::model::{Digits, Entry, SourceHead};
 use super::path::Candidate;
 use super::problem::{ValueKind, ValueUsed};
 use super::resolve::{Resolver, value_of};
@@ -69,9 +71,9 @@ impl Resolver<'_> {
         let Candidate { source, entry } = candidate;
         let printed = entry.formation_enthalpy.clone()?;
         let head = &self.sources[*source].head;
-        let significance = formation_significance(&printed, head);
-        let value = ValueUsed {
-            significance,
+        let by_convention = self.is_conventional_zero(entry, &printed);
+        let mut value = ValueUsed {
+            significance: formation_significance(&printed, head),
             ..value_of(
                 *source,
                 head,
@@ -81,7 +83,26 @@ impl Resolver<'_> {
                 span,
             )
         };
+        if by_convention {
+            value.significance = Significance::Exact;
+            value.uncertainty = InputUncertainty::Exact;
+        }
         Some(self.enter_value(value, ""))
+    }
+
+    /// Whether a printed zero is that of an element in its reference state, which is zero by
+    /// convention and limits no digits however it is printed.
+    fn is_conventional_zero(&self, entry: &Entry, printed: &Quantity) -> bool {
+        let Some(species) = entry.species() else {
+            return false;
+        };
+        let mut elements = species.formula.counts().keys();
+        let (Some(element), None) = (elements.next(), elements.next()) else {
+            return false;
+        };
+        // The conventions are always the first source.
+        let state = self.sources[0].reference_state(*element);
+        printed.decimal.value().is_zero() && state.as_ref() == Some(species)
     }
 
     /// The index of a value, which is entered once. `key` tells values of one entry apart.

@@ -62,6 +62,7 @@ impl Resolver<'_> {
             }
         }
         self.say_concentrations(reaction, &unknown, &dilute, &concentrated);
+        self.say_formed(reaction);
         let solutes = concentrated.iter();
         solutes
             .map(|solute| format!("the heat of dilution of {solute}"))
@@ -120,6 +121,22 @@ impl Resolver<'_> {
             note: None,
             span: given.span(),
         }))
+    }
+
+    /// Ions that stand unchanged on both sides are not in the equation, and with them the solution
+    /// that forms.
+    fn say_formed(&mut self, reaction: &Reaction) {
+        let mut molalities = reaction.molalities.iter();
+        if !molalities.any(|molality| molality.relative_enthalpy.is_some()) {
+            return;
+        }
+        let id = &reaction.id.value;
+        let message = format!(
+            "{id}: the solution that forms counts as infinitely dilute. Where its heat of dilution \
+             matters, state the relative enthalpy of what is consumed less that of what forms."
+        );
+        let span = &reaction.equation.span;
+        self.say_of(Severity::Note, FindingCode::InfiniteDilution, message, span);
     }
 
     fn say_concentrations(
