@@ -10,12 +10,13 @@ use crate::quantity::{Exact, Quantity};
 
 use super::choose::{choice_for, note_identity};
 use super::cycle::CycleSpecies;
+use super::entry_value::value_of;
 use super::matching::{Match, pick};
 use super::model::Entry;
 use super::path::reference_kelvin;
 use super::path_values::formation_significance;
 use super::problem::{ValueKind, ValueUsed};
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 use super::suggest::ambiguous;
 
 impl Resolver<'_> {

@@ -6,9 +6,9 @@ use crate::case::{CaseHeatCapacity, HeatCapacityStatement};
 use crate::finding::{FindingCode, Severity, Span};
 use crate::quantity::{Exact, exact_text, two_digits};
 
+use super::constant_findings::LONG;
 use super::kopp::KoppEstimate;
 use super::path::reference_kelvin;
-use super::path_findings::LONG;
 use super::resolve::Resolver;
 
 impl Resolver<'_> {

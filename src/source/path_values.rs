@@ -3,11 +3,12 @@
 use crate::finding::Span;
 use crate::quantity::{InputUncertainty, Quantity, Significance};
 
+use super::entry_value::value_of;
 use super::heat_capacity::{Form, HeatCapacity};
 use super::model::{Digits, SourceHead};
 use super::path::Candidate;
 use super::problem::{ValueKind, ValueUsed};
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 use super::standing::Standing;
 
 impl Resolver<'_> {

@@ -5,8 +5,9 @@ use crate::notation::{Element, PhaseLabel};
 use crate::quantity::{Dimension, Quantity, Unit};
 
 use super::model::{Entry, SourceHead, Subject, Transition};
-use super::read::{measured, read_standing, read_temperature};
+use super::read_head::read_standing;
 use super::read_heat_capacity::read_heat_capacities;
+use super::read_quantity::{measured, read_temperature};
 use super::standing::Standing;
 
 const ENTRY_KEYS: [&str; 14] = [
