@@ -118,17 +118,7 @@ impl Resolver<'_> {
         route: Route,
         span: &Span,
     ) -> Option<EnthalpyPath> {
-        let start = match route.start {
-            RouteStart::Printed => Start::Printed {
-                value: self.substances[substance].value?,
-            },
-            RouteStart::OtherForm(candidate) => Start::Printed {
-                value: self.formation_value(&candidate, span)?,
-            },
-            RouteStart::Function(candidate, index) => Start::Function {
-                value: self.function_value(&candidate, index, span),
-            },
-        };
+        let start = self.start(substance, &route.start, span)?;
         let legs = route.steps.iter().map(|step| self.leg(step, span));
         let legs: Vec<Leg> = legs.collect();
         let end = route
@@ -140,6 +130,20 @@ impl Resolver<'_> {
             start,
             legs,
             end,
+        })
+    }
+
+    fn start(&mut self, substance: usize, start: &RouteStart, span: &Span) -> Option<Start> {
+        Some(match start {
+            RouteStart::Printed => Start::Printed {
+                value: self.substances[substance].value?,
+            },
+            RouteStart::OtherForm(candidate) => Start::Printed {
+                value: self.formation_value(candidate, span)?,
+            },
+            RouteStart::Function(candidate, index) => Start::Function {
+                value: self.function_value(candidate, *index, span),
+            },
         })
     }
 

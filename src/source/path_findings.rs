@@ -1,33 +1,21 @@
-//! What has to be said of a path: ranges, heat capacities that are missing, values that disagree.
+//! What has to be said of a path: heat capacities that are missing, forms that are not stable, values
+//! that disagree.
 
-use num_traits::Signed;
-
-use crate::case::AllowedKind;
 use crate::finding::{FindingCode, Severity, Span};
 use crate::quantity::{Exact, exact_text, to_f64, two_digits};
 
 use super::gas_constant::gas_constant;
-use super::heat_capacity::HeatCapacity;
+use super::instability::stable_instead;
 use super::path::{Candidate, Material, on_formation_scale, reference_kelvin};
 use super::resolve::Resolver;
 use super::route::{Route, RouteStep};
 use super::solution::is_infinitely_dilute;
-use super::walk::{Reach, Stretch, covering, distance};
+use super::walk::{Reach, Stretch, covering};
 
 /// Printed value and function further apart than this, in J/mol, carry a caution.
 const APART: f64 = 10.0;
 
-/// Why a case says that a path may leave its ranges: the text of the assumption.
-pub(super) type Allowance = String;
-
 impl Resolver<'_> {
-    /// The assumption that allows a substance to be worked beyond the ranges of its functions.
-    pub(super) fn extrapolation_allowed(&self, substance: usize) -> Option<Allowance> {
-        let label = &self.substances[substance].label;
-        let assumption = self.case.allowed(AllowedKind::Extrapolation, label)?;
-        Some(assumption.text.value.clone())
-    }
-
     pub(super) fn say_missing(&mut self, substance: usize, kelvin: &Exact, span: &Span) {
         if is_infinitely_dilute(&self.substances[substance].species) {
             return self.say_no_partial(substance, kelvin, span);
@@ -45,57 +33,6 @@ impl Resolver<'_> {
             message,
             span,
         );
-    }
-
-    /// Outside the ranges: a stop, or a caution where the case allows it.
-    pub(super) fn say_outside(
-        &mut self,
-        substance: usize,
-        candidate: &Candidate,
-        kelvin: &Exact,
-        reached: Option<Exact>,
-        allowed: Option<Allowance>,
-        worked: bool,
-        span: &Span,
-    ) {
-        let label = self.substances[substance].label.clone();
-        let functions = &candidate.entry.heat_capacity;
-        let beyond = distance(functions, kelvin);
-        let where_to = match (beyond.is_positive(), reached) {
-            (true, _) => format!(
-                "{} K is {} K outside them",
-                exact_text(kelvin),
-                exact_text(&beyond)
-            ),
-            (false, Some(reached)) => format!(
-                "on the way from 298.15 K to {} K they end at {} K",
-                exact_text(kelvin),
-                exact_text(&reached)
-            ),
-            (false, None) => format!("they do not lead to {} K", exact_text(kelvin)),
-        };
-        let source = self.sources[candidate.source].id().to_string();
-        let ranges = ranges(functions);
-        let (severity, what) = match (allowed, worked) {
-            (Some(assumption), true) => (
-                Severity::Caution,
-                format!("Followed beyond them, as the case allows: {assumption}"),
-            ),
-            (Some(_), false) => (
-                Severity::Stop,
-                "A table cannot be followed beyond its points, nor a gap be crossed.".to_string(),
-            ),
-            (None, _) => (
-                Severity::Stop,
-                format!(
-                    "Consult a source that reaches further, or allow it by name in an assumption: \
-                     allows = {{ extrapolation = [\"{label}\"] }}."
-                ),
-            ),
-        };
-        let message =
-            format!("{label}: {source} gives its heat capacity for {ranges}; {where_to}. {what}");
-        self.say_of(severity, FindingCode::OutsideRange, message, span);
     }
 
     /// The checks on a route that was found.
@@ -138,6 +75,27 @@ impl Resolver<'_> {
         self.say_of(Severity::Note, FindingCode::RangeStart, message, span);
     }
 
+    /// A form that its source calls unstable at the temperature is worked as stated.
+    pub(super) fn check_stability(
+        &mut self,
+        substance: usize,
+        material: &Material,
+        kelvin: &Exact,
+        span: &Span,
+    ) {
+        let own = &material.candidates[0];
+        let Some(instead) = stable_instead(&material.forms, &own.entry, kelvin) else {
+            return;
+        };
+        let message = format!(
+            "{}: by {} {instead}. It is worked as stated; `(stable)` in place of the phase would \
+             take the form that the source gives there.",
+            self.substances[substance].label,
+            self.sources[own.source].id(),
+        );
+        self.say_of(Severity::Caution, FindingCode::UnstableForm, message, span);
+    }
+
     /// The printed formation enthalpy and the integration constant should say the same.
     pub(super) fn check_scale(&mut self, substance: usize, own: &Candidate, span: &Span) {
         let reference = reference_kelvin();
@@ -175,12 +133,4 @@ impl Resolver<'_> {
             span,
         );
     }
-}
-
-fn ranges(functions: &[HeatCapacity]) -> String {
-    let ranges = functions.iter().filter_map(HeatCapacity::range_kelvin);
-    let lines: Vec<String> = ranges
-        .map(|[low, high]| format!("{} to {} K", exact_text(&low), exact_text(&high)))
-        .collect();
-    lines.join(", ")
 }

@@ -170,7 +170,7 @@ impl<'a> Resolver<'a> {
 
     pub(super) fn problem(
         self,
-        reactions: Vec<Option<ProblemReaction>>,
+        reactions: Vec<ProblemReaction>,
         cycles: Vec<ProblemCycle>,
         heating_values: Vec<ProblemHeatingValue>,
     ) -> Problem {
@@ -187,7 +187,7 @@ impl<'a> Resolver<'a> {
             became: self.became,
             substances: self.substances,
             values: self.values,
-            reactions: reactions.into_iter().flatten().collect(),
+            reactions,
             cycles,
             heating_values,
             correlations,

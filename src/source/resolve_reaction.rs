@@ -1,6 +1,7 @@
 //! Resolving a reaction: its participants with their stoichiometric numbers, at its temperature.
 
 use crate::case::{Given, Reaction};
+use crate::notation::Equation;
 use crate::quantity::{Exact, Quantity};
 
 use super::path::reference_kelvin;
@@ -8,46 +9,19 @@ use super::problem::{ProblemReaction, ProblemTerm};
 use super::resolve::Resolver;
 
 impl Resolver<'_> {
-    pub(super) fn reaction(&mut self, reaction: &Reaction) -> Option<ProblemReaction> {
+    pub(super) fn reaction(&mut self, reaction: &Reaction) -> ProblemReaction {
         let equation = &reaction.equation;
         self.check_balance(equation);
         let (kelvin, temperature_value) = self.temperature(reaction.temperature.as_ref());
-        let sides = [(&equation.value.left, -1), (&equation.value.right, 1)];
-        let mut terms = Vec::new();
-        let mut complete = true;
-        for (term, sign) in sides
-            .iter()
-            .flat_map(|(side, sign)| side.iter().map(move |t| (t, sign)))
-        {
-            let place = self.text.inside(&equation.span, &term.span);
-            let Some(substance) = self.participant(&term.participant, &kelvin, &place) else {
-                complete = false;
-                continue;
-            };
-            let nu = &term.coefficient * Exact::from_integer((*sign).into());
-            let path = self.path(substance, &kelvin, &place);
-            terms.push(ProblemTerm {
-                substance,
-                nu,
-                path,
-            });
-        }
-        if !complete {
-            // A fault says why, and then there is no problem; or a `stop`.
-            terms.clear();
-        }
+        let (mut terms, complete) = self.terms(reaction, &kelvin);
         self.check_vapours(reaction, &terms, &kelvin);
         let left_out = self.dissolve(reaction, &mut terms);
-        let all = equation.value.left.iter().chain(&equation.value.right);
-        let names: Vec<String> = all.map(|term| term.participant.to_string()).collect();
-        let per = reaction.per.as_ref();
-        let per = per.and_then(|per| names.iter().position(|name| *name == per.value));
-        let per = per.filter(|_| complete);
+        let per = per_index(reaction).filter(|_| complete);
         let molar_mass = per.map_or_else(Vec::new, |index| {
             let species = self.substances[terms[index].substance].species.clone();
             self.molar_mass(reaction, &species)
         });
-        Some(ProblemReaction {
+        ProblemReaction {
             id: reaction.id.value.clone(),
             equation: equation.value.clone(),
             terms,
@@ -57,7 +31,33 @@ impl Resolver<'_> {
             temperature_value,
             left_out,
             span: equation.span.clone(),
-        })
+        }
+    }
+
+    /// The participants, reactants first, and whether all have been found; without one of them
+    /// there are none. A fault then says why, and there is no problem; or a `stop` does.
+    fn terms(&mut self, reaction: &Reaction, kelvin: &Exact) -> (Vec<ProblemTerm>, bool) {
+        let equation = &reaction.equation;
+        let mut terms = Vec::new();
+        let mut complete = true;
+        let left = equation.value.left.iter().map(|term| (term, -1));
+        let right = equation.value.right.iter().map(|term| (term, 1));
+        for (term, sign) in left.chain(right) {
+            let place = self.text.inside(&equation.span, &term.span);
+            let Some(substance) = self.participant(&term.participant, kelvin, &place) else {
+                complete = false;
+                continue;
+            };
+            terms.push(ProblemTerm {
+                substance,
+                nu: &term.coefficient * Exact::from_integer(sign.into()),
+                path: self.path(substance, kelvin, &place),
+            });
+        }
+        if !complete {
+            terms.clear();
+        }
+        (terms, complete)
     }
 
     /// The temperature of a heat in K, and the input that states it where there is one.
@@ -73,4 +73,12 @@ impl Resolver<'_> {
         };
         (kelvin, value)
     }
+}
+
+/// Which participant `per` names.
+fn per_index(reaction: &Reaction) -> Option<usize> {
+    let per = reaction.per.as_ref()?;
+    let Equation { left, right, .. } = &reaction.equation.value;
+    let mut all = left.iter().chain(right);
+    all.position(|term| term.participant.to_string() == per.value)
 }

@@ -10,6 +10,7 @@ use crate::finding::Span;
 use crate::quantity::Exact;
 
 use super::model::Entry;
+use super::outside_range::Outside;
 use super::path::{Candidate, Material, on_formation_scale, reference_kelvin};
 use super::resolve::Resolver;
 use super::transitions::{Way, ways};
@@ -45,10 +46,12 @@ impl Resolver<'_> {
         span: &Span,
     ) -> Option<Route> {
         let candidates = &material.candidates;
-        if let Some(route) = self.own_route(substance, material, kelvin) {
+        let printed = self.substances[substance].value.is_some();
+        // The serving entry is always there.
+        let own = candidates.first()?;
+        if let Some(route) = own_route(own, &material.forms, printed, kelvin) {
             return Some(route);
         }
-        let printed = self.substances[substance].value.is_some();
         let mut short: Option<(usize, Short)> = None;
         for (index, candidate) in candidates.iter().enumerate().filter(|_| printed) {
             match along_functions(candidate, kelvin, Reach::Stated) {
@@ -67,27 +70,6 @@ impl Resolver<'_> {
                 None
             }
         }
-    }
-
-    /// By the serving source alone.
-    fn own_route(&self, substance: usize, material: &Material, kelvin: &Exact) -> Option<Route> {
-        // The serving entry is always there.
-        let own = material.candidates.first()?;
-        if self.substances[substance].value.is_some()
-            && let Ok(route) = along_functions(own, kelvin, Reach::Stated)
-        {
-            return Some(route);
-        }
-        let functions = &own.entry.heat_capacity;
-        let direct = covering(functions, kelvin, Reach::Stated);
-        if let Some(index) = direct.filter(|index| on_formation_scale(functions[*index].form)) {
-            return Some(Route {
-                start: RouteStart::Function(own.clone(), index),
-                steps: Vec::new(),
-                end: Some((own.clone(), index)),
-            });
-        }
-        through_transitions(own, &material.forms, kelvin)
     }
 
     /// Beyond the ranges, where the case allows it by name.
@@ -109,15 +91,35 @@ impl Resolver<'_> {
         let reached = short.map(|(_, short)| short.reached);
         self.say_outside(
             substance,
-            candidate,
-            kelvin,
-            reached,
-            allowed,
-            route.is_some(),
+            &Outside {
+                candidate,
+                kelvin,
+                reached,
+                allowed,
+                worked: route.is_some(),
+            },
             span,
         );
         route
     }
+}
+
+/// By the source of the entry alone; `printed` says whether a formation enthalpy is there to start
+/// from.
+fn own_route(own: &Candidate, forms: &[Rc<Entry>], printed: bool, kelvin: &Exact) -> Option<Route> {
+    if printed && let Ok(route) = along_functions(own, kelvin, Reach::Stated) {
+        return Some(route);
+    }
+    let functions = &own.entry.heat_capacity;
+    let direct = covering(functions, kelvin, Reach::Stated);
+    if let Some(index) = direct.filter(|index| on_formation_scale(functions[*index].form)) {
+        return Some(Route {
+            start: RouteStart::Function(own.clone(), index),
+            steps: Vec::new(),
+            end: Some((own.clone(), index)),
+        });
+    }
+    through_transitions(own, forms, kelvin)
 }
 
 /// From another form of the source that has a formation enthalpy, through the transitions that it
