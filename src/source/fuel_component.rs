@@ -5,9 +5,10 @@ use crate::finding::{FindingCode, Located, Severity, Span};
 use crate::notation::Participant;
 use crate::quantity::Exact;
 
-use super::choose::{choice_for, note_identity};
+use super::choose::choice_for;
 use super::combustion_equation::{Combustion, would_be};
 use super::heating_value::{ComponentHeat, FuelComponent, FuelShare};
+use super::identity_findings::note_identity;
 use super::matching::{Match, Wanted, pick};
 use super::problem::{ProblemTerm, ValueKind};
 use super::resolve::Resolver;

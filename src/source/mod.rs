@@ -29,6 +29,7 @@ mod glenn;
 mod glenn_entries;
 mod heat_capacity;
 mod heating_value;
+mod identity_findings;
 mod index;
 #[cfg(test)]
 mod index_tests;
