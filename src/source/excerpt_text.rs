@@ -165,6 +165,8 @@ fn transition(transition: &Transition) -> toml::Table {
         .put("to", Some(transition.to.to_string()))
         .put("temperature", Some(transition.temperature.to_string()))
         .put("enthalpy", Some(transition.enthalpy.to_string()))
+        .put("locator", transition.locator.clone())
+        .put("note", transition.note.clone())
         .0
 }
 
@@ -243,5 +245,31 @@ heat-capacity = [
         assert_eq!(tables(&source).len(), 4);
         assert_eq!(tables(&source)[0]["uncertainty"].as_str(), Some("0.40"));
         assert_eq!(tables(&read_again(&source)), tables(&source));
+    }
+
+    #[test]
+    fn a_transition_travels_with_its_locator_and_note() {
+        let given = r#"[source]
+id = "invented"
+title = "Invented"
+coverage = "2"
+[[entry]]
+substance = "H2O(l)"
+locator = "sheet 1"
+transitions = [
+  { to = "H2O(g)", temperature = "373 K", enthalpy = "41 kJ/mol", locator = "sheet 2", note = "at 1 atm" },
+  { to = "H2O(cr)", temperature = "273 K", enthalpy = "-6 kJ/mol" },
+]
+"#;
+        let (source, faults) = read_source(&Text::new("given", given), Provenance::Original);
+        assert_eq!(faults.into_sorted(), []);
+        let source = source.expect("a source without faults");
+        let entries = read_again(&source).all();
+        let said = |index: usize| {
+            let transition: &Transition = &entries[0].transitions[index];
+            [&transition.locator, &transition.note].map(|text| text.as_deref())
+        };
+        assert_eq!(said(0), [Some("sheet 2"), Some("at 1 atm")]);
+        assert_eq!(said(1), [None, None]);
     }
 }

@@ -133,9 +133,13 @@ fn read_transition(table: &Table<'_, '_>) -> Option<Transition> {
     let to = to.and_then(|text| species(reader, &text));
     let temperature = temperature.and_then(|text| read_temperature(reader, &text));
     let enthalpy = enthalpy.and_then(|text| measured(reader, &text, molar));
+    let owned = |key| table.string(key).map(|text| text.value);
+    let (locator, note) = (owned("locator"), owned("note"));
     Some(Transition {
         to: to?,
         temperature: temperature?,
         enthalpy: enthalpy?,
+        locator,
+        note,
     })
 }
