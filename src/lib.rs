@@ -23,6 +23,7 @@ pub mod calculation;
 pub mod case;
 pub mod cli;
 pub mod document;
+mod elimination;
 pub mod engine;
 pub mod finding;
 pub mod folder;

@@ -4,14 +4,15 @@
 //! to others.
 
 use indexmap::IndexMap;
-use num_traits::{One, Signed, Zero};
 
-use crate::document::{Reader, Table, is_id, notation_fault, one_of, value_fault};
-use crate::finding::{FaultCode, Located, Span, shorten};
+use crate::document::{Reader, Table, notation_fault, one_of, value_fault};
+use crate::finding::{Located, Span};
 use crate::notation::Participant;
-use crate::quantity::{Dimension, Exact, FractionBasis, Quantity, UnitKind, exact_text};
+use crate::quantity::FractionBasis;
 
-use super::given::{Given, Wanted, read_given};
+use super::composition_sum::{check_sum, refuse_repeated};
+use super::fraction::{basis_word, read_share};
+use super::given::Given;
 use super::ids::{IdKind, Ids};
 use super::model::{DeclaredKind, DeclaredSubstance, Input};
 
@@ -48,9 +49,9 @@ pub enum Share {
 
 /// The words for what fractions are of.
 pub(super) const BASES: [(&str, FractionBasis); 3] = [
-    ("mole", FractionBasis::Amount),
-    ("mass", FractionBasis::Mass),
-    ("volume", FractionBasis::Volume),
+    (basis_word(FractionBasis::Amount), FractionBasis::Amount),
+    (basis_word(FractionBasis::Mass), FractionBasis::Mass),
+    (basis_word(FractionBasis::Volume), FractionBasis::Volume),
 ];
 
 const MOISTURES: [(&str, Moisture); 2] = [("dry", Moisture::Dry), ("wet", Moisture::Wet)];
@@ -177,173 +178,6 @@ pub(super) fn read_substance(
             None
         }
     }
-}
-
-fn read_share(
-    reader: &Reader<'_>,
-    text: &Located<String>,
-    basis: Option<FractionBasis>,
-    context: &Context<'_>,
-) -> Option<Share> {
-    if text.value == "balance" && !context.inputs.contains_key("balance") {
-        return Some(Share::Balance);
-    }
-    // A slip in the word would be looked for among the inputs.
-    if is_id(&text.value) && !context.inputs.contains_key(&text.value) {
-        let words = [("balance", ())];
-        let near = crate::finding::nearest(&text.value, words.iter().map(|w| w.0), 1);
-        if !near.is_empty() {
-            one_of(reader, text, &words);
-            return None;
-        }
-    }
-    let fraction = read_fraction(reader, text, basis, context)?;
-    Some(Share::Fraction(Box::new(fraction)))
-}
-
-/// A fraction from zero to one, of the basis where it says one.
-pub(super) fn read_fraction(
-    reader: &Reader<'_>,
-    text: &Located<String>,
-    basis: Option<FractionBasis>,
-    context: &Context<'_>,
-) -> Option<Given> {
-    let wanted = Wanted {
-        dimension: Dimension::ONE,
-        results: false,
-        expected: "a fraction, or \"balance\"",
-        advice: "write \"0.950\", \"95.0 mol%\", \"0.950 ± 0.002\" or the id of an input",
-    };
-    let given = read_given(reader, context.ids, context.inputs, text, &wanted)?;
-    let quantity = given.quantity(context.inputs)?;
-    if !of_basis(reader, text, quantity, basis) {
-        return None;
-    }
-    let value = quantity.value_in_si();
-    if value.is_negative() || value > Exact::one() {
-        value_fault(
-            reader,
-            &text.span,
-            format!("\"{}\"", shorten(&text.value, 60)),
-            "a fraction from 0 to 1",
-            "check the number; per cent are written as wt%, mol% or vol%",
-        );
-        return None;
-    }
-    Some(given)
-}
-
-/// A percentage says what it is of, and has to be of the composition's basis.
-fn of_basis(
-    reader: &Reader<'_>,
-    text: &Located<String>,
-    quantity: &Quantity,
-    basis: Option<FractionBasis>,
-) -> bool {
-    let (UnitKind::Fraction(own), Some(basis)) = (quantity.unit.kind(), basis) else {
-        return true;
-    };
-    if own == basis {
-        return true;
-    }
-    value_fault(
-        reader,
-        &text.span,
-        format!("\"{}\", of {} basis", text.value, word(own)),
-        format!("fractions of the composition's basis, {}", word(basis)),
-        "give all fractions on one basis",
-    );
-    false
-}
-
-/// The word that a case has for a basis.
-fn word(basis: FractionBasis) -> &'static str {
-    match basis {
-        FractionBasis::Amount => "mole",
-        FractionBasis::Mass => "mass",
-        FractionBasis::Volume => "volume",
-    }
-}
-
-/// A substance that stands twice (`CH4(g)` and `CH4( g )`), and a second balance.
-fn refuse_repeated(reader: &Reader<'_>, composition: &Composition) -> bool {
-    let mut names: Vec<String> = Vec::new();
-    let mut balances = 0;
-    let mut single = true;
-    for part in &composition.parts {
-        let name = part.substance.value.to_string();
-        let again = names.contains(&name);
-        let is_balance = matches!(part.share, Share::Balance);
-        balances += usize::from(is_balance);
-        let second_balance = is_balance && balances > 1;
-        if again || second_balance {
-            single = false;
-            value_fault(
-                reader,
-                &part.substance.span,
-                match again {
-                    true => format!("`{name}` a second time"),
-                    false => format!("`{name}` as a second balance"),
-                },
-                "each substance once, and at most one \"balance\"",
-                match again {
-                    true => "remove one of the two",
-                    false => "give the fractions of all substances but one",
-                },
-            );
-        }
-        names.push(name);
-    }
-    single
-}
-
-/// The fractions add up to one exactly; with a balance they leave something for it.
-fn check_sum(table: &Table<'_, '_>, composition: &Composition, context: &Context<'_>) -> bool {
-    let fractions = composition
-        .parts
-        .iter()
-        .filter_map(|part| match &part.share {
-            Share::Fraction(given) => given.quantity(context.inputs),
-            Share::Balance => None,
-        });
-    let sum: Exact = fractions.map(Quantity::value_in_si).sum();
-    let balance = composition.balance().is_some();
-    let holds = match balance {
-        true => sum < Exact::one(),
-        false => sum == Exact::one(),
-    };
-    if holds {
-        return true;
-    }
-    let left = Exact::one() - &sum;
-    let (expected, advice) = match (balance, left.is_zero() || left.is_negative()) {
-        (true, _) => (
-            "a sum below 1, so that something is left for the balance",
-            "check the fractions, or leave the balance out".to_string(),
-        ),
-        (false, false) => (
-            "fractions that add up to 1 exactly",
-            format!(
-                "{} is missing: name it, or make one \"balance\"",
-                exact_text(&left)
-            ),
-        ),
-        (false, true) => (
-            "fractions that add up to 1 exactly",
-            format!(
-                "{} is too much: check, or make one \"balance\"",
-                exact_text(&-left)
-            ),
-        ),
-    };
-    table.reader().fault(
-        FaultCode::Value,
-        &table.span,
-        format!("fractions that add up to {}", exact_text(&sum)),
-        expected,
-        advice,
-    );
-    false
 }
 
 impl Composition {

@@ -7,7 +7,8 @@ use crate::document::{Table, one_of, value_fault};
 use crate::finding::Located;
 use crate::quantity::{Dimension, Exact};
 
-use super::composition::{Composition, Context, Moisture, read_composition, read_fraction};
+use super::composition::{Composition, Context, Moisture, read_composition};
+use super::fraction::read_fraction;
 use super::fuel::check_fuel;
 use super::given::{Given, read_temperature};
 use super::ids::Ids;

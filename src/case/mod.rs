@@ -6,10 +6,12 @@
 mod allowances;
 mod assumptions;
 mod composition;
+mod composition_sum;
 mod cycle;
 mod cycle_references;
 mod cycle_steps;
 mod cycles;
+mod fraction;
 mod fuel;
 mod given;
 mod heat_capacity;

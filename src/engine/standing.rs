@@ -1,6 +1,6 @@
 //! What the values used are worth: findings about their verification and their digits.
 
-use std::collections::BTreeMap;
+use std::collections::{BTreeMap, BTreeSet};
 
 use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::quantity::{InputUncertainty, Significance};
@@ -25,7 +25,7 @@ pub(super) fn not_compared(problem: &Problem, text: &Text) -> Vec<Finding> {
         code: FindingCode::NotCompared,
         message: format!(
             "{} of {} ({}): not compared with the printed table. Compare before relying on it.",
-            list(values.iter().map(|v| v.substance.clone())),
+            list(once_each(values.iter().map(|v| v.substance.clone()))),
             problem.sources[*source].id(),
             standing.word(),
         ),
@@ -76,13 +76,17 @@ pub(super) fn uncounted_zeros(problem: &Problem, text: &Text) -> Vec<Finding> {
 }
 
 fn named_values(problem: &Problem, values: &[&ValueUsed]) -> String {
-    list(values.iter().map(|value| {
-        format!(
-            "{} ({})",
-            value.substance,
-            problem.sources[value.source].id()
-        )
-    }))
+    let name = |value: &&ValueUsed| {
+        let source = problem.sources[value.source].id();
+        format!("{} ({source})", value.substance)
+    };
+    list(once_each(values.iter().map(name)))
+}
+
+/// A substance has a value for each function that serves, and is named once.
+fn once_each(names: impl Iterator<Item = String>) -> impl Iterator<Item = String> {
+    let mut seen = BTreeSet::new();
+    names.filter(move |name| seen.insert(name.clone()))
 }
 
 /// A note where results rest on a table whose trailing zeros claim nothing.
@@ -125,18 +129,14 @@ pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -
     if short.is_empty() {
         return Vec::new();
     }
-    let mut silent: Vec<usize> = Vec::new();
-    for outcome in &short {
-        for (index, _) in outcome.form.iter() {
-            let silent_one = problem.values[index].uncertainty == InputUncertainty::NotStated;
-            if silent_one && !silent.contains(&index) && silent.len() <= MOST {
-                silent.push(index);
-            }
-        }
-    }
-    let at = silent
-        .first()
-        .map_or(0, |index| problem.values[*index].used_at.start);
+    let mut seen = BTreeSet::new();
+    let rested_on = short.iter().flat_map(|outcome| outcome.form.iter());
+    let silent: Vec<&ValueUsed> = rested_on
+        .filter(|(index, _)| seen.insert(*index))
+        .map(|(index, _)| &problem.values[index])
+        .filter(|value| value.uncertainty == InputUncertainty::NotStated)
+        .collect();
+    let at = silent.first().map_or(0, |value| value.used_at.start);
     vec![Finding {
         severity: Severity::Caution,
         code: FindingCode::UncertaintyIncomplete,
@@ -144,13 +144,7 @@ pub(super) fn incomplete(problem: &Problem, outcomes: &[Outcome], text: &Text) -
             "The uncertainty of {} does not cover every value used: {} not stated, which is not \
              zero.",
             named(&short),
-            named_values(
-                problem,
-                &silent
-                    .iter()
-                    .map(|i| &problem.values[*i])
-                    .collect::<Vec<_>>()
-            ),
+            named_values(problem, &silent),
         ),
         at: text.place(at),
     }]

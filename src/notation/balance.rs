@@ -10,6 +10,8 @@ use num_integer::Integer;
 use num_rational::BigRational;
 use num_traits::{One, Signed, Zero};
 
+use crate::elimination::eliminate;
+
 use super::element::Element;
 use super::formula::Formula;
 
@@ -155,43 +157,6 @@ fn over_common_denominator(values: &[BigRational]) -> (Vec<BigInt>, BigInt) {
     });
     let whole = |value: &BigRational| value.numer() * (&denominator / value.denom());
     (values.iter().map(whole).collect(), denominator)
-}
-
-/// Gauss-Jordan elimination in integers: each row is divided by what its entries share.
-/// Returns the pivot columns, one for each of the rows that remain, in order.
-fn eliminate(matrix: &mut Vec<Vec<BigInt>>, columns: usize) -> Vec<usize> {
-    let mut pivots = Vec::new();
-    for column in 0..columns {
-        let rank = pivots.len();
-        let Some(at) = (rank..matrix.len()).find(|row| !matrix[*row][column].is_zero()) else {
-            continue;
-        };
-        matrix.swap(rank, at);
-        let pivot = matrix[rank].clone();
-        for (index, row) in matrix.iter_mut().enumerate() {
-            if index != rank {
-                clear_column(row, &pivot, column);
-            }
-        }
-        pivots.push(column);
-    }
-    matrix.truncate(pivots.len());
-    pivots
-}
-
-/// Takes multiples of the pivot row from a row until it has zero in the column.
-fn clear_column(row: &mut [BigInt], pivot: &[BigInt], column: usize) {
-    if row[column].is_zero() {
-        return;
-    }
-    let (own, other) = (row[column].clone(), &pivot[column]);
-    for (entry, taken) in row.iter_mut().zip(pivot) {
-        *entry = &*entry * other - taken * &own;
-    }
-    let shared = row.iter().fold(BigInt::zero(), |gcd, entry| gcd.gcd(entry));
-    if !shared.is_zero() {
-        row.iter_mut().for_each(|entry| *entry /= &shared);
-    }
 }
 
 /// The ratios as integers without a common divisor, if all are positive.

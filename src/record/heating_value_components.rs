@@ -156,23 +156,6 @@ pub(super) fn substitution(page: &Page<'_>, combustion: &HeatAt) -> Rich {
 
 /// Component, row, fraction, mole fraction, molar heat, product.
 pub(super) fn composition_table(page: &Page<'_>) -> Table {
-    let row = |(component, worked): (&FuelComponent, &ComponentWorking)| {
-        let share = match component.share {
-            FuelShare::Stated(value) | FuelShare::Moisture(value) => {
-                Rich::default().run(Run::ValueUsed(value + 1))
-            }
-            FuelShare::Balance => Rich::plain("balance"),
-        };
-        vec![
-            Rich::from(component.species.pieces()),
-            share,
-            Rich::plain(shown(&worked.fraction)),
-            Rich::plain(shown(&worked.mole_fraction)),
-            Rich::plain(exact_fraction(&component.combustion.hydrogen)),
-            Rich::plain(page.molar(&worked.gross)),
-            Rich::plain(page.molar(&worked.mole_fraction.times(&worked.gross))),
-        ]
-    };
     let blank = Rich::default;
     let symbol = |text: &str, sub: &str| {
         Rich::default()
@@ -190,7 +173,9 @@ pub(super) fn composition_table(page: &Page<'_>) -> Table {
             number(symbol("H", "j")),
             number(symbol("x", "j").with(symbol("H", "j"))),
         ],
-        rows: pairs(page).map(row).collect(),
+        rows: pairs(page)
+            .map(|(component, worked)| row(page, component, worked))
+            .collect(),
         total: Some(vec![
             Rich::plain("Sum"),
             blank(),
@@ -201,6 +186,24 @@ pub(super) fn composition_table(page: &Page<'_>) -> Table {
             Rich::plain(page.molar(&page.mixture.gross)),
         ]),
     }
+}
+
+fn row(page: &Page<'_>, component: &FuelComponent, worked: &ComponentWorking) -> Vec<Rich> {
+    let share = match component.share {
+        FuelShare::Stated(value) | FuelShare::Moisture(value) => {
+            Rich::default().run(Run::ValueUsed(value + 1))
+        }
+        FuelShare::Balance => Rich::plain("balance"),
+    };
+    vec![
+        Rich::from(component.species.pieces()),
+        share,
+        Rich::plain(shown(&worked.fraction)),
+        Rich::plain(shown(&worked.mole_fraction)),
+        Rich::plain(exact_fraction(&component.combustion.hydrogen)),
+        Rich::plain(page.molar(&worked.gross)),
+        Rich::plain(page.molar(&worked.mole_fraction.times(&worked.gross))),
+    ]
 }
 
 /// Molar masses and the heating values per mass.

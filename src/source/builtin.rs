@@ -5,7 +5,7 @@ use crate::finding::Text;
 use super::glenn;
 use super::glenn_entries;
 use super::index;
-use super::read::read_head_alone;
+use super::read_head::read_head_alone;
 use super::store::Source;
 
 /// The conventions: elements in their reference states, the hydrogen ion and the electron.

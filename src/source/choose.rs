@@ -1,11 +1,12 @@
 //! Which entry of which source serves for a substance.
 
 use crate::case::Choice;
-use crate::finding::{Fault, FaultCode, Finding, FindingCode, Place, Severity, Span};
+use crate::finding::{Fault, FaultCode, Span};
 use crate::notation::{PhaseLabel, Species};
-use crate::quantity::{Exact, Quantity, exact_text};
+use crate::quantity::{Exact, Quantity};
 
-use super::matching::{Identity, Match, Wanted, are_isomers, identity, passed_over, pick};
+use super::identity_findings::{note_identity, note_passed_over};
+use super::matching::{Match, Wanted, are_isomers, passed_over, pick};
 use super::model::Entry;
 use super::path::on_formation_scale;
 use super::resolve::Resolver;
@@ -36,14 +37,6 @@ pub(super) struct Chosen {
     /// What the case said where it chose.
     pub(super) because: Option<String>,
     pub(super) chosen_at: Option<Span>,
-}
-
-/// Compounds of two carbon atoms or more, with other elements, commonly have isomers.
-fn can_have_isomers(wanted: &Wanted) -> bool {
-    let counts = wanted.species.formula.counts();
-    let carbon = counts.iter().find(|(element, _)| element.symbol() == "C");
-    let two = Exact::from_integer(2.into());
-    counts.len() > 1 && carbon.is_some_and(|(_, count)| *count >= two)
 }
 
 /// Chooses the first source in order, or the one that the case chose.
@@ -85,55 +78,67 @@ fn look_up(
     span: &Span,
 ) -> Option<Vec<Held>> {
     let hill = wanted.species.formula.hill();
-    let mut found = Vec::new();
-    let mut without_value: Option<(usize, Entry)> = None;
-    let mut no_form: Option<String> = None;
+    let mut search = Search::default();
     for source in 0..resolver.sources.len() {
         let entries = resolver.sources[source].of_composition(&hill);
         if let Some(entry) = passed_over(wanted, &entries) {
             note_passed_over(resolver, wanted, span, source, entry);
         }
         let matched = match is_stable(wanted) {
-            true => match stable_form(pick(wanted, &entries), kelvin) {
-                Ok(matched) => matched,
-                Err(why) => {
-                    let id = resolver.sources[source].id();
-                    no_form.get_or_insert(format!("{id}: {why}"));
-                    continue;
-                }
-            },
-            false => pick(wanted, &entries),
+            true => stable_form(pick(wanted, &entries), kelvin),
+            false => Ok(pick(wanted, &entries)),
         };
         match matched {
-            Match::None => {}
-            Match::Several(several) => {
-                if found.is_empty() || tells_isomers(wanted) {
+            Err(why) => {
+                let id = resolver.sources[source].id();
+                search.no_form.get_or_insert(format!("{id}: {why}"));
+            }
+            Ok(Match::None) => {}
+            Ok(Match::Several(several)) => {
+                if search.found.is_empty() || tells_isomers(wanted) {
                     let fault = ambiguous(resolver, wanted, span, source, &several);
                     resolver.faults.push(fault);
                     return None;
                 }
             }
-            Match::One(entry) if gives_enthalpy(&entries, &entry) => found.push(Held {
+            Ok(Match::One(entry)) if gives_enthalpy(&entries, &entry) => search.found.push(Held {
                 source,
                 entry: *entry,
             }),
-            Match::One(entry) => without_value = Some((source, *entry)),
+            Ok(Match::One(entry)) => search.without_value = Some((source, *entry)),
         }
     }
-    if let (true, Some(why)) = (found.is_empty(), no_form) {
-        let finding = no_stable_form(resolver, wanted, &why, span);
-        resolver.say(finding);
-        return None;
-    }
-    if found.is_empty() {
-        let fault = match without_value {
+    search.ended(resolver, wanted, span)
+}
+
+/// What a search through the sources has met.
+#[derive(Default)]
+struct Search {
+    found: Vec<Held>,
+    /// The last entry that matches and leads to no enthalpy, with its source.
+    without_value: Option<(usize, Entry)>,
+    /// Why the first source that knows the substance has no stable form of it.
+    no_form: Option<String>,
+}
+
+impl Search {
+    /// What was found; where that is nothing, why is said.
+    fn ended(self, resolver: &mut Resolver<'_>, wanted: &Wanted, span: &Span) -> Option<Vec<Held>> {
+        if !self.found.is_empty() {
+            return Some(self.found);
+        }
+        if let Some(why) = self.no_form {
+            let finding = no_stable_form(resolver, wanted, &why, span);
+            resolver.say(finding);
+            return None;
+        }
+        let fault = match self.without_value {
             Some((source, entry)) => no_enthalpy(resolver, wanted, span, source, &entry),
             None => unknown_substance(resolver, wanted, span),
         };
         resolver.faults.push(fault);
-        return None;
+        None
     }
-    Some(found)
 }
 
 /// A printed formation enthalpy, a function that carries its integration constant, or transitions
@@ -205,109 +210,4 @@ fn refuse_isomers(
     let fault = ambiguous(resolver, wanted, span, other.source, &entries);
     resolver.faults.push(fault);
     true
-}
-
-fn note_passed_over(
-    resolver: &mut Resolver<'_>,
-    wanted: &Wanted,
-    span: &Span,
-    source: usize,
-    entry: &Entry,
-) {
-    let number = |cas: &Option<String>| cas.clone().unwrap_or_default();
-    resolver.findings.push(Finding {
-        severity: Severity::Caution,
-        code: FindingCode::IdentityByFormula,
-        message: format!(
-            "{} lists {} under the name of `{}` with CAS number {}, the case says {}: passed over. \
-             One of the two numbers is likely to be wrong.",
-            resolver.sources[source].id(),
-            entry.species().map_or_else(String::new, Species::to_string),
-            wanted.label,
-            number(&entry.cas),
-            number(&wanted.cas),
-        ),
-        at: resolver.text.place(span.start),
-    });
-}
-
-/// What was taken for granted about the identity of a substance is said.
-pub(super) fn note_identity(
-    resolver: &mut Resolver<'_>,
-    wanted: &Wanted,
-    kelvin: &Exact,
-    span: &Span,
-    entry: &Entry,
-) {
-    let form = entry.species().map_or_else(String::new, Species::to_string);
-    let at = resolver.text.place(span.start);
-    if identity(wanted, entry) == Identity::Open {
-        let name = entry.name.as_deref().unwrap_or("nothing");
-        resolver.findings.push(Finding {
-            severity: Severity::Caution,
-            code: FindingCode::IdentityByFormula,
-            message: format!(
-                "`{}` was found by its formula alone: the source calls {form} \"{name}\". Give a \
-                 name or a CAS number in [substances] that says they are the same.",
-                wanted.label
-            ),
-            at,
-        });
-        return;
-    }
-    if !wanted.is_declared() && can_have_isomers(wanted) && entry.name.is_some() {
-        let name = entry.name.as_deref().unwrap_or_default();
-        let carbon_and_hydrogen = ["C", "H"];
-        let mut elements = wanted.species.formula.counts().keys();
-        // With a third element the isomers are common substances of other kinds.
-        let severity = match elements.all(|e| carbon_and_hydrogen.contains(&e.symbol())) {
-            true => Severity::Note,
-            false => Severity::Caution,
-        };
-        resolver.findings.push(Finding {
-            severity,
-            code: FindingCode::IdentityByFormula,
-            message: format!(
-                "`{}` is taken as {name}, the one compound of this formula that the source lists. \
-                 A declaration in [substances] with its CAS number says which one is meant.",
-                wanted.label
-            ),
-            at,
-        });
-        return;
-    }
-    let asked = &wanted.species.phase;
-    let listed = entry.notations().any(|species| species.phase == *asked);
-    if is_stable(wanted) {
-        note_stable(resolver, wanted, &form, kelvin, at);
-    } else if !listed {
-        resolver.findings.push(Finding {
-            severity: Severity::Note,
-            code: FindingCode::IdentityByFormula,
-            message: format!(
-                "`{}` is taken as {form}, the one such form of the source.",
-                wanted.label
-            ),
-            at,
-        });
-    }
-}
-
-fn note_stable(
-    resolver: &mut Resolver<'_>,
-    wanted: &Wanted,
-    form: &str,
-    kelvin: &Exact,
-    at: Place,
-) {
-    resolver.say(Finding {
-        severity: Severity::Note,
-        code: FindingCode::StableForm,
-        message: format!(
-            "`{}` is {form} at {} K, by the ranges of its source.",
-            wanted.label,
-            exact_text(kelvin)
-        ),
-        at,
-    });
 }

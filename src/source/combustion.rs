@@ -8,14 +8,16 @@ use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
 use crate::notation::{Equation, Participant, PhaseLabel, Species};
 use crate::quantity::{Exact, Quantity};
 
-use super::choose::{choice_for, note_identity};
+use super::choose::choice_for;
 use super::cycle::CycleSpecies;
+use super::entry_value::value_of;
+use super::identity_findings::note_identity;
 use super::matching::{Match, pick};
 use super::model::Entry;
 use super::path::reference_kelvin;
 use super::path_values::formation_significance;
 use super::problem::{ValueKind, ValueUsed};
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 use super::suggest::ambiguous;
 
 impl Resolver<'_> {
@@ -89,37 +91,11 @@ impl Resolver<'_> {
         species: &[CycleSpecies],
         numbers: &[Exact],
     ) {
-        let formed = species
-            .iter()
-            .zip(numbers)
-            .filter(|(_, nu)| nu.is_positive());
+        let formed = species.iter().zip(numbers);
+        let formed = formed.filter(|(_, nu)| nu.is_positive());
         let formed: Vec<&Species> = formed.map(|(s, _)| &s.species).collect();
-        let is_gas = |s: &&&Species| {
-            let phase = s.phase.as_ref();
-            phase.is_some_and(|phase| phase.label == PhaseLabel::Gas)
-        };
-        let water = formed
-            .iter()
-            .filter(is_gas)
-            .any(|s| s.formula.hill() == "H2O");
-        let elements = formed.iter().flat_map(|s| s.formula.counts().keys());
-        let others: BTreeSet<&str> = elements
-            .map(|element| element.symbol())
-            .filter(|symbol| !["C", "H", "O", "N"].contains(symbol))
-            .collect();
-        let others: Vec<&str> = others.into_iter().collect();
-        let doubt = match (water, others.is_empty()) {
-            (true, _) => {
-                "that water forms as a gas, and most tables take it as a liquid, 44 kJ/mol \
-                          apart"
-                    .to_string()
-            }
-            (false, false) => format!(
-                "products with {}, for which tables differ (sulfur dioxide or sulfuric acid, \
-                 hydrogen halide as a gas or in water)",
-                others.join(", ")
-            ),
-            (false, true) => return,
+        let Some(doubt) = doubt(&formed) else {
+            return;
         };
         self.findings.push(Finding {
             severity: Severity::Caution,
@@ -163,4 +139,27 @@ impl Resolver<'_> {
             at: self.text.place(named.span.start),
         });
     }
+}
+
+/// What tables may mean otherwise of the products that an equation forms.
+fn doubt(formed: &[&Species]) -> Option<String> {
+    let gas = |s: &Species| s.phase.as_ref().is_some_and(|p| p.label == PhaseLabel::Gas);
+    if formed.iter().any(|s| gas(s) && s.formula.hill() == "H2O") {
+        let water = "that water forms as a gas, and most tables take it as a liquid, 44 kJ/mol \
+                     apart";
+        return Some(water.to_string());
+    }
+    let elements = formed.iter().flat_map(|s| s.formula.counts().keys());
+    let others: BTreeSet<&str> = elements
+        .map(|element| element.symbol())
+        .filter(|symbol| !["C", "H", "O", "N"].contains(symbol))
+        .collect();
+    let others: Vec<&str> = others.into_iter().collect();
+    (!others.is_empty()).then(|| {
+        format!(
+            "products with {}, for which tables differ (sulfur dioxide or sulfuric acid, hydrogen \
+             halide as a gas or in water)",
+            others.join(", ")
+        )
+    })
 }

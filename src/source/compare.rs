@@ -117,41 +117,45 @@ fn judge(
         "{}: {ours} and {theirs} are {apart} apart (the latter prints {})",
         wanted.label, comparison.printed
     );
-    let finding = |severity, code, message| Finding {
-        severity,
-        code,
-        message,
-        at: resolver
-            .text
-            .place(chosen.chosen_at.as_ref().unwrap_or(span).start),
-    };
-    let (beyond, remark) = match comparison.judgement {
-        Judgement::Within { .. } | Judgement::NotJudged { equal: true } => return None,
-        Judgement::Beyond { combined, complete } => (true, beyond_words(combined, complete, used)),
-        Judgement::NotJudged { equal: false } => (
-            false,
-            "neither states an uncertainty to judge it by".to_string(),
-        ),
-    };
-    Some(match (&chosen.because, beyond) {
-        (Some(because), _) => finding(
+    let (beyond, remark) = remark(&comparison.judgement, used)?;
+    let (severity, code, serves) = match (&chosen.because, beyond) {
+        (Some(because), _) => (
             Severity::Note,
             FindingCode::ChoiceOverrides,
-            format!("{differ}; {remark}. The case chooses {ours}: {because}"),
+            format!("The case chooses {ours}: {because}"),
         ),
-        (None, true) => finding(
+        (None, true) => (
             Severity::Stop,
             FindingCode::SourcesDiffer,
-            format!(
-                "{differ}; {remark}. Choose in [sources.choose] which one serves, and say why."
-            ),
+            "Choose in [sources.choose] which one serves, and say why.".to_string(),
         ),
-        (None, false) => finding(
+        (None, false) => (
             Severity::Caution,
             FindingCode::SourcesDiffer,
-            format!("{differ}; {remark}. {ours} serves because it is consulted first."),
+            format!("{ours} serves because it is consulted first."),
         ),
+    };
+    let at = chosen.chosen_at.as_ref().unwrap_or(span).start;
+    Some(Finding {
+        severity,
+        code,
+        message: format!("{differ}; {remark}. {serves}"),
+        at: resolver.text.place(at),
     })
+}
+
+/// Whether two values are too far apart, and by what that is judged; none where they agree.
+fn remark(judgement: &Judgement, used: &ValueUsed) -> Option<(bool, String)> {
+    match *judgement {
+        Judgement::Within { .. } | Judgement::NotJudged { equal: true } => None,
+        Judgement::Beyond { combined, complete } => {
+            Some((true, beyond_words(combined, complete, used)))
+        }
+        Judgement::NotJudged { equal: false } => {
+            let remark = "neither states an uncertainty to judge it by";
+            Some((false, remark.to_string()))
+        }
+    }
 }
 
 fn beyond_words(combined: f64, complete: bool, used: &ValueUsed) -> String {

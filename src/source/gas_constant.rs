@@ -1,12 +1,13 @@
-//! The molar gas constant among the values used.
+//! The molar gas constant: among the values used, and as functions were fitted with it.
 
 use crate::finding::{Fault, FaultCode, Span};
-use crate::quantity::Quantity;
+use crate::quantity::{Decimal, Exact, Quantity};
 
 use super::builtin::CONSTANTS;
-use super::model::Entry;
+use super::entry_value::value_of;
+use super::model::{Entry, SourceHead};
 use super::problem::ValueKind;
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 
 impl Resolver<'_> {
     /// The molar gas constant R, J/(mol K), with its row in the table of values used. None where
@@ -34,4 +35,11 @@ impl Resolver<'_> {
         let printed = entry.value.clone()?;
         Some((source, entry, printed))
     }
+}
+
+/// The R that the functions of a source were fitted with, J/(mol K); where it states none it has
+/// no function that needs one.
+pub(super) fn gas_constant(head: &SourceHead) -> Exact {
+    let stated = head.gas_constant.as_ref();
+    stated.map_or_else(|| Exact::from_integer(0.into()), Decimal::value)
 }

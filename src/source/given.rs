@@ -166,10 +166,7 @@ impl Resolver<'_> {
         }
         let named = &self.substances[stated.substance];
         let (label, species) = (named.label.clone(), named.species.clone());
-        let which = match stated.which {
-            "" => String::new(),
-            which => format!(", {which}"),
-        };
+        let which = stated.suffix();
         let source = stated.given.source.as_deref().unwrap_or("no source stated");
         let index = self.case_value(CaseValue {
             kind: ValueKind::HeatCapacity,
@@ -219,14 +216,12 @@ impl Resolver<'_> {
         };
         let function = constant(decimal(&sum)?, Some(stated.range.clone()));
         let row = &self.values[printed];
+        let of = &self.substances[stated.substance];
         let value = ValueUsed {
             kind: ValueKind::HeatCapacity,
             source: self.case_source,
-            substance: match stated.which {
-                "" => self.substances[stated.substance].label.clone(),
-                which => format!("{}, {which}", self.substances[stated.substance].label),
-            },
-            species: Some(self.substances[stated.substance].species.clone()),
+            substance: format!("{}{}", of.label, stated.suffix()),
+            species: Some(of.species.clone()),
             printed: zero_error(),
             significance,
             uncertainty: InputUncertainty::Exact,
@@ -248,6 +243,16 @@ struct Stated<'a> {
     range: &'a [Quantity; 2],
     /// Which bound; empty for a value.
     which: &'static str,
+}
+
+impl Stated<'_> {
+    /// What follows the name of the substance.
+    fn suffix(&self) -> String {
+        match self.which {
+            "" => String::new(),
+            which => format!(", {which}"),
+        }
+    }
 }
 
 /// The half-width at k = 2, the coverage of a case, for which `±` stands in its values.

@@ -6,9 +6,10 @@ use crate::case::{CaseHeatCapacity, HeatCapacityStatement};
 use crate::finding::{FindingCode, Severity, Span};
 use crate::quantity::{Exact, exact_text, two_digits};
 
+use super::constant_findings::LONG;
 use super::kopp::KoppEstimate;
-use super::path::reference_kelvin;
-use super::path_findings::LONG;
+use super::outside_range::Allowance;
+use super::path::{Material, reference_kelvin};
 use super::resolve::Resolver;
 
 impl Resolver<'_> {
@@ -37,19 +38,7 @@ impl Resolver<'_> {
         };
         let label = self.substances[substance].label.clone();
         let allowed = self.extrapolation_allowed(substance);
-        let (severity, what) = match &allowed {
-            Some(assumption) => (
-                Severity::Caution,
-                format!("Used beyond it, as the case allows: {assumption}"),
-            ),
-            None => (
-                Severity::Stop,
-                format!(
-                    "State one that reaches, from 298.15 K on, or allow it by name in an \
-                     assumption: allows = {{ extrapolation = [\"{label}\"] }}."
-                ),
-            ),
-        };
+        let (severity, what) = consequence(allowed.as_ref(), &label);
         let message = format!(
             "{label}: the case gives its heat capacity for {} to {} K; {} K is {} K outside. {what}",
             exact_text(&low),
@@ -71,43 +60,44 @@ impl Resolver<'_> {
     ) {
         let material = self.material(substance, span);
         self.check_stability(substance, &material, kelvin, span);
-        let candidates = &material.candidates;
         let Some(constant) = self.values[function].function.clone() else {
             return;
         };
         let reference = reference_kelvin();
-        let size = self.change(candidates, &constant, &reference, kelvin);
-        let label = self.substances[substance].label.clone();
-        let with_function = candidates
-            .iter()
-            .find(|c| !c.entry.heat_capacity.is_empty());
-        if let Some(candidate) = with_function {
-            let source = self.sources[candidate.source].id();
-            let message = format!(
-                "{label}: the heat capacity that the case gives is used, although {source} has \
-                 one. {size}"
-            );
-            self.say_of(
-                Severity::Note,
-                FindingCode::HeatCapacityGiven,
-                message,
-                span,
-            );
-        }
+        let size = self.change(&material.candidates, &constant, &reference, kelvin);
+        self.check_other_source(substance, &material, &size, span);
         let way = (kelvin - reference).abs();
         if way > Exact::from_integer(LONG.into()) {
             let message = format!(
-                "{label}: a constant heat capacity of the case is used over {} K, to {} K. {size}",
+                "{}: a constant heat capacity of the case is used over {} K, to {} K. {size}",
+                self.substances[substance].label,
                 exact_text(&way),
                 exact_text(kelvin),
             );
-            self.say_of(
-                Severity::Caution,
-                FindingCode::ConstantHeatCapacity,
-                message,
-                span,
-            );
+            let code = FindingCode::ConstantHeatCapacity;
+            self.say_of(Severity::Caution, code, message, span);
         }
+    }
+
+    /// A source that has what the case gives in its place.
+    fn check_other_source(
+        &mut self,
+        substance: usize,
+        material: &Material,
+        size: &str,
+        span: &Span,
+    ) {
+        let mut candidates = material.candidates.iter();
+        let Some(candidate) = candidates.find(|c| !c.entry.heat_capacity.is_empty()) else {
+            return;
+        };
+        let message = format!(
+            "{}: the heat capacity that the case gives is used, although {} has one. {size}",
+            self.substances[substance].label,
+            self.sources[candidate.source].id(),
+        );
+        let code = FindingCode::HeatCapacityGiven;
+        self.say_of(Severity::Note, code, message, span);
     }
 
     pub(super) fn say_bounds_refused(&mut self, substance: usize, span: &Span) {
@@ -162,4 +152,20 @@ impl Resolver<'_> {
 fn distance(kelvin: &Exact, low: &Exact, high: &Exact) -> Exact {
     let (below, above) = (low - kelvin, kelvin - high);
     below.max(above)
+}
+
+fn consequence(allowed: Option<&Allowance>, label: &str) -> (Severity, String) {
+    match allowed {
+        Some(assumption) => (
+            Severity::Caution,
+            format!("Used beyond it, as the case allows: {assumption}"),
+        ),
+        None => (
+            Severity::Stop,
+            format!(
+                "State one that reaches, from 298.15 K on, or allow it by name in an assumption: \
+                 allows = {{ extrapolation = [\"{label}\"] }}."
+            ),
+        ),
+    }
 }

@@ -5,11 +5,12 @@ use crate::finding::Span;
 use crate::quantity::{Exact, InputUncertainty};
 
 use super::builtin::KOPP;
+use super::entry_value::value_of;
 use super::given::{constant, decimal};
 use super::kopp::{KoppEstimate, kopp_estimate};
 use super::path_values::zero_error;
 use super::problem::{ValueKind, ValueUsed};
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 use super::standing::Standing;
 
 impl Resolver<'_> {

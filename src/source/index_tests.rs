@@ -5,7 +5,8 @@ use super::builtin::{FILES, GLENN};
 use super::glenn::GlennIndex;
 use super::index;
 use super::model::{Entry, Subject};
-use super::read::{Provenance, read_source, sha256_hex};
+use super::read::{Provenance, read_source};
+use super::sha256::sha256_hex;
 use crate::finding::Text;
 
 #[test]

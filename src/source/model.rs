@@ -118,6 +118,9 @@ pub struct Transition {
     pub to: Species,
     pub temperature: Quantity,
     pub enthalpy: Quantity,
+    /// Where it stands, if elsewhere than the rest of the entry.
+    pub locator: Option<String>,
+    pub note: Option<String>,
 }
 
 /// A correlation between two values that the source states.

@@ -6,8 +6,9 @@ use crate::notation::Species;
 use crate::quantity::Exact;
 
 use super::builtin::ATOMIC_WEIGHTS;
+use super::entry_value::value_of;
 use super::problem::ValueKind;
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 
 impl Resolver<'_> {
     /// The atomic weights that make up a molar mass, with the counts of atoms.

@@ -5,11 +5,12 @@ use crate::quantity::{InputUncertainty, Quantity, Significance};
 
 use num_traits::Zero;
 
+use super::entry_value::value_of;
 use super::heat_capacity::{Form, HeatCapacity};
 use super::model::{Digits, Entry, SourceHead};
 use super::path::Candidate;
 use super::problem::{ValueKind, ValueUsed};
-use super::resolve::{Resolver, value_of};
+use super::resolve::Resolver;
 use super::standing::Standing;
 
 impl Resolver<'_> {
@@ -38,7 +39,8 @@ impl Resolver<'_> {
         self.enter_value(value, &key)
     }
 
-    /// The heat of a transition that an entry lists.
+    /// The heat of a transition that an entry lists. What it does not say itself of its place, or
+    /// in a note, the entry says.
     pub(super) fn transition_value(
         &mut self,
         candidate: &Candidate,
@@ -49,19 +51,19 @@ impl Resolver<'_> {
         let transition = &entry.transitions[index];
         let head = &self.sources[*source].head;
         let printed = transition.enthalpy.clone();
-        let mut value = value_of(
-            *source,
-            head,
-            ValueKind::TransitionEnthalpy,
-            entry,
-            printed,
-            span,
-        );
+        let kind = ValueKind::TransitionEnthalpy;
+        let mut value = value_of(*source, head, kind, entry, printed, span);
         value.substance = format!(
             "{} → {} at {}",
             value.substance, transition.to, transition.temperature
         );
         value.species = None;
+        if let Some(locator) = &transition.locator {
+            value.locator.clone_from(locator);
+        }
+        if transition.note.is_some() {
+            value.note.clone_from(&transition.note);
+        }
         let key = value.substance.clone();
         self.enter_value(value, &key)
     }

@@ -5,8 +5,9 @@ use crate::notation::{Element, PhaseLabel};
 use crate::quantity::{Dimension, Quantity, Unit};
 
 use super::model::{Entry, SourceHead, Subject, Transition};
-use super::read::{measured, read_standing, read_temperature};
+use super::read_head::read_standing;
 use super::read_heat_capacity::read_heat_capacities;
+use super::read_quantity::{measured, read_temperature};
 use super::standing::Standing;
 
 const ENTRY_KEYS: [&str; 14] = [
@@ -132,9 +133,13 @@ fn read_transition(table: &Table<'_, '_>) -> Option<Transition> {
     let to = to.and_then(|text| species(reader, &text));
     let temperature = temperature.and_then(|text| read_temperature(reader, &text));
     let enthalpy = enthalpy.and_then(|text| measured(reader, &text, molar));
+    let owned = |key| table.string(key).map(|text| text.value);
+    let (locator, note) = (owned("locator"), owned("note"));
     Some(Transition {
         to: to?,
         temperature: temperature?,
         enthalpy: enthalpy?,
+        locator,
+        note,
     })
 }

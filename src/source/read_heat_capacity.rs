@@ -8,7 +8,7 @@ use crate::finding::{Located, Span};
 use crate::quantity::{Decimal, Exact, Quantity, to_f64};
 
 use super::heat_capacity::{Form, HeatCapacity, MOST_POWERS};
-use super::read::{above_zero_kelvin, read_decimal, read_temperature};
+use super::read_quantity::{above_zero_kelvin, read_decimal, read_temperature};
 
 /// No table prints more points for one substance; it bounds the work.
 const MOST_POINTS: usize = 1000;

@@ -3,8 +3,9 @@
 use std::collections::BTreeMap;
 
 use super::model::{Entry, Erratum, SourceHead, StatedCorrelation, Subject};
-use super::read::{Provenance, read_source, sha256_hex};
+use super::read::{Provenance, read_source};
 use super::read_entry::{EntryRules, read_entry};
+use super::sha256::sha256_hex;
 use super::{glenn_entries, index};
 use crate::document::with_document;
 use crate::finding::Text;

@@ -26,7 +26,7 @@ transitions = [{ to = "TiO2(cr, beta)", temperature = "1000 K", enthalpy = "5.0 
 substance = "TiO2(cr, beta)"
 locator = "sheet 1 (invented)"
 heat-capacity = [{ form = "constant", range = ["1000 K", "1500 K"], coefficients = ["70"], uncertainty = "2" }]
-transitions = [{ to = "TiO2(l)", temperature = "1500 K", enthalpy = "40.0 ± 1.0 kJ/mol" }]
+transitions = [{ to = "TiO2(l)", temperature = "1500 K", enthalpy = "40.0 ± 1.0 kJ/mol", locator = "sheet 2 (invented)" }]
 
 [[entry]]
 substance = "TiO2(l)"
@@ -110,6 +110,21 @@ fn transitions_on_the_way_are_crossed_with_their_heats() {
         let u = tried.result("r.heat")["standard-uncertainty"].as_f64();
         assert!((u.unwrap_or_default() - 1.7178).abs() < 2e-4, "{u:?}");
     }
+}
+
+#[test]
+fn a_transition_is_cited_by_its_own_locator_or_that_of_its_entry() {
+    let tried = forms(&reaction("Ti(cr) + O2(g) -> TiO2(l)", "2000 K"));
+    let document = tried.ran.json();
+    let values = document["values-used"]
+        .as_array()
+        .cloned()
+        .unwrap_or_default();
+    let transitions = values
+        .iter()
+        .filter(|v| v["quantity"] == "transition-enthalpy");
+    let locators: Vec<&Value> = transitions.map(|v| &v["locator"]).collect();
+    assert_eq!(locators, ["sheet 1 (invented)", "sheet 2 (invented)"]);
 }
 
 #[test]

@@ -113,22 +113,20 @@ pub fn adjust(
         .collect();
     let inverse = invert(&s, &misclosures)?;
     let solved = inverse.times(&misclosures);
-    let variation = closures
-        .iter()
-        .map(|n| dot(n, &times(covariance, &multipliers.particular)));
-    let shift = inverse.times(&variation.collect::<Vec<_>>());
-    let less = |step: usize| -> Exact { column_dot(closures, step, &shift) };
+    let varied = times(covariance, &multipliers.particular);
+    let variation: Vec<Exact> = closures.iter().map(|n| dot(n, &varied)).collect();
+    let shift = inverse.times(&variation);
     let weights = multipliers.particular.iter().enumerate();
     let chi_square = to_f64(&dot(&misclosures, &solved));
     let degrees_of_freedom = inverse.kept.len();
-    let standard: Vec<f64> = (0..heats.len())
-        .map(|step| libm::sqrt(to_f64(&covariance[step][step])))
-        .collect();
+    let standard = standard_uncertainties(covariance);
     Ok(Adjustment {
         correlated: correlated(covariance, &standard),
         standard,
-        weights: weights.map(|(step, x)| x - less(step)).collect(),
-        misclosure_uncertainty: (0..s.len()).map(|k| libm::sqrt(to_f64(&s[k][k]))).collect(),
+        weights: weights
+            .map(|(step, x)| x - column_dot(closures, step, &shift))
+            .collect(),
+        misclosure_uncertainty: standard_uncertainties(&s),
         residuals: (0..heats.len())
             .map(|step| column_dot(&spread, step, &solved))
             .collect(),
@@ -136,12 +134,7 @@ pub fn adjust(
             .map(|step| normalised(closures, step, &solved, &inverse))
             .collect(),
         redundancy: (0..heats.len())
-            .map(|step| {
-                to_f64(&dot(
-                    &column(&spread, step),
-                    &inverse.times(&column(closures, step)),
-                ))
-            })
+            .map(|step| redundancy(closures, &spread, step, &inverse))
             .collect(),
         probability: exceedance(chi_square, degrees_of_freedom),
         correlates: solved.iter().map(to_f64).collect(),
@@ -149,6 +142,22 @@ pub fn adjust(
         chi_square,
         degrees_of_freedom,
     })
+}
+
+/// Which part of an error in a heat shows in its residual: the diagonal of VN·S⁻¹Nᵀ.
+fn redundancy(
+    closures: &[Vec<Exact>],
+    spread: &[Vec<Exact>],
+    step: usize,
+    inverse: &Inverse,
+) -> f64 {
+    let shows = inverse.times(&column(closures, step));
+    to_f64(&dot(&column(spread, step), &shows))
+}
+
+fn standard_uncertainties(covariance: &[Vec<Exact>]) -> Vec<f64> {
+    let variances = covariance.iter().enumerate().map(|(at, row)| &row[at]);
+    variances.map(|v| libm::sqrt(to_f64(v))).collect()
 }
 
 fn correlated(covariance: &[Vec<Exact>], standard: &[f64]) -> Vec<(usize, usize, f64)> {

@@ -72,42 +72,25 @@ pub struct Mixture {
 /// Limits: complete combustion to CO2, H2O, N2 and SO2; ideal mixing; no water stays vapour in the
 /// gross value, whatever its partial pressure.
 pub(super) fn mixture(problem: &Problem, fuel: &ProblemHeatingValue) -> Option<Mixture> {
+    let each = &fuel.components;
     let fractions = fractions(problem, fuel);
-    let masses: Vec<Worked> = fuel
-        .components
-        .iter()
-        .map(|component| molar_mass(problem, component))
-        .collect();
+    let masses: Vec<Worked> = each.iter().map(|c| molar_mass(problem, c)).collect();
     let amounts = amounts(fuel, &fractions, &masses)?;
-    let combustions: Vec<Option<HeatAt>> = fuel
-        .components
-        .iter()
-        .map(|component| combustion(problem, component))
-        .collect();
-    let each = fuel.components.iter().zip(&combustions);
-    let gross: Vec<Worked> = each
-        .map(|(component, combustion)| {
-            component_gross(problem, fuel, component, combustion.as_ref())
-        })
+    let combustions: Vec<Option<HeatAt>> = each.iter().map(|c| combustion(problem, c)).collect();
+    let gross = each.iter().zip(&combustions);
+    let gross: Vec<Worked> = gross
+        .map(|(component, heat)| component_gross(problem, fuel, component, heat.as_ref()))
         .collect::<Option<_>>()?;
     let total = whole(Worked::sum(&amounts));
     let mass = whole(pairs(&amounts, &masses));
     let heat = pairs(&amounts, &gross);
-    let half = Exact::new(1.into(), 2.into());
-    let hydrogen = fuel.components.iter().zip(&amounts);
-    let water: Vec<Worked> = hydrogen
-        .map(|(component, amount)| amount.times_exact(&(&component.combustion.hydrogen * &half)))
-        .collect();
-    let water = Worked::sum(&water);
+    let water = water(fuel, &amounts);
     let vaporisation = vaporisation(problem, fuel);
     let latent = match &vaporisation {
         Some(vaporisation) => Some(latent(problem, fuel, vaporisation)?),
         None => None,
     };
-    let net_heat = match &latent {
-        Some(latent) => minus(&heat, &water.times(latent)),
-        None => heat.clone(),
-    };
+    let net_heat = net_heat(&heat, &water, latent.as_ref());
     let components = amounts.iter().zip(combustions).zip(gross).zip(masses);
     let components = components.zip(fractions).map(|(worked, fraction)| {
         let (((amount, combustion), gross), molar_mass) = worked;
@@ -269,6 +252,24 @@ fn component_gross(
 /// R·T at the combustion temperature, J/mol.
 fn thermal(problem: &Problem, fuel: &ProblemHeatingValue) -> Option<Worked> {
     Some(value(problem, fuel.gas_constant?).times_exact(&fuel.kelvin))
+}
+
+/// The water formed or held, half the hydrogen atoms of all components.
+fn water(fuel: &ProblemHeatingValue, amounts: &[Worked]) -> Worked {
+    let half = Exact::new(1.into(), 2.into());
+    let each = fuel.components.iter().zip(amounts);
+    let each = each.map(|(component, amount)| {
+        let molecules = &component.combustion.hydrogen * &half;
+        amount.times_exact(&molecules)
+    });
+    Worked::sum(&each.collect::<Vec<_>>())
+}
+
+fn net_heat(gross: &Worked, water: &Worked, latent: Option<&Worked>) -> Worked {
+    match latent {
+        Some(latent) => minus(gross, &water.times(latent)),
+        None => gross.clone(),
+    }
 }
 
 /// H(H2O, g) − H(H2O, l)

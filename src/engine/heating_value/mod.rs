@@ -52,8 +52,8 @@ pub(super) fn work_heating_value(
             let outcome = Outcome::new(problem, options, id, worked, unit).given_off();
             working.push(outcome);
         }
-        let findings = findings(fuel, volume.as_ref(), options);
-        working.findings.extend(findings);
+        let finding = finding(fuel, volume.as_ref(), options);
+        working.findings.extend(finding);
     }
     working.heating_values.push(HeatingValueWorking {
         heating_value: index,
@@ -96,52 +96,48 @@ fn results(
 /// Pressures between which summation factors serve, Pa (ISO 6976:2016, clause 4, from memory).
 const SUMMATION_RANGE: [i64; 2] = [90_000, 110_000];
 
-fn findings(
+fn finding(
     fuel: &ProblemHeatingValue,
     volume: Option<&VolumeWorking>,
     options: &WorkOptions<'_>,
-) -> Vec<Finding> {
-    let Some(metering) = &fuel.metering else {
-        return Vec::new();
-    };
-    let finding = |(severity, code, message): (Severity, FindingCode, String)| Finding {
+) -> Option<Finding> {
+    let metering = fuel.metering.as_ref()?;
+    let (severity, code, what) = said_of_volume(metering, volume)?;
+    Some(Finding {
         severity,
         code,
-        message,
+        message: format!("{}: {what}", fuel.id),
         at: options.text.place(metering.span.start),
-    };
-    let said = match (&metering.compression, volume) {
+    })
+}
+
+/// What has to be said of results per volume.
+fn said_of_volume(
+    metering: &ProblemMetering,
+    volume: Option<&VolumeWorking>,
+) -> Option<(Severity, FindingCode, &'static str)> {
+    match (&metering.compression, volume) {
         (Some(_), None) => Some((
             Severity::Stop,
             FindingCode::CompressionFactor,
-            format!(
-                "{}: the compression factor at the metering conditions is not above zero. Check \
-                 the data on it and the pressure. No result per volume is given.",
-                fuel.id
-            ),
+            "the compression factor at the metering conditions is not above zero. Check the data \
+             on it and the pressure. No result per volume is given.",
         )),
         (None, _) => Some((
             Severity::Note,
             FindingCode::IdealGasVolume,
-            format!(
-                "{}: results per volume are those of the ideal gas. A real gas holds more in the \
-                 same volume, natural gas about 0.2 to 0.4 % at 15 °C and 1 atm (common practice, \
-                 no source): give a compression factor in `metering`.",
-                fuel.id
-            ),
+            "results per volume are those of the ideal gas. A real gas holds more in the same \
+             volume, natural gas about 0.2 to 0.4 % at 15 °C and 1 atm (common practice, no \
+             source): give a compression factor in `metering`.",
         )),
         (Some(ProblemCompression::Summation(_)), Some(_)) if outside(metering) => Some((
             Severity::Caution,
             FindingCode::CompressionFactor,
-            format!(
-                "{}: summation factors serve between about 90 and 110 kPa; the metering pressure \
-                 lies outside. Give a compression factor for it.",
-                fuel.id
-            ),
+            "summation factors serve between about 90 and 110 kPa; the metering pressure lies \
+             outside. Give a compression factor for it.",
         )),
         _ => None,
-    };
-    said.map(finding).into_iter().collect()
+    }
 }
 
 fn outside(metering: &ProblemMetering) -> bool {

@@ -180,7 +180,7 @@ fn the_uncertainty_of_a_given_heat_capacity_counts_with_the_way() {
             .standard
             .expect("stated values");
         let of_formation = 0.1 * 0.1 * 3.0 + 0.02 * 0.02;
-        let expected = f64::sqrt(of_formation + 0.020925 * 0.020925);
+        let expected = libm::sqrt(of_formation + 0.020925 * 0.020925);
         assert!((combined - expected).abs() < 1e-12, "{combined} {expected}");
     }
 }
