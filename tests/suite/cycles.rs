@@ -245,6 +245,8 @@ fn inflation_is_asked_for_or_not_there() {
     assert_eq!(result.stated.value_text, "-602");
     let message = said(&calculation, "cycle-inflated", Severity::Caution);
     assert!(message.contains("5.66"), "{message}");
+    let message = said(&calculation, "cycle-disagrees", Severity::Caution);
+    assert!(!message.contains("no uncertainty inflated"), "{message}");
     // A result that rests on it is told that the inflation stays behind.
     let on = "[cycles.e]\ntarget = \"4 C(g) -> 2 C2(g)\"\nsteps = [{ heat = \"c.heat\" }]\n";
     let calculation = worked_cycle(&(tables + on));

@@ -253,9 +253,13 @@ impl Say<'_> {
     }
 
     fn disagree(&self, adjustment: &Adjustment) -> Finding {
+        let inflated = match self.cycle.inflate {
+            true => "",
+            false => " and no uncertainty inflated for that",
+        };
         let message = format!(
             "its determinations do not agree within their uncertainties: {}. {} Nothing was \
-             dropped and no uncertainty inflated for that: look for the cause in the reports.",
+             dropped{inflated}: look for the cause in the reports.",
             global_test(adjustment),
             local_test(self.cycle, adjustment)
         );
