@@ -109,6 +109,15 @@ pub(super) fn read_temperature(
         refuse(reader, text, &above);
         return None;
     }
+    if matches!(given, Given::Stated(_)) && quantity.uncertainty.is_some() {
+        let certain = Wanted {
+            expected: "a temperature without an uncertainty: it says what is asked",
+            advice: "leave it out, or write an input with its tolerance and give the id of that",
+            ..wanted
+        };
+        refuse(reader, text, &certain);
+        return None;
+    }
     Some(given)
 }
 

@@ -8,11 +8,14 @@ use num_traits::Signed;
 
 use crate::document::{Table, filled, is_id, one_of, quantity, value_fault};
 use crate::notation::{Formula, Phase, PhaseLabel};
-use crate::quantity::{Dimension, Quantity, UnitKind};
+use crate::quantity::{Dimension, Exact, Quantity, UnitKind};
 
 use super::given::{Given, Wanted, read_given};
 use super::ids::Ids;
 use super::model::Input;
+
+/// No substance has as much in J/(mol K) or J/(kg K); sources are held to the same.
+const MOST: i64 = 100_000;
 
 /// A heat capacity that the case states.
 #[derive(Clone, Debug)]
@@ -144,6 +147,16 @@ impl HeatCapacityReader<'_> {
                 format!("\"{}\"", text.value),
                 "a heat capacity above zero",
                 "only a partial molar heat capacity in solution can be below zero",
+            );
+            return None;
+        }
+        if value.value_in_si() >= Exact::from_integer(MOST.into()) {
+            value_fault(
+                reader,
+                &text.span,
+                format!("\"{}\"", text.value),
+                "a heat capacity that a substance can have: below 1e5 J/(mol K) or J/(kg K)",
+                "compare the number, its exponent and its unit with the source",
             );
             return None;
         }
