@@ -77,10 +77,12 @@ fn parts(problem: &Problem, path: &EnthalpyPath) -> (Worked, Vec<Worked>) {
 fn start_enthalpy(problem: &Problem, path: &EnthalpyPath) -> Worked {
     match path.start {
         Start::Printed { value } => Worked::printed(problem, value, 1),
-        Start::Function { value } => {
+        Start::Function { value, constant } => {
             let (function, r) = function(problem, value);
             let mut form = LinearForm::default();
-            // The integration constant is as uncertain as the function from 298.15 K on.
+            // The constant is what the formation enthalpy would be; an error of the heat capacity
+            // counts from 298.15 K on.
+            form.add_scaled(constant, &Real::Exact(r.clone()));
             let way = &path.kelvin - crate::source::reference_kelvin();
             form.add_scaled(value, &Real::Exact(way));
             Worked {

@@ -20,7 +20,7 @@ pub(super) fn path_steps(problem: &Problem, term: &HeatTerm) -> Vec<Step> {
         return steps;
     }
     let name = Rich::from(substance.species.pieces());
-    if let Start::Function { value } = path.start {
+    if let Start::Function { value, constant } = path.start {
         let at = [None, Some(&path.kelvin)];
         steps.push(Step::Text {
             text: name
@@ -30,9 +30,11 @@ pub(super) fn path_steps(problem: &Problem, term: &HeatTerm) -> Vec<Step> {
                 .and(format!(
                     " carries its integration constant, so it gives the enthalpy at {} K on the \
                      scale of formation enthalpies itself; changes of phase at lower temperatures \
-                     are contained in that constant.",
+                     are contained in that constant, value ",
                     kelvin(&path.kelvin)
-                )),
+                ))
+                .run(Run::ValueUsed(constant + 1))
+                .and("."),
         });
         let said = name
             .clone()

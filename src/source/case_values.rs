@@ -8,6 +8,9 @@ use super::problem::{ValueKind, ValueUsed};
 use super::resolve::Resolver;
 use super::standing::Standing;
 
+/// What stands in a locator where the case names no source.
+pub const NO_SOURCE: &str = "no source stated";
+
 /// A value that a case states where it is used.
 pub(super) struct CaseValue<'a> {
     pub(super) kind: ValueKind,
@@ -32,7 +35,7 @@ impl Resolver<'_> {
             Some(tolerance) => value.clone().with_tolerance(tolerance).unwrap_or(value),
             None => value,
         };
-        let source = input.source.as_deref().unwrap_or("no source stated");
+        let source = input.source.as_deref().unwrap_or(NO_SOURCE);
         let span = input.value.span.clone();
         Some(self.case_value(CaseValue {
             kind: ValueKind::Input,

@@ -78,6 +78,7 @@ fn look_up(
     span: &Span,
 ) -> Option<Vec<Held>> {
     let hill = wanted.species.formula.hill();
+    resolver.named_formulas.insert(hill.clone());
     let mut search = Search::default();
     for source in 0..resolver.sources.len() {
         let entries = resolver.sources[source].of_composition(&hill);
@@ -91,7 +92,7 @@ fn look_up(
         match matched {
             Err(why) => {
                 let id = resolver.sources[source].id();
-                search.no_form.get_or_insert(format!("{id}: {why}"));
+                search.no_form.push(format!("{id}: {why}"));
             }
             Ok(Match::None) => {}
             Ok(Match::Several(several)) => {
@@ -117,8 +118,8 @@ struct Search {
     found: Vec<Held>,
     /// The last entry that matches and leads to no enthalpy, with its source.
     without_value: Option<(usize, Entry)>,
-    /// Why the first source that knows the substance has no stable form of it.
-    no_form: Option<String>,
+    /// Why each source that knows the substance has no stable form of it.
+    no_form: Vec<String>,
 }
 
 impl Search {
@@ -127,8 +128,8 @@ impl Search {
         if !self.found.is_empty() {
             return Some(self.found);
         }
-        if let Some(why) = self.no_form {
-            let finding = no_stable_form(resolver, wanted, &why, span);
+        if !self.no_form.is_empty() {
+            let finding = no_stable_form(resolver, wanted, &self.no_form.join(". "), span);
             resolver.say(finding);
             return None;
         }

@@ -25,12 +25,14 @@ impl Resolver<'_> {
             .sources
             .iter()
             .filter(|source| !source.correlations.is_empty());
-        let ids: Vec<&str> = with_any.map(Source::id).collect();
-        let span = self
-            .case
-            .consult
-            .first()
-            .map_or(0..0, |name| name.span.clone());
+        let mut ids: Vec<&str> = with_any.map(Source::id).collect();
+        let cycles = self.case.cycles.values();
+        let cycles = cycles.filter(|cycle| !cycle.correlations.is_empty());
+        let correlated: Vec<_> = cycles.map(|cycle| &cycle.id).collect();
+        ids.extend(correlated.iter().map(|id| id.value.as_str()));
+        let cycle = correlated.first().map(|id| id.span.clone());
+        let consult = self.case.consult.first().map(|name| name.span.clone());
+        let span = cycle.or(consult).unwrap_or(0..0);
         self.faults.push(Fault::new(
             FaultCode::Source,
             self.text,

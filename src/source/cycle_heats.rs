@@ -8,7 +8,7 @@ use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
 use crate::notation::PhaseLabel;
 use crate::quantity::{Dimension, Exact, Quantity};
 
-use super::case_values::CaseValue;
+use super::case_values::{CaseValue, NO_SOURCE};
 use super::cycle::{Basis, Bomb, CycleSpecies};
 use super::path::reference_kelvin;
 use super::problem::ValueKind;
@@ -49,7 +49,7 @@ impl Resolver<'_> {
         let from = [&step.source, &step.locator];
         let from: Vec<&str> = from.into_iter().flatten().map(String::as_str).collect();
         let from = match from.is_empty() {
-            true => "no source stated".to_string(),
+            true => NO_SOURCE.to_string(),
             false => from.join(", "),
         };
         let measured = match step.measured {

@@ -20,6 +20,7 @@ pub fn attachment_name(id: &str) -> String {
 /// names the SHA-256 of the whole file.
 pub fn excerpts(problem: &Problem) -> Vec<(String, String)> {
     let mut formulas = unusual_states(problem);
+    formulas.extend(problem.named_formulas.iter().cloned());
     formulas.extend(problem.substances.iter().map(|s| s.species.formula.hill()));
     let burnt = problem
         .values

@@ -11,7 +11,7 @@ use crate::quantity::{
     order_of_magnitude, round_to_place, terminating_decimal,
 };
 
-use super::case_values::CaseValue;
+use super::case_values::{CaseValue, NO_SOURCE};
 use super::heat_capacity::{Form, HeatCapacity};
 use super::path::reference_kelvin;
 use super::path_values::zero_error;
@@ -167,7 +167,7 @@ impl Resolver<'_> {
         let named = &self.substances[stated.substance];
         let (label, species) = (named.label.clone(), named.species.clone());
         let which = stated.suffix();
-        let source = stated.given.source.as_deref().unwrap_or("no source stated");
+        let source = stated.given.source.as_deref().unwrap_or(NO_SOURCE);
         let index = self.case_value(CaseValue {
             kind: ValueKind::HeatCapacity,
             locator: format!("substances.{label}, heat-capacity{which}; {source}"),

@@ -7,6 +7,7 @@ use crate::finding::{FindingCode, Severity, Span};
 use crate::quantity::{Exact, exact_text, two_digits};
 
 use super::constant_findings::LONG;
+use super::heat_capacity::lenience;
 use super::kopp::KoppEstimate;
 use super::outside_range::Allowance;
 use super::path::{Material, reference_kelvin};
@@ -28,6 +29,9 @@ impl Resolver<'_> {
         };
         let [low, high] = range.each_ref().map(|bound| bound.value_in_si());
         let ends = [reference_kelvin(), kelvin.clone()];
+        if self.begins_just_above(substance, &low, &high, kelvin, span) {
+            return true;
+        }
         let outside = |at: &&Exact| **at < low || **at > high;
         let Some(beyond) = ends
             .iter()
@@ -48,6 +52,30 @@ impl Resolver<'_> {
         );
         self.say_of(severity, FindingCode::OutsideRange, message, span);
         allowed.is_some()
+    }
+
+    /// A range that begins up to 2 K above 298.15 K and reaches the temperature, as for the functions
+    /// of sources.
+    fn begins_just_above(
+        &mut self,
+        substance: usize,
+        low: &Exact,
+        high: &Exact,
+        kelvin: &Exact,
+        span: &Span,
+    ) -> bool {
+        let late = low - reference_kelvin();
+        let serves = late.is_positive() && late <= lenience() && kelvin >= low && kelvin <= high;
+        if serves {
+            let message = format!(
+                "{}: the heat capacity that the case gives begins at {} K and serves from 298.15 K \
+                 here.",
+                self.substances[substance].label,
+                exact_text(low)
+            );
+            self.say_of(Severity::Note, FindingCode::RangeStart, message, span);
+        }
+        serves
     }
 
     /// The checks on a path along what the case gives.

@@ -71,6 +71,7 @@ mod vapour;
 mod walk;
 
 pub use builtin::{BUILT_IN, KOPP, built_in};
+pub use case_values::NO_SOURCE;
 pub use combustion_equation::Combustion;
 pub use consult::{Consultation, SourceFiles, consult};
 pub use cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};

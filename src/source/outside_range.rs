@@ -7,7 +7,7 @@ use crate::finding::{FindingCode, Severity, Span};
 use crate::quantity::{Exact, exact_text};
 
 use super::heat_capacity::HeatCapacity;
-use super::path::Candidate;
+use super::path::{Candidate, reference_kelvin};
 use super::resolve::Resolver;
 use super::walk::distance;
 
@@ -18,6 +18,8 @@ pub(super) type Allowance = String;
 pub(super) struct Outside<'a> {
     pub(super) candidate: &'a Candidate,
     pub(super) kelvin: &'a Exact,
+    /// Whether the way begins at 298.15 K, with a printed formation enthalpy.
+    pub(super) printed: bool,
     /// How far they lead, K.
     pub(super) reached: Option<Exact>,
     pub(super) allowed: Option<Allowance>,
@@ -51,15 +53,33 @@ impl Outside<'_> {
     /// Where the temperature lies, or where the ranges end on the way to it.
     fn where_to(&self) -> String {
         let kelvin = exact_text(self.kelvin);
-        let beyond = distance(&self.candidate.entry.heat_capacity, self.kelvin);
-        match (beyond.is_positive(), &self.reached) {
-            (true, _) => format!("{kelvin} K is {} K outside them", exact_text(&beyond)),
-            (false, Some(reached)) => format!(
+        let ends = self.ends_outside();
+        match (ends.is_empty(), &self.reached) {
+            (false, _) => ends.join(", and "),
+            (true, Some(reached)) => format!(
                 "on the way from 298.15 K to {kelvin} K they end at {} K",
                 exact_text(reached)
             ),
-            (false, None) => format!("they do not lead to {kelvin} K"),
+            (true, None) => format!("they do not lead to {kelvin} K"),
         }
+    }
+
+    /// Which ends of the way lie outside all functions, and how far.
+    fn ends_outside(&self) -> Vec<String> {
+        let functions = &self.candidate.entry.heat_capacity;
+        let reference = reference_kelvin();
+        let begins = self.printed && !functions.iter().any(|f| f.serves(&reference));
+        let ends = [begins.then_some(&reference), Some(self.kelvin)];
+        let outside = |at: &Exact| {
+            let beyond = distance(functions, at);
+            let text = format!(
+                "{} K is {} K outside them",
+                exact_text(at),
+                exact_text(&beyond)
+            );
+            beyond.is_positive().then_some(text)
+        };
+        ends.into_iter().flatten().filter_map(outside).collect()
     }
 
     fn consequence(&self, label: &str) -> (Severity, String) {
@@ -70,7 +90,10 @@ impl Outside<'_> {
             ),
             (Some(_), false) => (
                 Severity::Stop,
-                "A table cannot be followed beyond its points, nor a gap be crossed.".to_string(),
+                "The case allows it, and still nothing leads there: a gap between ranges is not \
+                 crossed, nor is a form followed beyond them that has no formation enthalpy of its \
+                 own. Consult a source that reaches."
+                    .to_string(),
             ),
             (None, _) => (
                 Severity::Stop,

@@ -14,6 +14,7 @@ use super::model::Entry;
 use super::problem::{EnthalpyPath, Leg, Start};
 use super::resolve::Resolver;
 use super::route::{Route, RouteStart, RouteStep};
+use super::stable::is_stable;
 use super::walk::Stretch;
 
 /// The temperature at which formation enthalpies are printed, 298.15 K.
@@ -98,7 +99,12 @@ impl Resolver<'_> {
         let hill = wanted.species.formula.hill();
         for source in (0..self.consulted).filter(|source| *source != own.source) {
             let entries = self.sources[source].of_composition(&hill);
-            if let Match::One(entry) = pick(&wanted, &entries) {
+            let found = match pick(&wanted, &entries) {
+                // What the serving source writes for a form may be several in another one.
+                Match::Several(_) if !is_stable(&own.wanted) => pick(&own.wanted, &entries),
+                found => found,
+            };
+            if let Match::One(entry) = found {
                 let entry = Rc::new(*entry);
                 candidates.push(Candidate { source, entry });
             }
@@ -143,6 +149,7 @@ impl Resolver<'_> {
             },
             RouteStart::Function(candidate, index) => Start::Function {
                 value: self.function_value(candidate, *index, span),
+                constant: self.integration_constant(candidate, *index, span)?,
             },
         })
     }

@@ -83,15 +83,21 @@ impl Resolver<'_> {
         kelvin: &Exact,
         span: &Span,
     ) {
-        let own = &material.candidates[0];
-        let Some(instead) = stable_instead(&material.forms, &own.entry, kelvin) else {
+        // The source of the formation enthalpy first, then those that have the very form.
+        let said = material.candidates.iter().find_map(|candidate| {
+            let hill = candidate.entry.species()?.formula.hill();
+            let forms = self.sources[candidate.source].of_composition(&hill);
+            let instead = stable_instead(&forms, &candidate.entry, kelvin)?;
+            Some((candidate.source, instead))
+        });
+        let Some((source, instead)) = said else {
             return;
         };
         let message = format!(
             "{}: by {} {instead}. It is worked as stated; `(stable)` in place of the phase would \
              take the form that the source gives there.",
             self.substances[substance].label,
-            self.sources[own.source].id(),
+            self.sources[source].id(),
         );
         self.say_of(Severity::Caution, FindingCode::UnstableForm, message, span);
     }

@@ -39,6 +39,30 @@ impl Resolver<'_> {
         self.enter_value(value, &key)
     }
 
+    /// The integration constant of a function on the formation scale: a6 or b1 of H/R, in K. It
+    /// takes the place of the formation enthalpy, and no fit states its uncertainty.
+    pub(super) fn integration_constant(
+        &mut self,
+        candidate: &Candidate,
+        index: usize,
+        span: &Span,
+    ) -> Option<usize> {
+        let Candidate { source, entry } = candidate;
+        let function = &entry.heat_capacity[index];
+        let coefficient = function
+            .coefficients
+            .get(function.form.integration_constant()?)?;
+        let mut printed = Quantity::parse(&format!("{} K", coefficient.printed())).ok()?;
+        printed.ambiguous_zeros = false;
+        let head = &self.sources[*source].head;
+        let kind = ValueKind::IntegrationConstant;
+        let value = ValueUsed {
+            significance: Significance::Unlimited,
+            ..value_of(*source, head, kind, entry, printed, span)
+        };
+        Some(self.enter_value(value, &format!("constant {index}")))
+    }
+
     /// The heat of a transition that an entry lists. What it does not say itself of its place, or
     /// in a note, the entry says.
     pub(super) fn transition_value(

@@ -1,5 +1,7 @@
 //! The problem: a case resolved against its sources, ready to be worked.
 
+use std::collections::BTreeSet;
+
 use crate::finding::{Finding, Span};
 use crate::notation::{Equation, Species};
 use crate::quantity::{Correlations, Decimal, Exact, InputUncertainty, Quantity, Significance};
@@ -35,6 +37,8 @@ pub struct Problem {
     /// Between values used, by their index.
     pub correlations: Correlations,
     pub reference_states: ReferenceStates,
+    /// The formulas that the case names, also of substances that no entry serves for (Hill order).
+    pub named_formulas: BTreeSet<String>,
     pub findings: Vec<Finding>,
 }
 
@@ -84,6 +88,7 @@ pub enum ValueKind {
     FormationEnthalpy,
     CombustionEnthalpy,
     HeatCapacity,
+    IntegrationConstant,
     TransitionEnthalpy,
     RelativeEnthalpy,
     AtomicWeight,
@@ -100,6 +105,7 @@ impl ValueKind {
             ValueKind::FormationEnthalpy => "formation-enthalpy",
             ValueKind::CombustionEnthalpy => "combustion-enthalpy",
             ValueKind::HeatCapacity => "heat-capacity",
+            ValueKind::IntegrationConstant => "integration-constant",
             ValueKind::TransitionEnthalpy => "transition-enthalpy",
             ValueKind::RelativeEnthalpy => "relative-enthalpy",
             ValueKind::AtomicWeight => "atomic-weight",
@@ -186,9 +192,10 @@ impl EnthalpyPath {
     /// The values that it rests on, in their order on the way, each once.
     pub fn values(&self) -> Vec<usize> {
         let start = match self.start {
-            Start::Printed { value } | Start::Function { value } => value,
+            Start::Printed { value } => vec![value],
+            Start::Function { value, constant } => vec![value, constant],
         };
-        let mut values = vec![start];
+        let mut values = start;
         for leg in &self.legs {
             match leg {
                 Leg::Heating { value, .. }
@@ -220,7 +227,7 @@ pub enum Start {
     /// A printed formation enthalpy, at 298.15 K.
     Printed { value: usize },
     /// A function that carries its integration constant, at the temperature of the path.
-    Function { value: usize },
+    Function { value: usize, constant: usize },
 }
 
 /// One stretch of a path; indices are those of values used, temperatures in K.

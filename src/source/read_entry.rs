@@ -1,7 +1,8 @@
 //! Reading one entry of a source file.
 
-use crate::document::{Table, cas_number, number, quantity, species, value_fault};
-use crate::notation::{Element, PhaseLabel};
+use crate::document::{Reader, Table, cas_number, number, quantity, species, value_fault};
+use crate::finding::Located;
+use crate::notation::{Element, PhaseLabel, Species};
 use crate::quantity::{Dimension, Quantity, Unit};
 
 use super::model::{Entry, SourceHead, Subject, Transition};
@@ -58,7 +59,6 @@ pub(super) fn read_entry(table: &Table<'_, '_>, rules: &EntryRules) -> Option<En
     let aqueous = is_aqueous(&subject);
     let also = table.strings("also");
     Some(Entry {
-        subject,
         also: also
             .iter()
             .filter_map(|text| species(reader, text))
@@ -83,8 +83,9 @@ pub(super) fn read_entry(table: &Table<'_, '_>, rules: &EntryRules) -> Option<En
         transitions: table
             .tables("transitions")
             .iter()
-            .filter_map(read_transition)
+            .filter_map(|table| read_transition(table, &subject))
             .collect(),
+        subject,
     })
 }
 
@@ -122,7 +123,26 @@ fn read_enthalpy(table: &Table<'_, '_>, key: &str, rules: &EntryRules) -> Option
     })
 }
 
-fn read_transition(table: &Table<'_, '_>) -> Option<Transition> {
+/// Another form of the composition of an entry.
+fn read_form(reader: &Reader<'_>, text: &Located<String>, subject: &Subject) -> Option<Species> {
+    let to = species(reader, text)?;
+    let another = match subject {
+        Subject::Species(from) => *from != to && from.formula.hill() == to.formula.hill(),
+        Subject::Symbol(_) => true,
+    };
+    if !another {
+        value_fault(
+            reader,
+            &text.span,
+            format!("a transition to {to}"),
+            "another form of the same composition",
+            "name the form that it turns into: to = \"H2O(g)\"",
+        );
+    }
+    another.then_some(to)
+}
+
+fn read_transition(table: &Table<'_, '_>, subject: &Subject) -> Option<Transition> {
     table.only(&["to", "temperature", "enthalpy", "locator", "note"]);
     let reader = table.reader();
     let advice = "a transition names the form it leads to, its temperature and its heat";
@@ -130,7 +150,7 @@ fn read_transition(table: &Table<'_, '_>) -> Option<Transition> {
     let temperature = table.required_string("temperature", advice);
     let enthalpy = table.required_string("enthalpy", advice);
     let molar = Dimension::ENERGY.over(Dimension::AMOUNT);
-    let to = to.and_then(|text| species(reader, &text));
+    let to = to.and_then(|text| read_form(reader, &text, subject));
     let temperature = temperature.and_then(|text| read_temperature(reader, &text));
     let enthalpy = enthalpy.and_then(|text| measured(reader, &text, molar));
     let owned = |key| table.string(key).map(|text| text.value);

@@ -132,6 +132,17 @@ fn read_coverage(reader: &Reader<'_>, text: &Located<String>) -> Coverage {
 /// R in J/(mol K). The oldest tables that give joules have 8.3136 (from memory), so the bounds leave
 /// room for every one that was in use and for none in another unit.
 fn read_gas_constant(reader: &Reader<'_>, text: &Located<String>) -> Option<Decimal> {
+    let number = text.value.split(' ').next().unwrap_or_default();
+    if number != text.value && Decimal::parse(number).is_ok() {
+        value_fault(
+            reader,
+            &text.span,
+            format!("\"{}\"", text.value),
+            "a gas constant in J/(mol K), as a number alone",
+            format!("write \"{number}\"; convert it where it is in another unit"),
+        );
+        return None;
+    }
     let read = read_decimal(reader, text)?;
     let bounds = [830, 833].map(|hundredths: i32| Exact::new(hundredths.into(), 100.into()));
     if (&bounds[0]..=&bounds[1]).contains(&&read.value()) {

@@ -82,6 +82,8 @@ pub(super) struct Resolver<'a> {
     pub(super) paths: Vec<EnthalpyPath>,
     pub(super) bounded: Vec<BoundedPath>,
     pub(super) known_paths: BTreeMap<(usize, Exact), Option<usize>>,
+    /// The formulas of substances that were looked for in the sources, found or not.
+    pub(super) named_formulas: BTreeSet<String>,
     pub(super) values: Vec<ValueUsed>,
     /// Values that were entered, by source, kind and what tells them apart.
     pub(super) entered: BTreeMap<(usize, &'static str, String), usize>,
@@ -123,6 +125,7 @@ impl<'a> Resolver<'a> {
             paths: Vec::new(),
             bounded: Vec::new(),
             known_paths: BTreeMap::new(),
+            named_formulas: BTreeSet::new(),
             entered: BTreeMap::new(),
             said: BTreeSet::new(),
             stated_correlations: Correlations::default(),
@@ -193,6 +196,7 @@ impl<'a> Resolver<'a> {
             correlations,
             findings: self.findings,
             sources: self.sources,
+            named_formulas: self.named_formulas,
         }
     }
 }

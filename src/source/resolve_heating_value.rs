@@ -146,7 +146,7 @@ impl Resolver<'_> {
 
 /// Where a value of a fuel stands, and what it was taken from.
 pub(super) fn located(fuel: &HeatingValue, key: &str, source: Option<&str>) -> String {
-    let source = source.unwrap_or("no source stated");
+    let source = source.unwrap_or(super::case_values::NO_SOURCE);
     format!("heating-values.{}, {key}; {source}", fuel.id.value)
 }
 

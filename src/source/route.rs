@@ -81,12 +81,14 @@ impl Resolver<'_> {
         short: Option<(usize, Short)>,
         span: &Span,
     ) -> Option<Route> {
-        // Without a printed formation enthalpy there is nothing to start from at 298.15 K.
         let allowed = self.extrapolation_allowed(substance);
-        let allowed = allowed.filter(|_| self.substances[substance].value.is_some());
-        let route = match allowed {
-            Some(_) => along_functions(candidate, kelvin, Reach::Extended).ok(),
-            None => None,
+        let printed = self.substances[substance].value.is_some();
+        let own = candidate.source == self.serving[substance].source;
+        let route = match (&allowed, printed) {
+            (None, _) => None,
+            (Some(_), true) => along_functions(candidate, kelvin, Reach::Extended).ok(),
+            (Some(_), false) if own => on_own_scale(candidate, kelvin, Reach::Extended),
+            (Some(_), false) => None,
         };
         let reached = short.map(|(_, short)| short.reached);
         self.say_outside(
@@ -94,6 +96,7 @@ impl Resolver<'_> {
             &Outside {
                 candidate,
                 kelvin,
+                printed,
                 reached,
                 allowed,
                 worked: route.is_some(),
@@ -110,16 +113,19 @@ fn own_route(own: &Candidate, forms: &[Rc<Entry>], printed: bool, kelvin: &Exact
     if printed && let Ok(route) = along_functions(own, kelvin, Reach::Stated) {
         return Some(route);
     }
-    let functions = &own.entry.heat_capacity;
-    let direct = covering(functions, kelvin, Reach::Stated);
-    if let Some(index) = direct.filter(|index| on_formation_scale(functions[*index].form)) {
-        return Some(Route {
-            start: RouteStart::Function(own.clone(), index),
-            steps: Vec::new(),
-            end: Some((own.clone(), index)),
-        });
-    }
-    through_transitions(own, forms, kelvin)
+    let direct = on_own_scale(own, kelvin, Reach::Stated);
+    direct.or_else(|| through_transitions(own, forms, kelvin))
+}
+
+/// By a function that gives the enthalpy on the formation scale of its source, and needs no start.
+fn on_own_scale(candidate: &Candidate, kelvin: &Exact, reach: Reach) -> Option<Route> {
+    let functions = &candidate.entry.heat_capacity;
+    let index = covering(functions, kelvin, reach)?;
+    on_formation_scale(functions[index].form).then(|| Route {
+        start: RouteStart::Function(candidate.clone(), index),
+        steps: Vec::new(),
+        end: Some((candidate.clone(), index)),
+    })
 }
 
 /// From another form of the source that has a formation enthalpy, through the transitions that it

@@ -9,7 +9,7 @@ use crate::finding::{FindingCode, Severity, Span};
 use crate::notation::{Phase, Species};
 use crate::quantity::{Exact, Quantity};
 
-use super::case_values::CaseValue;
+use super::case_values::{CaseValue, NO_SOURCE};
 use super::problem::{BoundedPath, Leg, ProblemTerm, ValueKind};
 use super::resolve::Resolver;
 
@@ -108,7 +108,7 @@ impl Resolver<'_> {
         let quantity = given.quantity(&self.case.inputs)?.clone();
         let at = molality.molality.quantity(&self.case.inputs)?;
         let label = &molality.participant.value;
-        let source = molality.source.as_deref().unwrap_or("no source stated");
+        let source = molality.source.as_deref().unwrap_or(NO_SOURCE);
         Some(self.case_value(CaseValue {
             kind: ValueKind::RelativeEnthalpy,
             label: format!("{label} at {}", without_uncertainty(at)),

@@ -32,15 +32,12 @@ pub(super) fn stable_form(found: Match, kelvin: &Exact) -> Result<Match, String>
             (_, false) => Err("it gives no ranges of temperature for its forms".to_string()),
         };
     }
-    let ends_here = with_range.iter().filter(|e| ends_at(e, kelvin));
-    if let Some(entry) = ends_here.into_iter().next() {
-        return Ok(one(entry));
+    let mut serving = with_range.clone();
+    serving.retain(|entry| serves(entry, kelvin));
+    if serving.iter().any(|entry| ends_at(entry, kelvin)) {
+        // Up to its upper bound a form serves, and what begins there is the next.
+        serving.retain(|entry| !begins_at(entry, kelvin));
     }
-    let serving: Vec<&Entry> = with_range
-        .iter()
-        .copied()
-        .filter(|e| serves(e, kelvin))
-        .collect();
     match serving[..] {
         [entry] => Ok(one(entry)),
         [] => Err(format!(
@@ -71,6 +68,10 @@ fn bounds(entry: &Entry) -> Option<[Exact; 2]> {
 
 fn ends_at(entry: &Entry, kelvin: &Exact) -> bool {
     bounds(entry).is_some_and(|[_, high]| high == *kelvin)
+}
+
+fn begins_at(entry: &Entry, kelvin: &Exact) -> bool {
+    bounds(entry).is_some_and(|[low, _]| low == *kelvin)
 }
 
 /// Inside the bounds, or at 298.15 K just below them.

@@ -177,7 +177,9 @@ fn a_gap_and_an_overlap_leave_no_stable_form() {
     let overlap = FORMS.replace("[\"1000 K\", \"1500 K\"]", "[\"900 K\", \"1500 K\"]");
     for (forms, kelvin, word) in [
         (gap, "1050 K", "no form covers 1050 K"),
-        (overlap, "950 K", "several forms claim 950 K"),
+        (overlap.clone(), "950 K", "several forms claim 950 K"),
+        // At its upper bound a form gives way to the one that begins there, and to no other.
+        (overlap, "1000 K", "several forms claim 1000 K"),
         (FORMS.to_string(), "2600 K", "no form covers 2600 K"),
     ] {
         let tried = at(&forms, kelvin);
@@ -187,6 +189,61 @@ fn a_gap_and_an_overlap_leave_no_stable_form() {
         assert!(said[0].1.contains(word), "{said:?}");
         assert!(tried.result("r.heat").is_null());
     }
+}
+
+/// The conventions have iron without a range; what the other source says must not be lost.
+const IRON: &str = r#"
+[source]
+id = "iron"
+title = "Forms of iron (invented)"
+temperature = "298.15 K"
+energy-unit = "kJ/mol"
+
+[[entry]]
+substance = "Fe(cr, alpha)"
+locator = "sheet 1 (invented)"
+formation-enthalpy = "exact 0"
+heat-capacity = [{ form = "constant", range = ["200 K", "1100 K"], coefficients = ["25.0"] }]
+transitions = [{ to = "Fe(cr, gamma)", temperature = "1184 K", enthalpy = "0.9 kJ/mol" }]
+
+[[entry]]
+substance = "Fe(cr, gamma)"
+locator = "sheet 1 (invented)"
+heat-capacity = [{ form = "constant", range = ["1184 K", "1600 K"], coefficients = ["35.0"] }]
+"#;
+
+#[test]
+fn every_source_says_why_no_form_is_stable_and_a_record_of_that_runs_again() {
+    let folder = Folder::new();
+    folder.write("iron.toml", IRON);
+    let case = format!(
+        "[record]\nnumber = \"T-0003\"\nrevision = \"A\"\ntitle = \"A gap\"\n\
+         date = 2026-01-02\npreparer = \"N. N.\"\nstatus = \"preliminary\"\n\n\
+         [sources]\nconsult = [\"iron.toml\"]\n\n{}",
+        reaction("Fe(stable) -> Fe(cr, gamma)", "1150 K")
+    );
+    folder.write("a.toml", case);
+    let first = folder.run(&["compute", "a.toml", "--json"]);
+    assert_eq!(first.status, 1, "{}", first.err);
+    assert!(first.out.contains("no form covers 1150 K"), "{}", first.out);
+    folder.run(&["issue", "a.toml"]);
+    folder.run(&["extract", "out/T-0003-A.pdf", "again"]);
+    let again = folder.run(&["compute", "again/case.toml", "--json"]);
+    assert_eq!((again.status, again.out), (first.status, first.out));
+}
+
+#[test]
+fn a_form_whose_formation_enthalpy_is_a_convention_has_the_functions_of_its_source() {
+    let iron = IRON.replace("[\"200 K\", \"1100 K\"]", "[\"200 K\", \"1300 K\"]");
+    let rest = reaction("Fe(cr, alpha) -> Fe(cr, gamma)", "1200 K");
+    let tried = tried(&["iron.toml"], &[("iron.toml", &iron)], &rest);
+    // 0.025·885.85 + 0.9 + 0.035·16 − 0.025·901.85 = 1.06
+    assert_eq!(tried.exact("r.heat"), "1.06");
+    let said = tried.said("unstable-form");
+    assert!(
+        said[0].1.contains("Fe(cr, alpha): by iron it turns into"),
+        "{said:?}"
+    );
 }
 
 #[test]
@@ -282,6 +339,62 @@ fn the_uncertainty_of_a_temperature_is_carried_by_the_change_of_heat_capacity() 
 }
 
 #[test]
+fn a_temperature_in_the_reaction_takes_no_uncertainty() {
+    let folder = Folder::new();
+    folder.write("forms.toml", FORMS);
+    let case = |temperature: &str, more: &str| {
+        format!(
+            "[record]\nnumber = \"T-0004\"\nrevision = \"A\"\ntitle = \"Faults\"\n\
+             date = 2026-01-02\npreparer = \"N. N.\"\nstatus = \"for-check\"\n\n\
+             [sources]\nconsult = [\"forms.toml\"]\n\n{}{more}",
+            reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", temperature)
+        )
+    };
+    folder.write("a.toml", case("500 ± 10 K", ""));
+    let ran = folder.run(&["compute", "a.toml", "--json"]);
+    assert_eq!(ran.status, 2);
+    assert!(
+        ran.out.contains("write an input with its tolerance"),
+        "{}",
+        ran.out
+    );
+    // A size that no substance has is refused in a case as in a source.
+    let given = "\n[substances.oxide]\nformula = \"TiO2\"\nphase = \"cr\"\nheat-capacity = \
+                 { value = \"1e50 J/(mol K)\", range = [\"280 K\", \"600 K\"], source = \"none\" }\n";
+    folder.write("a.toml", case("500 K", given));
+    let ran = folder.run(&["compute", "a.toml", "--json"]);
+    assert_eq!(ran.status, 2);
+    assert!(ran.out.contains("below 1e5 J/(mol K)"), "{}", ran.out);
+    // A transition leads to another form of the same substance.
+    folder.write(
+        "forms.toml",
+        FORMS.replace("to = \"TiO2(l)\"", "to = \"Ti(cr)\""),
+    );
+    folder.write("a.toml", case("500 K", ""));
+    let ran = folder.run(&["compute", "a.toml", "--json"]);
+    assert_eq!(ran.status, 2);
+    assert!(
+        ran.out.contains("another form of the same composition"),
+        "{}",
+        ran.out
+    );
+    // The gas constant is a number; its unit is said to be superfluous.
+    folder.write(
+        "forms.toml",
+        FORMS.replace("\"8.31451\"", "\"8.31451 J/(mol K)\""),
+    );
+    let ran = folder.run(&["compute", "a.toml", "--json"]);
+    assert!(ran.out.contains("write \\\"8.31451\\\""), "{}", ran.out);
+}
+
+#[test]
+fn zeros_of_a_constant_that_nobody_can_count_are_noted() {
+    let tried = forms(&reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "500 K"));
+    let said = tried.said("uncounted-zeros");
+    assert!(said[0].1.contains("TiO2(cr, alpha) (forms)"), "{said:?}");
+}
+
+#[test]
 fn a_function_that_begins_just_above_the_reference_serves_with_a_note() {
     let late = |low: &str| {
         FORMS.replace(
@@ -326,7 +439,43 @@ fn a_fit_with_its_integration_constant_needs_no_formation_enthalpy() {
         let tried = tried(&["fitted.toml"], &[("fitted.toml", FITTED)], &rest);
         // 8.31451·(−645.375 + 845.375) = 1662.902 J/mol at any temperature.
         assert_eq!(tried.exact("r.heat"), "1.662902");
+        // No fit states what its integration constant is worth: neither of the two is covered.
+        let covers = tried.result("r.heat")["covers"].clone();
+        assert_eq!(covers["stated"], 0, "{covers}");
+        assert!(covers["of"].as_u64() >= Some(2), "{covers}");
     }
+}
+
+#[test]
+fn a_fit_goes_on_beyond_its_range_where_the_case_allows_it() {
+    let rest = reaction("N2O(l) -> N2O(g)", "1050 K");
+    let files = [("fitted.toml", FITTED)];
+    let stopped = tried(&["fitted.toml"], &files, &rest);
+    assert_eq!(stopped.said("outside-range")[0].0, "stop");
+    let allowed = format!(
+        "[[assumptions]]\ntext = \"The fits go on.\"\nbasis = \"judgement (invented)\"\n\
+         confirmed = true\nallows = {{ extrapolation = [\"N2O(l)\", \"N2O(g)\"] }}\n\n{rest}"
+    );
+    let tried = tried(&["fitted.toml"], &files, &allowed);
+    let said = tried.said("outside-range");
+    assert!(
+        said.iter().all(|(severity, _)| severity == "caution"),
+        "{said:?}"
+    );
+    assert!(said[0].1.contains("1050 K is 50 K outside"), "{said:?}");
+    assert_eq!(tried.exact("r.heat"), "1.662902");
+}
+
+#[test]
+fn where_the_way_begins_outside_the_ranges_the_distance_is_that_of_298_kelvin() {
+    let late = FORMS.replace("[\"200 K\", \"1000 K\"]", "[\"320 K\", \"1000 K\"]");
+    let rest = reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "400 K");
+    let tried = tried(&["forms.toml"], &[("forms.toml", &late)], &rest);
+    let said = tried.said("outside-range");
+    assert!(
+        said[0].1.contains("298.15 K is 21.85 K outside"),
+        "{said:?}"
+    );
 }
 
 #[test]

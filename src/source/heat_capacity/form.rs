@@ -96,7 +96,7 @@ impl Form {
     }
 
     /// Which coefficient is the integration constant of the enthalpy.
-    pub(super) fn integration_constant(self) -> Option<usize> {
+    pub(in crate::source) fn integration_constant(self) -> Option<usize> {
         match self {
             Form::Shomate | Form::Nasa7 => Some(5),
             Form::Nasa9 => Some(7),

@@ -163,6 +163,7 @@ struct Integral<N> {
     of_logarithm: N,
 }
 
-fn lenience() -> Exact {
+/// The same as an exact number, K.
+pub(super) fn lenience() -> Exact {
     Exact::from_integer(LENIENCE.into())
 }
