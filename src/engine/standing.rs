@@ -3,8 +3,8 @@
 use std::collections::{BTreeMap, BTreeSet};
 
 use crate::finding::{Finding, FindingCode, Severity, Text};
-use crate::quantity::{InputUncertainty, Significance};
-use crate::source::{Problem, Standing, ValueUsed};
+use crate::quantity::{Decimal, InputUncertainty, Significance};
+use crate::source::{Form, NO_SOURCE, Problem, Standing, ValueKind, ValueUsed};
 
 use super::outcome::{Outcome, StatedBy};
 
@@ -41,24 +41,34 @@ pub(super) fn not_located(problem: &Problem, text: &Text) -> Vec<Finding> {
         .iter()
         .filter(|v| v.locator.trim().is_empty());
     let silent: Vec<&ValueUsed> = silent.collect();
-    let Some(first) = silent.first() else {
-        return Vec::new();
+    let without = "without a locator: a checker cannot find the value. Give each entry its table and \
+                   page.";
+    // A measured heat of a cycle is named with its step instead.
+    let unsourced = problem
+        .values
+        .iter()
+        .filter(|v| v.kind != ValueKind::MeasuredHeat && v.locator.ends_with(NO_SOURCE));
+    let unsourced: Vec<&ValueUsed> = unsourced.collect();
+    let unsaid =
+        "stated by the case without a source: a checker cannot compare the value. Add `source`.";
+    let finding = |(values, what): (Vec<&ValueUsed>, &str)| {
+        let first = values.first()?;
+        Some(Finding {
+            severity: Severity::Caution,
+            code: FindingCode::NotLocated,
+            message: format!("{} {what}", named_values(problem, &values)),
+            at: text.place(first.used_at.start),
+        })
     };
-    vec![Finding {
-        severity: Severity::Caution,
-        code: FindingCode::NotLocated,
-        message: format!(
-            "{} without a locator: a checker cannot find the value. Give each entry its table and \
-             page.",
-            named_values(problem, &silent)
-        ),
-        at: text.place(first.used_at.start),
-    }]
+    [(silent, without), (unsourced, unsaid)]
+        .into_iter()
+        .filter_map(finding)
+        .collect()
 }
 
 /// ASTM E29: an integer with trailing zeros has digits that nobody can count.
 pub(super) fn uncounted_zeros(problem: &Problem, text: &Text) -> Vec<Finding> {
-    let unclear = problem.values.iter().filter(|v| v.printed.ambiguous_zeros);
+    let unclear = problem.values.iter().filter(|v| has_uncounted_zeros(v));
     let unclear: Vec<&ValueUsed> = unclear.collect();
     let Some(first) = unclear.first() else {
         return Vec::new();
@@ -73,6 +83,14 @@ pub(super) fn uncounted_zeros(problem: &Problem, text: &Text) -> Vec<Finding> {
         ),
         at: text.place(first.used_at.start),
     }]
+}
+
+/// Of the number as printed, or of the constant that a heat capacity is.
+fn has_uncounted_zeros(value: &ValueUsed) -> bool {
+    let constant = value.function.as_ref().filter(|f| f.form == Form::Constant);
+    let constant = constant.filter(|_| value.made_of.is_empty());
+    let coefficient = constant.and_then(|f| f.coefficients.first());
+    value.printed.ambiguous_zeros || coefficient.is_some_and(Decimal::ends_in_uncounted_zeros)
 }
 
 fn named_values(problem: &Problem, values: &[&ValueUsed]) -> String {
