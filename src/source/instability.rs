@@ -1,12 +1,14 @@
 //! What a source says of a form that is not the stable one at a temperature.
 
+use std::rc::Rc;
+
 use crate::notation::{PhaseLabel, Species};
 use crate::quantity::Exact;
 
 use super::model::Entry;
 
 /// What a source says where a form is not the stable one at a temperature.
-pub(super) fn stable_instead(entries: &[Entry], own: &Entry, kelvin: &Exact) -> Option<String> {
+pub(super) fn stable_instead(entries: &[Rc<Entry>], own: &Entry, kelvin: &Exact) -> Option<String> {
     for transition in &own.transitions {
         let at = transition.temperature.value_in_si();
         if *kelvin > at && !is_gas(own.species()) {
@@ -16,7 +18,7 @@ pub(super) fn stable_instead(entries: &[Entry], own: &Entry, kelvin: &Exact) -> 
             ));
         }
     }
-    let into_own = |entry: &Entry| {
+    let into_own = |entry: &Rc<Entry>| {
         let mut transitions = entry.transitions.iter();
         let found = transitions.find(|t| own.notations().any(|s| *s == t.to))?;
         let at = found.temperature.value_in_si();

@@ -39,8 +39,8 @@ pub(super) struct Candidate {
 pub(super) struct Material {
     /// The serving entry first, then the same form in the other consulted sources.
     pub(super) candidates: Vec<Candidate>,
-    /// All entries of the composition in the serving source.
-    pub(super) forms: Vec<Rc<Entry>>,
+    /// For each of them all entries of the composition in its source.
+    pub(super) forms: Vec<Vec<Rc<Entry>>>,
 }
 
 impl Resolver<'_> {
@@ -109,10 +109,13 @@ impl Resolver<'_> {
                 candidates.push(Candidate { source, entry });
             }
         }
-        let forms = self.sources[own.source].of_composition(&hill);
+        let forms = candidates.iter().map(|candidate| {
+            let entries = self.sources[candidate.source].of_composition(&hill);
+            entries.into_iter().map(Rc::new).collect()
+        });
         Material {
+            forms: forms.collect(),
             candidates,
-            forms: forms.into_iter().map(Rc::new).collect(),
         }
     }
 

@@ -84,10 +84,9 @@ impl Resolver<'_> {
         span: &Span,
     ) {
         // The source of the formation enthalpy first, then those that have the very form.
-        let said = material.candidates.iter().find_map(|candidate| {
-            let hill = candidate.entry.species()?.formula.hill();
-            let forms = self.sources[candidate.source].of_composition(&hill);
-            let instead = stable_instead(&forms, &candidate.entry, kelvin)?;
+        let candidates = material.candidates.iter().zip(&material.forms);
+        let said = candidates.into_iter().find_map(|(candidate, forms)| {
+            let instead = stable_instead(forms, &candidate.entry, kelvin)?;
             Some((candidate.source, instead))
         });
         let Some((source, instead)) = said else {

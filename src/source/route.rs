@@ -49,7 +49,8 @@ impl Resolver<'_> {
         let printed = self.substances[substance].value.is_some();
         // The serving entry is always there.
         let own = candidates.first()?;
-        if let Some(route) = own_route(own, &material.forms, printed, kelvin) {
+        let forms = material.forms.first()?;
+        if let Some(route) = own_route(own, forms, printed, kelvin) {
             return Some(route);
         }
         let mut short: Option<(usize, Short)> = None;
