@@ -55,7 +55,9 @@ mod walk;
 pub use builtin::{BUILT_IN, KOPP, built_in};
 pub use combustion_equation::Combustion;
 pub use consult::{Consultation, SourceFiles, consult};
-pub use cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};
+pub use cycle::{
+    Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StatedCorrelation, StepSource,
+};
 pub use excerpt::{attachment_name, excerpts};
 pub use heat_capacity::{Form, FunctionTerm, HeatCapacity};
 pub use heating_value::{
