@@ -3,7 +3,7 @@
 use super::given::Given;
 use crate::finding::{Located, Span};
 use crate::notation::Equation;
-use crate::quantity::Decimal;
+use crate::quantity::Quantity;
 
 /// A heat that follows from the measured heats of other reactions.
 #[derive(Clone, Debug)]
@@ -58,7 +58,10 @@ pub enum Measured {
 #[derive(Clone, Debug)]
 pub struct StepCorrelation {
     pub between: [usize; 2],
-    pub coefficient: Decimal,
+    pub coefficient: Quantity,
+    /// Whose statement it is, and where it stands there.
+    pub source: Option<String>,
+    pub locator: Option<String>,
     pub span: Span,
 }
 

@@ -6,7 +6,7 @@ use num_traits::One;
 use crate::document::{Table, notation_fault, number, one_of, value_fault};
 use crate::finding::{FaultCode, Located};
 use crate::notation::Equation;
-use crate::quantity::{Decimal, Dimension, Exact};
+use crate::quantity::{Dimension, Exact, Quantity};
 
 use super::cycle::{Cycle, CycleStep, StepCorrelation, StepHeat};
 use super::cycle_steps::StepReader;
@@ -147,7 +147,7 @@ fn read_correlations(table: &Table<'_, '_>, steps: &[CycleStep]) -> Vec<StepCorr
 }
 
 fn read_correlation(table: &Table<'_, '_>, steps: &[CycleStep]) -> Option<StepCorrelation> {
-    table.only(&["between", "coefficient"]);
+    table.only(&["between", "coefficient", "source", "locator"]);
     let text = table.required_string("coefficient", "write it as \"0.5\"");
     let coefficient = text.and_then(|text| read_coefficient(table, &text));
     if table.get("between").is_none() {
@@ -172,6 +172,8 @@ fn read_correlation(table: &Table<'_, '_>, steps: &[CycleStep]) -> Option<StepCo
     Some(StepCorrelation {
         between: [a, b],
         coefficient: coefficient?,
+        source: table.string("source").map(|t| t.value),
+        locator: table.string("locator").map(|t| t.value),
         span: table.span.clone(),
     })
 }
@@ -187,11 +189,12 @@ fn refuse_pair<T>(table: &Table<'_, '_>, found: String) -> Option<T> {
     None
 }
 
-fn read_coefficient(table: &Table<'_, '_>, text: &Located<String>) -> Option<Decimal> {
-    let decimal = number(table.reader(), text)?.value.decimal;
+fn read_coefficient(table: &Table<'_, '_>, text: &Located<String>) -> Option<Quantity> {
+    let number = number(table.reader(), text)?.value;
+    let coefficient = number.decimal.value();
     let one = Exact::one();
-    if decimal.value() <= one && decimal.value() >= -one {
-        return Some(decimal);
+    if coefficient <= one && coefficient >= -one {
+        return Some(number);
     }
     value_fault(
         table.reader(),

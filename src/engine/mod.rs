@@ -18,8 +18,9 @@ mod worked;
 
 pub use bounds::{AdverseBound, AdverseHeat, Bound, adverse_heat};
 pub use cycle::{
-    Adjustment, CRITICAL_RESIDUAL, CycleSum, CycleWorking, Multipliers, NoMultipliers,
-    SIGNIFICANCE_LEVEL, StepHeat, closure_text, decimals, global_test, local_test, weakness,
+    Adjustment, CRITICAL_RESIDUAL, Checked, CycleSum, CycleWorking, Multipliers, NoMultipliers,
+    SIGNIFICANCE_LEVEL, StepHeat, Without, closure_text, critical, decimals, global_test,
+    local_test, weakness,
 };
 pub use formation::{FormationEquation, formation_equation};
 pub use heating_value::{

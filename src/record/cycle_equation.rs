@@ -11,8 +11,8 @@ use crate::source::{ProblemCycle, ProblemStep};
 use super::numerals::{coefficient, minus};
 use super::rich::Rich;
 
-/// Digits shown of a multiplier that uncertainties had a part in.
-const WEIGHT_DIGITS: i64 = 6;
+/// Digits shown of a multiplier that uncertainties had a part in: as many as of its products.
+const WEIGHT_DIGITS: i64 = 10;
 
 /// An equation from its numbers, turned where it is subtracted.
 pub(super) fn equation(cycle: &ProblemCycle, numbers: &[Exact], turned: bool) -> Rich {

@@ -2,9 +2,11 @@
 
 use num_traits::Signed;
 
-use crate::quantity::{Exact, Quantity, Significance, exact_text, to_f64, two_digits};
+use crate::engine::MolarMass;
+use crate::quantity::{Exact, Quantity, Significance, combine, exact_text, to_f64, two_digits};
 use crate::source::{Basis, Problem, ProblemCycle, StepSource};
 
+use super::cycle_checks::digits;
 use super::cycle_symbols::bomb_to_enthalpy;
 use super::cycle_tables::Shown;
 use super::cycle_working::heading;
@@ -36,12 +38,26 @@ pub(super) fn mass_steps(shown: &Shown<'_>) -> Vec<Step> {
             shown.cycle.species[*species].label
         ));
         let text = sum_of_weights(shown.problem, weights, text).and(format!(
-            " = {} g/mol. Heats per mass of it are multiplied by that and by its |ν|.",
-            in_full(&mass.value, mass.significance)
+            " = {} g/mol. Heats per mass of it are multiplied by that and by its |ν|.{}",
+            in_full(&mass.value, mass.significance),
+            uncertainty(shown.problem, mass)
         ));
         steps.push(Step::Text { text });
     }
     steps
+}
+
+/// How the uncertainty of a heat per mole follows from that of the heat per mass.
+fn uncertainty(problem: &Problem, mass: &MolarMass) -> String {
+    let of_value = |index: usize| problem.values[index].uncertainty;
+    let combined = combine(&mass.worked().form, &of_value, &problem.correlations);
+    combined.standard.map_or(String::new(), |u| {
+        format!(
+            " The atomic weights leave u(M) = {} g/mol; for a heat h per mass the square of the \
+             uncertainty is ν²·((M·u(h))² + (h·u(M))²).",
+            digits(u, 3)
+        )
+    })
 }
 
 fn sum_of_weights(problem: &Problem, weights: &[(usize, Exact)], text: Rich) -> Rich {
@@ -108,8 +124,8 @@ fn reduced(cycle: &ProblemCycle) -> String {
         .map(|(step, _)| step.name.as_str())
         .collect();
     match open.is_empty() {
-        true => "The results are reduced to standard states by whoever measured them (Washburn \
-                 1933)."
+        true => "The results are reduced to standard states by whoever measured them (E. W. \
+                 Washburn, J. Res. Natl. Bur. Stand. 10 (1933) 525; from memory)."
             .to_string(),
         false => format!(
             "Not reduced to standard states: {}; see the findings.",

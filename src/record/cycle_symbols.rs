@@ -73,25 +73,25 @@ pub(super) fn bomb_to_enthalpy() -> Math {
     ])
 }
 
-/// m_k = Σ_j n_jk q_j
+/// m_k = Σ_j b_jk q_j
 pub(super) fn misclosure() -> Math {
     row(vec![
         with_sub(symbol("m"), symbol("k")),
         upright("="),
         sum("j"),
-        with_sub(symbol("n"), row(vec![symbol("j"), symbol("k")])),
+        with_sub(symbol("b"), row(vec![symbol("j"), symbol("k")])),
         with_sub(symbol("q"), symbol("j")),
     ])
 }
 
-/// S = NᵀVN
+/// S = BᵀVB
 pub(super) fn spread() -> Math {
     row(vec![
         symbol("S"),
         upright("="),
-        transposed("N"),
+        transposed("B"),
         symbol("V"),
-        symbol("N"),
+        symbol("B"),
     ])
 }
 
@@ -100,14 +100,77 @@ pub(super) fn correlates() -> Math {
     row(vec![symbol("y"), upright("="), inverse("S"), symbol("m")])
 }
 
-/// v = V N y
+/// λ = B y
+pub(super) fn gradients() -> Math {
+    row(vec![symbol("λ"), upright("="), symbol("B"), symbol("y")])
+}
+
+/// e = V λ
 pub(super) fn residuals() -> Math {
+    row(vec![symbol("e"), upright("="), symbol("V"), symbol("λ")])
+}
+
+/// One entry of the diagonal of a product of matrices.
+fn diagonal(product: Vec<Math>) -> Math {
+    let brackets = [vec![upright("(")], product, vec![upright(")")]].concat();
+    with_sub(row(brackets), row(vec![symbol("i"), symbol("i")]))
+}
+
+/// t_i = λ_i/s_i
+pub(super) fn normalised() -> Math {
     row(vec![
-        symbol("v"),
+        with_sub(symbol("t"), symbol("i")),
         upright("="),
-        symbol("V"),
-        symbol("N"),
-        symbol("y"),
+        Math::Fraction {
+            over: Box::new(with_sub(symbol("λ"), symbol("i"))),
+            under: Box::new(with_sub(symbol("s"), symbol("i"))),
+        },
+    ])
+}
+
+/// s_i = √(B S⁻¹ Bᵀ)_ii
+pub(super) fn scatter() -> Math {
+    row(vec![
+        with_sub(symbol("s"), symbol("i")),
+        upright("="),
+        Math::Root {
+            of: Box::new(diagonal(vec![symbol("B"), inverse("S"), transposed("B")])),
+        },
+    ])
+}
+
+/// ρ_i = (V B S⁻¹ Bᵀ)_ii
+pub(super) fn checked_part() -> Math {
+    row(vec![
+        with_sub(symbol("ρ"), symbol("i")),
+        upright("="),
+        diagonal(vec![
+            symbol("V"),
+            symbol("B"),
+            inverse("S"),
+            transposed("B"),
+        ]),
+    ])
+}
+
+/// share_i = c_i u_i Σ_j r_ij c_j u_j / u²
+pub(super) fn share() -> Math {
+    let product = |index: &str| {
+        row(vec![
+            with_sub(symbol("c"), symbol(index)),
+            with_sub(symbol("u"), symbol(index)),
+        ])
+    };
+    row(vec![
+        with_sub(upright("share"), symbol("i")),
+        upright("="),
+        Math::Fraction {
+            over: Box::new(product("i")),
+            under: Box::new(squared(symbol("u"))),
+        },
+        sum("j"),
+        with_sub(symbol("r"), row(vec![symbol("i"), symbol("j")])),
+        product("j"),
     ])
 }
 

@@ -2,13 +2,13 @@
 
 use num_traits::{Signed, Zero};
 
-use crate::engine::{Adjustment, CycleSum, StepHeat, Worked, closure_text, decimals};
-use crate::quantity::{Exact, order_of_magnitude, round_to_place};
+use crate::engine::{CycleSum, StepHeat, Worked};
+use crate::quantity::Exact;
 use crate::source::{Basis, Problem, ProblemCycle, ProblemStep, StepSource};
 
-use super::cycle_equation::{cut, equation, gases, multiplier};
+use super::cycle_equation::{equation, gases, multiplier};
 use super::heat_working::shown;
-use super::numerals::{minus, printed, signed};
+use super::numerals::{printed, signed};
 use super::pages::Table;
 use super::rich::{Rich, Run};
 use super::tables::{enthalpy, mark, number, text};
@@ -23,7 +23,7 @@ pub(super) struct Shown<'a> {
 }
 
 impl Shown<'_> {
-    fn steps(&self) -> impl Iterator<Item = (&ProblemStep, &StepHeat)> {
+    pub(super) fn steps(&self) -> impl Iterator<Item = (&ProblemStep, &StepHeat)> {
         self.cycle.steps.iter().zip(self.heats.iter().copied())
     }
 
@@ -140,76 +140,6 @@ impl Shown<'_> {
             ]),
         }
     }
-
-    /// What should be zero, and how far it is from it.
-    pub(super) fn closures(&self, closures: &[Vec<Exact>], adjustment: &Adjustment) -> Table {
-        let rows = closures.iter().enumerate().map(|(k, by)| {
-            vec![
-                Rich::plain(closure_text(self.cycle, by)),
-                Rich::plain(minus(&cut(&adjustment.misclosures[k], 10))),
-                Rich::plain(digits(adjustment.misclosure_uncertainty[k], 4)),
-                Rich::plain(digits(adjustment.correlates[k], 6)),
-            ]
-        });
-        Table {
-            caption: format!(
-                "Sums of steps that are no reaction at all: their heats, in {}",
-                self.unit
-            ),
-            columns: vec![
-                text("What should be zero"),
-                number(Rich::default().run(Run::Italic("m".into()))),
-                number(
-                    Rich::default()
-                        .run(Run::Italic("u".into()))
-                        .and("(")
-                        .run(Run::Italic("m".into()))
-                        .and(")"),
-                ),
-                number(Rich::default().run(Run::Italic("y".into()))),
-            ],
-            rows: rows.collect(),
-            total: None,
-        }
-    }
-
-    /// Measured and adjusted heats with their residuals.
-    pub(super) fn adjusted(&self, adjustment: &Adjustment) -> Table {
-        let rows = self.steps().enumerate().map(|(index, (step, heat))| {
-            let residual = &adjustment.residuals[index];
-            let adjusted = heat.heat.value.to_exact().map(|q| q - residual);
-            let place = residual_place(adjustment.standard[index]);
-            vec![
-                Rich::plain(step.name.clone()),
-                Rich::plain(shown(&heat.heat)),
-                Rich::plain(digits(adjustment.standard[index], 4)),
-                Rich::plain(adjusted.map_or(String::new(), |q| at(&q, place))),
-                Rich::plain(at(residual, place)),
-                Rich::plain(
-                    adjustment.normalised[index].map_or("–".into(), |w| minus(&decimals(w))),
-                ),
-                Rich::plain(decimals(adjustment.redundancy[index])),
-            ]
-        });
-        let italic = |text: &str| Rich::default().run(Run::Italic(text.into()));
-        Table {
-            caption: format!(
-                "Measured heats, adjusted heats and residuals, in {}",
-                self.unit
-            ),
-            columns: vec![
-                text("Step"),
-                number(Rich::plain("Measured ").with(italic("q"))),
-                number(italic("u").and("(").with(italic("q")).and(")")),
-                number(Rich::plain("Adjusted")),
-                number(Rich::plain("Residual ").with(italic("v"))),
-                number(Rich::plain("Normalised")),
-                number(Rich::plain("Checked part")),
-            ],
-            rows: rows.collect(),
-            total: None,
-        }
-    }
 }
 
 /// What the step's heat is multiplied by is shown without its sign, so the heat carries it.
@@ -218,27 +148,6 @@ fn turned(heat: &StepHeat, weight: &Exact) -> Worked {
         true => heat.heat.times_exact(&Exact::from_integer((-1).into())),
         false => heat.heat.clone(),
     }
-}
-
-/// A number that others are worked out with by hand, to so many significant digits.
-fn digits(size: f64, count: i64) -> String {
-    let exact = Exact::from_float(size);
-    let order = exact.as_ref().and_then(order_of_magnitude);
-    match (exact, order) {
-        (Some(size), Some(order)) => at(&size, (order + 1 - count).min(0)),
-        _ => "0".to_string(),
-    }
-}
-
-/// One place more than the two digits of the uncertainty.
-fn residual_place(standard: f64) -> i64 {
-    let exact = Exact::from_float(standard);
-    let order = exact.and_then(|u| order_of_magnitude(&u));
-    order.map_or(-4, |order| order - 2).min(0)
-}
-
-fn at(value: &Exact, place: i64) -> String {
-    minus(&round_to_place(value, place).text)
 }
 
 fn sign_or_zero(number: &Exact) -> String {

@@ -8,9 +8,10 @@ use crate::quantity::{Exact, exact_text};
 use crate::source::ProblemCycle;
 
 use super::cycle_adjustment::adjustment_steps;
+use super::cycle_checks::digits;
 use super::cycle_equation::{equation, multiplier};
 use super::cycle_heats::{bomb_steps, mass_steps};
-use super::cycle_symbols::{cycle_sum, multiplier_condition};
+use super::cycle_symbols::{cycle_sum, multiplier_condition, share};
 use super::cycle_tables::Shown;
 use super::numerals::unit;
 use super::pages::{Step, WorkingSection};
@@ -94,7 +95,13 @@ impl Parts<'_> {
         steps.extend(bomb_steps(&shown));
         if let Some(adjustment) = &self.working.adjustment {
             let closures = &self.found.closures;
-            steps.extend(adjustment_steps(&shown, closures, adjustment, self.sum));
+            steps.extend(adjustment_steps(
+                &shown,
+                closures,
+                adjustment,
+                self.sum,
+                self.working.without.as_ref(),
+            ));
         }
         steps.extend(self.multiplied(&shown));
         steps.extend(self.closing());
@@ -115,8 +122,10 @@ impl Parts<'_> {
             displayed(multiplier_condition()),
             plain(format!(
                 "The heat of this reaction follows from those of the steps below, all of them at \
-                 {kelvin} K and between standard states, with multipliers that make their \
-                 equations add up to it. {how}"
+                 {kelvin} K and between standard states, with multipliers w that make their \
+                 equations add up to it: ν with the index of a substance i and of a step j is the \
+                 stoichiometric number of the one in the equation of the other, negative for what \
+                 is consumed; that of i alone is the target's. {how}"
             )),
         ]
     }
@@ -133,7 +142,7 @@ impl Parts<'_> {
             steps.push(plain(
                 "Long multipliers are cut for print. They need not be found again to be checked: \
                  they make the equations add up to the target, and for every line that should be \
-                 zero, Σ n·w·u² over its steps is zero where the heats are independent (with V \
+                 zero, Σ b·w·u² over its steps is zero where the heats are independent (with V \
                  otherwise), which is the condition of least variance.",
             ));
         }
@@ -190,7 +199,36 @@ impl Parts<'_> {
         steps.push(Step::Text {
             text: stating(self.outcome),
         });
+        steps.extend(self.checked_share());
+        steps.extend(self.shares());
         steps.push(result(self.calculation, self.outcome));
         steps
+    }
+
+    /// The part that the determinations have which check each other.
+    fn checked_share(&self) -> Option<Step> {
+        let adjustment = self.working.adjustment.as_ref()?;
+        let checked = adjustment.redundancy.iter().any(|part| *part > 0.0);
+        let text = format!(
+            "By themselves the determinations that check each other leave the result a standard \
+             uncertainty of {} {}, √(wᵀVw) over them.",
+            digits(adjustment.checked.standard, 4),
+            unit(&self.outcome.unit)
+        );
+        checked.then(|| plain(text))
+    }
+
+    /// What a share of the budget is where values are correlated.
+    fn shares(&self) -> Vec<Step> {
+        if self.cycle.correlations.is_empty() {
+            return Vec::new();
+        }
+        vec![
+            displayed(share()),
+            plain(
+                "Where values are correlated, the budget counts half of what a pair adds to u² \
+                 with each of the two, so that the shares add up to one.",
+            ),
+        ]
     }
 }

@@ -196,8 +196,8 @@ pub struct HoldRow {
 pub struct ValueRow {
     pub number: usize,
     pub substance: Rich,
-    /// Name of the substance in words where one is known.
-    pub name: Option<String>,
+    /// Name of the substance in words where one is known; of a measured heat, of what it is.
+    pub name: Option<Rich>,
     pub cas: Option<String>,
     /// "formation enthalpy"
     pub quantity: String,

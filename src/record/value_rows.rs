@@ -1,10 +1,15 @@
 //! The table of values used, and what other sources say of the same values.
 
+use std::collections::BTreeMap;
+
 use crate::quantity::{
     Quantity, StatedUncertainty, exact_text, terminating_decimal, to_f64, two_digits,
 };
-use crate::source::{Comparison, Form, Judgement, Problem, Substance, ValueUsed};
+use crate::source::{
+    Comparison, Form, Judgement, Problem, StepSource, Substance, ValueKind, ValueUsed,
+};
 
+use super::cycle_equation::equation;
 use super::function_rows::range;
 use super::numerals::{minus, printed_number, unit};
 use super::pages::{ComparisonRow, ValueRow};
@@ -13,6 +18,7 @@ use super::rich::Rich;
 
 pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
     let numbers = numbers(problem);
+    let measured = measured_heats(problem);
     let row = |(index, value): (usize, &ValueUsed)| {
         let head = &problem.sources[value.source].head;
         let note = value
@@ -22,7 +28,10 @@ pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
         ValueRow {
             number: index + 1,
             substance: substance(value),
-            name: value.name.clone(),
+            name: measured
+                .get(&index)
+                .cloned()
+                .or_else(|| value.name.clone().map(Rich::plain)),
             cas: value.cas.clone(),
             quantity: quantity(value),
             printed: printed_value(value),
@@ -42,8 +51,34 @@ pub(super) fn value_rows(problem: &Problem) -> Vec<ValueRow> {
 pub(super) fn substance(value: &ValueUsed) -> Rich {
     match &value.species {
         Some(species) => Rich::from(species.pieces()),
+        // The step of a cycle alone: the table of values used says what was measured.
+        None if value.kind == ValueKind::MeasuredHeat => {
+            let step = value.substance.split(": ").next();
+            Rich::plain(step.unwrap_or_default())
+        }
         None => Rich::plain(value.substance.clone()),
     }
+}
+
+/// What was measured, of each heat that a step of a cycle states.
+fn measured_heats(problem: &Problem) -> BTreeMap<usize, Rich> {
+    let steps = problem.cycles.iter().flat_map(|cycle| {
+        let steps = cycle.steps.iter();
+        steps.map(move |step| (cycle, step))
+    });
+    let measured = steps.filter_map(|(cycle, step)| {
+        let StepSource::Value { value, .. } = &step.heat else {
+            return None;
+        };
+        let stated = problem.values[*value].kind == ValueKind::MeasuredHeat;
+        let what = match step.bomb {
+            Some(_) => "internal energy",
+            None => "enthalpy",
+        };
+        let text = Rich::plain(format!("{what} of "));
+        stated.then(|| (*value, text.with(equation(cycle, &step.numbers, false))))
+    });
+    measured.collect()
 }
 
 fn quantity(value: &ValueUsed) -> String {

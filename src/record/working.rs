@@ -110,5 +110,12 @@ pub(super) fn result(calculation: &Calculation, outcome: &Outcome) -> Step {
     let text = Rich::plain(format!("{}: ", what(calculation, outcome)))
         .run(Run::Strong(in_words(outcome)))
         .and(format!(", {}", outcome.direction().word()));
+    let text = match outcome.not_covered.is_empty() {
+        true => text,
+        false => text.and(format!(
+            ". The uncertainty does not cover {}.",
+            outcome.not_covered.join(", ")
+        )),
+    };
     Step::Result { text }
 }

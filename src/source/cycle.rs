@@ -14,6 +14,8 @@ pub struct ProblemCycle {
     /// The stoichiometric numbers of the target, negative for what is consumed.
     pub numbers: Vec<Exact>,
     pub steps: Vec<ProblemStep>,
+    /// Between the heats of two steps, as the case states them.
+    pub correlations: Vec<StatedCorrelation>,
     /// Index of R among the values used, where a step needs it.
     pub gas_constant: Option<usize>,
     /// Whether the case asks for uncertainties inflated by the Birge ratio.
@@ -28,6 +30,15 @@ impl ProblemCycle {
         let shared = self.steps.iter().all(|step| step.kelvin == *first);
         shared.then_some(first)
     }
+}
+
+/// A coefficient that the case states, with its row among the values used.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub struct StatedCorrelation {
+    /// Indices of steps.
+    pub between: [usize; 2],
+    /// Index among the values used.
+    pub value: usize,
 }
 
 /// A participant of the target or of a step.

@@ -3,13 +3,13 @@
 
 use num_traits::Signed;
 
-use crate::case::{Cycle, CycleStep, Given, Measured, StepHeat};
-use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity};
+use crate::case::{Cycle, CycleStep, Given, Measured, StepCorrelation, StepHeat};
+use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity, Span};
 use crate::notation::PhaseLabel;
-use crate::quantity::{Dimension, Exact, Quantity};
+use crate::quantity::{Dimension, Exact, Quantity, to_f64};
 
 use super::case_values::{CaseValue, NO_SOURCE};
-use super::cycle::{Basis, Bomb, CycleSpecies};
+use super::cycle::{Basis, Bomb, CycleSpecies, ProblemStep, StatedCorrelation, StepSource};
 use super::path::reference_kelvin;
 use super::problem::ValueKind;
 use super::resolve::Resolver;
@@ -44,14 +44,9 @@ impl Resolver<'_> {
     ) -> Option<usize> {
         let place = format!("cycles.{}, {name}", cycle.id.value);
         if step.source.is_none() {
-            self.no_source(step, &place);
+            self.no_source("measured heat", &place, &step.span);
         }
-        let from = [&step.source, &step.locator];
-        let from: Vec<&str> = from.into_iter().flatten().map(String::as_str).collect();
-        let from = match from.is_empty() {
-            true => NO_SOURCE.to_string(),
-            false => from.join(", "),
-        };
+        let from = stated_by(&step.source, &step.locator);
         let measured = match step.measured {
             Measured::Enthalpy => "enthalpy",
             Measured::InternalEnergy => "internal energy",
@@ -68,16 +63,73 @@ impl Resolver<'_> {
         }))
     }
 
-    fn no_source(&mut self, step: &CycleStep, place: &str) {
+    fn no_source(&mut self, what: &str, place: &str, span: &Span) {
         self.findings.push(Finding {
             severity: Severity::Caution,
             code: FindingCode::NotLocated,
             message: format!(
-                "{place}: the measured heat names no source. Give the report and the place in it: \
+                "{place}: the {what} names no source. Give the report and the place in it: \
                  source = \"…\", locator = \"…\"."
             ),
-            at: self.text.place(step.span.start),
+            at: self.text.place(span.start),
         });
+    }
+
+    /// Correlations between heats that the case states, each with its row among the values used.
+    pub(super) fn state_correlations(
+        &mut self,
+        cycle: &Cycle,
+        steps: &[ProblemStep],
+    ) -> Vec<StatedCorrelation> {
+        let each = cycle.correlations.iter();
+        each.filter_map(|stated| self.state_correlation(cycle, stated, steps))
+            .collect()
+    }
+
+    /// None where a step's heat is a result, which the reading of the case has reported.
+    fn state_correlation(
+        &mut self,
+        cycle: &Cycle,
+        stated: &StepCorrelation,
+        steps: &[ProblemStep],
+    ) -> Option<StatedCorrelation> {
+        let value = |index: usize| match &steps[index].heat {
+            StepSource::Value { value, .. } => Some(*value),
+            StepSource::Result { .. } => None,
+        };
+        let [a, b] = stated.between.map(value);
+        let coefficient = to_f64(&stated.coefficient.decimal.value());
+        if let Err(error) = self.stated_correlations.state(a?, b?, coefficient) {
+            self.faults.push(Fault::new(
+                FaultCode::Value,
+                self.text,
+                &stated.span,
+                error.found(),
+                error.expected(),
+                error.advice(),
+            ));
+        }
+        let [first, second] = stated.between.map(|index| steps[index].name.as_str());
+        let pair = format!("{first} and {second}");
+        let place = format!("cycles.{}, correlations", cycle.id.value);
+        if stated.source.is_none() {
+            let place = format!("{place}, {pair}");
+            self.no_source("correlation coefficient", &place, &stated.span);
+        }
+        let from = stated_by(&stated.source, &stated.locator);
+        let value = self.case_value(CaseValue {
+            kind: ValueKind::Correlation,
+            label: pair,
+            species: None,
+            quantity: stated.coefficient.clone(),
+            locator: format!("{place}; {from}"),
+            note: None,
+            span: &stated.span,
+        });
+        Some(StatedCorrelation {
+            between: stated.between,
+            value,
+        })
     }
 
     /// What the heat is referred to. None where no mass can be had, as a fault then says.
@@ -158,5 +210,18 @@ impl Resolver<'_> {
         let head = &self.sources[self.values[value].source].head;
         let quantity = stated.or(head.temperature.as_ref());
         quantity.map_or_else(reference_kelvin, Quantity::value_in_si)
+    }
+}
+
+/// "report RC-26-014, table 3"
+fn stated_by(source: &Option<String>, locator: &Option<String>) -> String {
+    let parts: Vec<&str> = [source, locator]
+        .into_iter()
+        .flatten()
+        .map(String::as_str)
+        .collect();
+    match parts.is_empty() {
+        true => NO_SOURCE.to_string(),
+        false => parts.join(", "),
     }
 }

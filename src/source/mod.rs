@@ -74,7 +74,9 @@ pub use builtin::{BUILT_IN, KOPP, built_in};
 pub use case_values::NO_SOURCE;
 pub use combustion_equation::Combustion;
 pub use consult::{Consultation, SourceFiles, consult};
-pub use cycle::{Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StepSource};
+pub use cycle::{
+    Basis, Bomb, CycleSpecies, ProblemCycle, ProblemStep, StatedCorrelation, StepSource,
+};
 pub use excerpt::{attachment_name, excerpts};
 pub use heat_capacity::{Form, FunctionTerm, HeatCapacity};
 pub use heating_value::{

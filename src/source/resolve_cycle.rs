@@ -7,7 +7,7 @@ use num_traits::Zero;
 use crate::case::{Cycle, CycleStep, Given, Measured, Order, StepHeat, step_name};
 use crate::finding::{Fault, FaultCode, Located};
 use crate::notation::{Equation, Participant, Term};
-use crate::quantity::{Dimension, Exact, to_f64};
+use crate::quantity::{Dimension, Exact};
 
 use super::builtin::{ATOMIC_WEIGHTS, CONSTANTS};
 use super::consult::SourceFiles;
@@ -71,7 +71,7 @@ impl Resolver<'_> {
         for step in &mut steps {
             step.numbers.resize(size, Exact::zero());
         }
-        self.state_correlations(cycle, &steps);
+        let correlations = self.state_correlations(cycle, &steps);
         let bomb = steps.iter().any(|step| step.bomb.is_some());
         Some(ProblemCycle {
             id: cycle.id.value.clone(),
@@ -84,6 +84,7 @@ impl Resolver<'_> {
                 None
             },
             steps,
+            correlations,
             inflate: cycle.inflate.is_some(),
             span: cycle.target.span.clone(),
         })
@@ -218,29 +219,6 @@ impl Resolver<'_> {
             kelvin,
             span: result.span.clone(),
         })
-    }
-
-    /// Correlations between heats that the case states.
-    fn state_correlations(&mut self, cycle: &Cycle, steps: &[ProblemStep]) {
-        for stated in &cycle.correlations {
-            let value = |index: usize| match &steps[index].heat {
-                StepSource::Value { value, .. } => Some(*value),
-                StepSource::Result { .. } => None,
-            };
-            let [a, b] = stated.between.map(value);
-            let (Some(a), Some(b)) = (a, b) else { continue };
-            let coefficient = to_f64(&stated.coefficient.value());
-            if let Err(error) = self.stated_correlations.state(a, b, coefficient) {
-                self.faults.push(Fault::new(
-                    FaultCode::Value,
-                    self.text,
-                    &stated.span,
-                    error.found(),
-                    error.expected(),
-                    error.advice(),
-                ));
-            }
-        }
     }
 }
 

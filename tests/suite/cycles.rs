@@ -142,6 +142,68 @@ fn redundant_heats_without_uncertainty_cannot_be_weighed() {
     );
 }
 
+/// Two heats of −600 and one of −610, u = 0.5 each, by hand: the mean is −603.3, and without the
+/// third −600 with nothing left over.
+fn one_apart(more: &str) -> String {
+    let equation = "2 C(g) -> C2(g)";
+    let steps = [
+        step("a", equation, "-600.0 ± 1.0 kJ/mol"),
+        step("b", equation, "-600.0 ± 1.0 kJ/mol"),
+        step("d", equation, "-610.0 ± 1.0 kJ/mol"),
+    ];
+    cycle("c", equation, &steps) + more
+}
+
+#[test]
+fn an_uncertainty_says_that_it_does_not_cover_a_disagreement() {
+    let resting =
+        "[cycles.half]\ntarget = \"C(g) -> 1/2 C2(g)\"\nsteps = [{ heat = \"c.heat\" }]\n";
+    let calculation = worked_cycle(&one_apart(resting));
+    for id in ["c.heat", "half.heat"] {
+        // (10/3)²·(1 + 1 + 4)/0.25
+        let apart = "the disagreement of determinations (χ² = 266.67 at 2 degrees of freedom)";
+        assert_eq!(outcome(&calculation, id).not_covered, [apart], "{id}");
+    }
+    let without = calculation.working.cycles[0]
+        .without
+        .expect("one does not fit");
+    assert_eq!((without.step, without.heat), (2, -600.0));
+    assert_eq!((without.chi_square, without.degrees_of_freedom), (0.0, 1));
+    // Inflated for it, the uncertainty covers it.
+    let calculation = worked_cycle(&one_apart("inflate = \"birge-ratio\"\n"));
+    assert!(outcome(&calculation, "c.heat").not_covered.is_empty());
+}
+
+#[test]
+fn a_stated_correlation_is_a_value_used_with_a_source() {
+    let correlated = |source: &str| {
+        let pair = "between = [\"a\", \"b\"], coefficient = \"0.5\"";
+        worked_cycle(&one_apart(&format!(
+            "correlations = [{{ {pair}{source} }}]\n"
+        )))
+    };
+    let calculation = correlated("");
+    let message = said(&calculation, "not-located", Severity::Caution);
+    assert!(
+        message.contains("a and b: the correlation coefficient"),
+        "{message}"
+    );
+    let calculation = correlated(", source = \"report 7\", locator = \"table 2\"");
+    let mut findings = calculation.working.findings.iter();
+    assert!(!findings.any(|finding| finding.code.word() == "not-located"));
+    let stated = calculation.problem.cycles[0].correlations[0];
+    let value = &calculation.problem.values[stated.value];
+    assert_eq!(
+        (stated.between, value.printed_text().as_str()),
+        ([0, 1], "0.5")
+    );
+    assert!(
+        value.locator.ends_with("report 7, table 2"),
+        "{}",
+        value.locator
+    );
+}
+
 /// What cancels between the determinations needs no uncertainty for them to be weighed.
 #[test]
 fn a_value_that_all_determinations_share_need_not_state_one() {

@@ -11,6 +11,7 @@ use crate::quantity::{Exact, to_f64};
 
 use super::chi_square::exceedance;
 use super::multipliers::Multipliers;
+use super::{CRITICAL_RESIDUAL, SIGNIFICANCE_LEVEL};
 
 /// The most closures of one cycle, a bound on the work.
 pub const MOST_CLOSURES: usize = 40;
@@ -35,11 +36,18 @@ pub struct Adjustment {
     pub correlates: Vec<f64>,
     /// For each step the measured less the adjusted heat.
     pub residuals: Vec<Exact>,
-    /// For each step its residual over what the residual may scatter by; none for a heat that no
-    /// other determination checks.
+    /// For each step λ = B·S⁻¹m, in one over the unit of the heats: for a heat that is correlated
+    /// with no other, its residual over its variance.
+    pub gradients: Vec<f64>,
+    /// The standard uncertainty of each gradient, √(B·S⁻¹Bᵀ)_ii.
+    pub gradient_uncertainty: Vec<f64>,
+    /// For each step its gradient over what the gradient may scatter by, which for a heat that is
+    /// correlated with no other is its residual over what the residual may scatter by; none for
+    /// a heat that no other determination checks.
     pub normalised: Vec<Option<f64>>,
     /// For each step which part of an error in it shows in its residual, from 0 to 1.
     pub redundancy: Vec<f64>,
+    pub checked: Checked,
     pub chi_square: f64,
     /// Closures that are independent and carry an uncertainty.
     pub degrees_of_freedom: usize,
@@ -47,14 +55,44 @@ pub struct Adjustment {
     pub probability: f64,
 }
 
+fn birge_ratio(chi_square: f64, degrees_of_freedom: usize) -> f64 {
+    match degrees_of_freedom {
+        0 => 1.0,
+        freedom => libm::sqrt(chi_square / freedom as f64),
+    }
+}
+
+fn is_misfit(normalised: f64) -> bool {
+    normalised.abs() > CRITICAL_RESIDUAL
+}
+
 impl Adjustment {
-    /// √(χ²/ν), R. T. Birge, Phys. Rev. 40 (1932) 207 (from memory): the factor by which all
+    /// √(χ²/f), R. T. Birge, Phys. Rev. 40 (1932) 207 (from memory): the factor by which all
     /// uncertainties would have to grow for χ² to be what is expected.
     pub fn birge_ratio(&self) -> f64 {
-        match self.degrees_of_freedom {
-            0 => 1.0,
-            freedom => libm::sqrt(self.chi_square / freedom as f64),
-        }
+        birge_ratio(self.chi_square, self.degrees_of_freedom)
+    }
+
+    /// Whether the determinations differ by more than their uncertainties explain: all of them
+    /// together, or one of them.
+    pub fn disagrees(&self) -> bool {
+        let misfit = self.most_deviant().is_some_and(|(_, t)| is_misfit(t));
+        self.degrees_of_freedom > 0 && (self.probability < SIGNIFICANCE_LEVEL || misfit)
+    }
+
+    /// The steps whose normalised residual is as large as the largest. Among several of them the
+    /// data cannot say which is off.
+    pub fn most_deviant_alike(&self) -> Vec<usize> {
+        let Some((_, most)) = self.most_deviant() else {
+            return Vec::new();
+        };
+        let like =
+            |t: &Option<f64>| t.is_some_and(|t| (t.abs() - most.abs()).abs() < 1e-9 * most.abs());
+        let sizes = self.normalised.iter().enumerate();
+        sizes
+            .filter(|(_, t)| like(t))
+            .map(|(step, _)| step)
+            .collect()
     }
 
     /// The step whose normalised residual is largest.
@@ -71,6 +109,15 @@ impl Adjustment {
     }
 }
 
+/// What the heats that others check have to do with the uncertainty of the target.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Checked {
+    /// Standard uncertainty of the target from these heats alone.
+    pub standard: f64,
+    /// Standard uncertainty of the target with those of these heats times the Birge ratio.
+    pub inflated: f64,
+}
+
 /// Why there is no adjustment.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub enum NoAdjustment {
@@ -84,10 +131,10 @@ pub enum NoAdjustment {
 /// condition equations (F. R. Helmert, 1872); normalised residuals after W. Baarda, A Testing
 /// Procedure for Use in Geodetic Networks (1968); all from memory.
 ///
-/// `heats` q and `covariance` V are of the steps, in one unit and its square. With closures N,
-/// misclosures m = Nᵀq and S = NᵀVN:
+/// `heats` q and `covariance` V are of the steps, in one unit and its square. With closures B,
+/// misclosures m = Bᵀq and S = BᵀVB:
 ///
-///   residuals v = VN·S⁻¹m,  χ² = mᵀS⁻¹m,  weights w = x − N·S⁻¹NᵀVx,
+///   residuals e = VB·S⁻¹m,  χ² = mᵀS⁻¹m,  weights w = x − B·S⁻¹BᵀVx,
 ///
 /// x being any multipliers that give the target. Of all multipliers that do, w·q has the least
 /// variance. V itself is never inverted, so exact heats and shared values need no exception. All
@@ -117,22 +164,32 @@ pub fn adjust(
     let variation: Vec<Exact> = closures.iter().map(|n| dot(n, &varied)).collect();
     let shift = inverse.times(&variation);
     let weights = multipliers.particular.iter().enumerate();
+    let weights: Vec<Exact> = weights
+        .map(|(step, x)| x - column_dot(closures, step, &shift))
+        .collect();
     let chi_square = to_f64(&dot(&misclosures, &solved));
     let degrees_of_freedom = inverse.kept.len();
+    let scatter = (0..heats.len()).map(|step| {
+        let own = column(closures, step);
+        libm::sqrt(to_f64(&dot(&own, &inverse.times(&own))))
+    });
+    let gradient_uncertainty: Vec<f64> = scatter.collect();
+    let gradients = (0..heats.len()).map(|step| to_f64(&column_dot(closures, step, &solved)));
+    let gradients: Vec<f64> = gradients.collect();
+    let birge = birge_ratio(chi_square, degrees_of_freedom);
     let standard = standard_uncertainties(covariance);
     Ok(Adjustment {
         correlated: correlated(covariance, &standard),
         standard,
-        weights: weights
-            .map(|(step, x)| x - column_dot(closures, step, &shift))
-            .collect(),
         misclosure_uncertainty: standard_uncertainties(&s),
         residuals: (0..heats.len())
             .map(|step| column_dot(&spread, step, &solved))
             .collect(),
-        normalised: (0..heats.len())
-            .map(|step| normalised(closures, step, &solved, &inverse))
-            .collect(),
+        normalised: normalised(&gradients, &gradient_uncertainty),
+        checked: checked(covariance, &weights, &gradient_uncertainty, birge),
+        gradients,
+        gradient_uncertainty,
+        weights,
         redundancy: (0..heats.len())
             .map(|step| redundancy(closures, &spread, step, &inverse))
             .collect(),
@@ -174,16 +231,32 @@ fn correlated(covariance: &[Vec<Exact>], standard: &[f64]) -> Vec<(usize, usize,
         .collect()
 }
 
-/// λ/√(NS⁻¹Nᵀ) with λ = NS⁻¹m, which for independent heats is v/u(v).
-fn normalised(
-    closures: &[Vec<Exact>],
-    step: usize,
-    solved: &[Exact],
-    inverse: &Inverse,
-) -> Option<f64> {
-    let own = column(closures, step);
-    let scatter = to_f64(&dot(&own, &inverse.times(&own)));
-    (scatter > 0.0).then(|| to_f64(&dot(&own, solved)) / libm::sqrt(scatter))
+fn normalised(gradients: &[f64], scatter: &[f64]) -> Vec<Option<f64>> {
+    let each = gradients.iter().zip(scatter);
+    each.map(|(size, scatter)| (*scatter > 0.0).then(|| size / scatter))
+        .collect()
+}
+
+/// The variance wᵀVw of the target, in the parts that inflating some heats would grow apart. A
+/// heat is checked where its gradient can be anything but zero.
+fn checked(covariance: &[Vec<Exact>], weights: &[Exact], scatter: &[f64], birge: f64) -> Checked {
+    let part = |of: bool| -> Vec<Exact> {
+        let each = weights.iter().zip(scatter);
+        each.map(|(w, s)| match (*s > 0.0) == of {
+            true => w.clone(),
+            false => Exact::zero(),
+        })
+        .collect()
+    };
+    let (inner, outer) = (part(true), part(false));
+    let between = |a: &[Exact], b: &[Exact]| to_f64(&dot(a, &times(covariance, b)));
+    let own = between(&inner, &inner);
+    let inflated =
+        birge * birge * own + 2.0 * birge * between(&inner, &outer) + between(&outer, &outer);
+    Checked {
+        standard: libm::sqrt(own.max(0.0)),
+        inflated: libm::sqrt(inflated.max(0.0)),
+    }
 }
 
 fn dot(a: &[Exact], b: &[Exact]) -> Exact {

@@ -53,6 +53,13 @@ fn two_determinations_give_the_weighted_mean() {
         assert!(near(size.unwrap().abs(), libm::sqrt(1.8)));
     }
     assert!(near(adjusted.redundancy[0], 0.2) && near(adjusted.redundancy[1], 0.8));
+    // e/u², and √(1/5) of both; the mean has u² = 0.64 + 0.04·4 = 0.8, times 1.8 it is 1.2².
+    assert!(near(adjusted.gradients[0], -0.6) && near(adjusted.gradients[1], 0.6));
+    for scatter in &adjusted.gradient_uncertainty {
+        assert!(near(*scatter, libm::sqrt(0.2)));
+    }
+    assert!(near(adjusted.checked.standard, libm::sqrt(0.8)));
+    assert!(near(adjusted.checked.inflated, 1.2));
 }
 
 /// The same with r = 0.5, by hand: weights (4 − 1)/(1 + 4 − 2) = 1 and 0: the worse one adds

@@ -29,6 +29,26 @@ pub fn exceedance(chi_square: f64, degrees_of_freedom: usize) -> f64 {
     (start + rest).min(1.0)
 }
 
+/// The χ² that is exceeded with this probability, by halving an interval; to more digits than
+/// anyone prints.
+pub fn critical(probability: f64, degrees_of_freedom: usize) -> f64 {
+    let mut low = 0.0;
+    let mut high = 1.0;
+    // Doubled at most a thousand times before it would be no number.
+    while exceedance(high, degrees_of_freedom) > probability && high < f64::MAX / 4.0 {
+        low = high;
+        high *= 2.0;
+    }
+    for _ in 0..60 {
+        let middle = (low + high) / 2.0;
+        match exceedance(middle, degrees_of_freedom) > probability {
+            true => low = middle,
+            false => high = middle,
+        }
+    }
+    high
+}
+
 #[cfg(test)]
 mod tests {
     use super::*;
@@ -58,6 +78,11 @@ mod tests {
                 (found / probability - 1.0).abs() < 1e-3,
                 "{dof} {chi_square}: {found}"
             );
+            let back = critical(probability, dof);
+            assert!(
+                (back - chi_square).abs() < 6e-4,
+                "{dof} {probability}: {back}"
+            );
         }
     }
 
@@ -71,5 +96,6 @@ mod tests {
             assert!(small > 0.9999 && small <= 1.0, "{dof}: {small}");
         }
         assert_eq!(exceedance(5.0, 0), 1.0);
+        assert!(critical(0.05, 0).is_finite());
     }
 }

@@ -10,7 +10,6 @@ use super::adjust::{Adjustment, NoAdjustment};
 use super::heat::StepHeat;
 use super::multipliers::{Multipliers, NoMultipliers};
 use super::words::{closure_text, decimals, global_test, local_test, weakness};
-use super::{CRITICAL_RESIDUAL, SIGNIFICANCE_LEVEL};
 use crate::engine::standing::list;
 
 /// The voice of one cycle.
@@ -216,10 +215,7 @@ impl Say<'_> {
         if adjustment.degrees_of_freedom <= 2 {
             findings.push(self.weak(adjustment));
         }
-        let misfit = adjustment
-            .most_deviant()
-            .is_some_and(|(_, w)| w.abs() > CRITICAL_RESIDUAL);
-        if adjustment.probability < SIGNIFICANCE_LEVEL || misfit {
+        if adjustment.disagrees() {
             findings.push(self.disagree(adjustment));
         }
         if self.cycle.inflate {

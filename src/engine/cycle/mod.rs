@@ -1,7 +1,7 @@
 //! A heat from the measured heats of other reactions.
 //!
 //! Heats of steps (`heat`), their multipliers (`multipliers`), the adjustment of redundant
-//! determinations (`covariance`, `adjust`, `chi_square`), and what has to be said (`findings`,
+//! determinations (`covariance`, `adjust`, `chi_square`, `without`), and what has to be said (`findings`,
 //! `words`).
 
 mod adjust;
@@ -10,26 +10,30 @@ mod covariance;
 mod findings;
 mod heat;
 mod multipliers;
+mod without;
 mod words;
 
 use num_traits::Zero;
 
 use crate::quantity::{Exact, LinearForm, Real, Significance, Unit, to_f64};
-use crate::source::{Problem, ProblemCycle};
+use crate::source::{Problem, ProblemCycle, StepSource};
 
 use super::outcome::Outcome;
 use super::work::{WorkOptions, Working};
 use super::worked::Worked;
 
-pub use adjust::Adjustment;
+pub use adjust::{Adjustment, Checked};
+pub use chi_square::critical;
 pub use heat::StepHeat;
 pub use multipliers::{Multipliers, NoMultipliers};
+pub use without::Without;
 pub use words::{closure_text, decimals, global_test, local_test, weakness};
 
 use adjust::adjust;
 use covariance::Covariances;
 use findings::Say;
 use multipliers::multipliers;
+use words::chi_square_text;
 
 /// The probability below which determinations are said to disagree.
 pub const SIGNIFICANCE_LEVEL: f64 = 0.05;
@@ -48,6 +52,8 @@ pub struct CycleWorking {
     pub multipliers: Result<Multipliers, NoMultipliers>,
     /// Where several determinations check each other.
     pub adjustment: Option<Adjustment>,
+    /// What there would be without the one determination that does not fit; for information.
+    pub without: Option<Without>,
     /// What was done; none where a `stop` says why there is no result.
     pub sum: Option<CycleSum>,
 }
@@ -87,6 +93,7 @@ pub(super) fn work_cycle(
     let found = multipliers(&cycle.numbers, &steps);
     working.findings.extend(say.before(&heats, &found));
     let mut adjustment = None;
+    let mut without = None;
     let mut sum = None;
     let complete: Option<Vec<Worked>> = heats
         .iter()
@@ -97,19 +104,25 @@ pub(super) fn work_cycle(
             Ok(done) => {
                 working.findings.extend(say.after(found, done.as_ref()));
                 sum = sum_of(cycle, &heats, found, done.as_ref());
+                without = done
+                    .as_ref()
+                    .and_then(|all| Without::of(problem, cycle, &heats, all));
                 adjustment = done;
             }
             Err(finding) => working.findings.push(finding),
         }
     }
     if let Some(sum) = &sum {
-        working.push(outcome(problem, options, cycle, sum, unit));
+        let mut outcome = outcome(problem, options, cycle, sum, unit);
+        outcome.not_covered = not_covered(cycle, sum, adjustment.as_ref(), working);
+        working.push(outcome);
     }
     working.cycles.push(CycleWorking {
         cycle: index,
         heats,
         multipliers: found,
         adjustment,
+        without,
         sum,
     });
 }
@@ -204,6 +217,36 @@ fn significance(heats: &[Worked], values: &[Exact], weights: &[Exact]) -> Signif
         }
     };
     Significance::sum(heats.iter().zip(values).zip(weights).map(of_part))
+}
+
+/// What the uncertainty of the result does not cover: that its determinations are apart, unless it
+/// is inflated for that, and what those of the results that it rests on do not cover.
+fn not_covered(
+    cycle: &ProblemCycle,
+    sum: &CycleSum,
+    adjustment: Option<&Adjustment>,
+    working: &Working,
+) -> Vec<String> {
+    let own = adjustment.filter(|a| a.disagrees() && sum.inflation == 1.0);
+    let own = own.map(|a| {
+        format!(
+            "the disagreement of determinations ({})",
+            chi_square_text(a)
+        )
+    });
+    let steps = cycle.steps.iter().zip(&sum.weights);
+    let counted = steps.filter(|(_, weight)| !weight.is_zero());
+    let passed_on = counted.filter_map(|(step, _)| match &step.heat {
+        StepSource::Result { name } => Some(&working.outcome(name)?.not_covered),
+        StepSource::Value { .. } => None,
+    });
+    let mut all: Vec<String> = Vec::new();
+    for text in own.iter().chain(passed_on.flatten()) {
+        if !all.contains(text) {
+            all.push(text.clone());
+        }
+    }
+    all
 }
 
 fn outcome(

@@ -51,12 +51,20 @@ pub fn weakness(degrees_of_freedom: usize) -> Option<&'static str> {
 
 /// χ², its degrees of freedom and its probability.
 pub fn global_test(adjustment: &Adjustment) -> String {
+    format!(
+        "{}; a χ² as large has a probability {}",
+        chi_square_text(adjustment),
+        probability(adjustment.probability)
+    )
+}
+
+/// "χ² = 41.48 at 4 degrees of freedom"
+pub(super) fn chi_square_text(adjustment: &Adjustment) -> String {
     let freedom = adjustment.degrees_of_freedom;
     let degrees = if freedom == 1 { "degree" } else { "degrees" };
     format!(
-        "χ² = {} at {freedom} {degrees} of freedom; a χ² as large has a probability {}",
-        decimals(adjustment.chi_square),
-        probability(adjustment.probability)
+        "χ² = {} at {freedom} {degrees} of freedom",
+        decimals(adjustment.chi_square)
     )
 }
 
@@ -81,14 +89,8 @@ pub fn local_test(cycle: &ProblemCycle, adjustment: &Adjustment) -> String {
     let Some((step, size)) = adjustment.most_deviant() else {
         return "No determination is checked by another one.".to_string();
     };
-    let like =
-        |w: &Option<f64>| w.is_some_and(|w| (w.abs() - size.abs()).abs() < 1e-9 * size.abs());
-    let alike = cycle
-        .steps
-        .iter()
-        .zip(&adjustment.normalised)
-        .filter(|(_, w)| like(w));
-    let names: Vec<String> = alike.map(|(step, _)| step.name.clone()).collect();
+    let alike = adjustment.most_deviant_alike().into_iter();
+    let names: Vec<String> = alike.map(|step| cycle.steps[step].name.clone()).collect();
     let beyond = match size.abs() > CRITICAL_RESIDUAL {
         true => "beyond",
         false => "within",

@@ -280,7 +280,7 @@ fn values_used() -> Vec<ValueRow> {
     let row = |number: usize, substance: Rich, name: Option<&str>, printed: &str| ValueRow {
         number,
         substance,
-        name: name.map(s),
+        name: name.map(Rich::plain),
         cas: name.map(|_| s("7732-18-5")),
         quantity: s("formation enthalpy"),
         printed: s(printed),
