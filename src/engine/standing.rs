@@ -43,11 +43,12 @@ pub(super) fn not_located(problem: &Problem, text: &Text) -> Vec<Finding> {
     let silent: Vec<&ValueUsed> = silent.collect();
     let without = "without a locator: a checker cannot find the value. Give each entry its table and \
                    page.";
-    // A measured heat of a cycle is named with its step instead.
+    // What a cycle states is named with its step instead.
+    let of_cycle = [ValueKind::MeasuredHeat, ValueKind::Correlation];
     let unsourced = problem
         .values
         .iter()
-        .filter(|v| v.kind != ValueKind::MeasuredHeat && v.locator.ends_with(NO_SOURCE));
+        .filter(|v| !of_cycle.contains(&v.kind) && v.locator.ends_with(NO_SOURCE));
     let unsourced: Vec<&ValueUsed> = unsourced.collect();
     let unsaid =
         "stated by the case without a source: a checker cannot compare the value. Add `source`.";

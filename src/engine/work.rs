@@ -166,10 +166,14 @@ fn work_reaction(
         (None, Some(hess)) => Some(hess.worked()),
         (None, None) => None,
     };
-    if let (Some(worked), Some(terms)) = (&mut worked, &paths) {
-        let said = temperature_error(problem, reaction, terms, &unit, &mut worked.form);
-        let said = said.map(|message| uncertain(reaction, message, options.text));
-        working.findings.extend(said);
+    let mut not_covered = not_covered(problem, reaction);
+    if let (Some(worked), Some(terms)) = (&mut worked, &paths)
+        && let Some(message) = temperature_error(problem, reaction, terms, &unit, &mut worked.form)
+    {
+        not_covered.push("the uncertainty of its temperature".to_string());
+        working
+            .findings
+            .push(uncertain(reaction, message, options.text));
     }
     let molar_mass = match worked {
         Some(worked) => {
@@ -177,7 +181,7 @@ fn work_reaction(
             let mass = work_results(problem, options, reaction, worked, &unit, working);
             for outcome in &mut working.outcomes[first..] {
                 outcome.adverse = adverse.clone();
-                outcome.not_covered = not_covered(problem, reaction);
+                outcome.not_covered = not_covered.clone();
             }
             mass
         }

@@ -53,7 +53,8 @@ pub(super) fn note_identity(
     if let Some(said) = open {
         resolver.findings.push(by_formula(said));
     } else if is_stable(wanted) {
-        note_stable(resolver, wanted, &form, kelvin, at);
+        let ranged = !entry.heat_capacity.is_empty();
+        note_stable(resolver, wanted, &form, kelvin, ranged, at);
     } else if entry.notations().all(|s| s.phase != wanted.species.phase) {
         let message = format!(
             "`{}` is taken as {form}, the one such form of the source.",
@@ -111,15 +112,20 @@ fn note_stable(
     wanted: &Wanted,
     form: &str,
     kelvin: &Exact,
+    ranged: bool,
     at: Place,
 ) {
     resolver.say(Finding {
         severity: Severity::Note,
         code: FindingCode::StableForm,
         message: format!(
-            "`{}` is {form} at {} K, by the ranges of its source.",
+            "`{}` is {form} at {} K, {}.",
             wanted.label,
-            exact_text(kelvin)
+            exact_text(kelvin),
+            match ranged {
+                true => "by the ranges of its source",
+                false => "the one form that its source lists",
+            }
         ),
         at,
     });

@@ -15,7 +15,7 @@ use super::problem::{EnthalpyPath, Leg, Start};
 use super::resolve::Resolver;
 use super::route::{Route, RouteStart, RouteStep};
 use super::stable::is_stable;
-use super::walk::Stretch;
+use super::walk::{Reach, Stretch, covering};
 
 /// The temperature at which formation enthalpies are printed, 298.15 K.
 pub fn reference_kelvin() -> Exact {
@@ -76,6 +76,23 @@ impl Resolver<'_> {
         let route = self.route(substance, &material, kelvin, span)?;
         self.check_route(substance, &material, &route, kelvin, span);
         self.enter(substance, kelvin, route, span)
+    }
+
+    /// Gives a path that stays at 298.15 K the function that holds there, where the uncertainty of
+    /// the temperature needs its heat capacity.
+    pub(super) fn add_end(&mut self, path: usize, span: &Span) {
+        let at = &self.paths[path];
+        if at.end.is_some() {
+            return;
+        }
+        let kelvin = at.kelvin.clone();
+        let material = self.material(at.substance, span);
+        let function = material.candidates.iter().find_map(|candidate| {
+            let index = covering(&candidate.entry.heat_capacity, &kelvin, Reach::Stated)?;
+            Some((candidate, index))
+        });
+        let end = function.map(|(candidate, index)| self.function_value(candidate, index, span));
+        self.paths[path].end = end;
     }
 
     pub(super) fn material(&mut self, substance: usize, span: &Span) -> Rc<Material> {

@@ -15,6 +15,10 @@ impl Resolver<'_> {
         let (kelvin, temperature_value) = self.temperature(reaction.temperature.as_ref());
         let (mut terms, complete) = self.terms(reaction, &kelvin);
         self.check_vapours(reaction, &terms, &kelvin);
+        if temperature_value.is_some() {
+            let paths = terms.iter().filter_map(|term| term.path);
+            paths.for_each(|path| self.add_end(path, &equation.span));
+        }
         let left_out = self.dissolve(reaction, &mut terms);
         let per = per_index(reaction).filter(|_| complete);
         let molar_mass = per.map_or_else(Vec::new, |index| {

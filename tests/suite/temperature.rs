@@ -541,3 +541,31 @@ fn the_uncertainty_agrees_with_a_monte_carlo_propagation() {
         "{stated:?} {spread}"
     );
 }
+
+#[test]
+fn an_uncertain_25_degrees_counts_or_is_said_not_to() {
+    let input = "[inputs]\nroom = { value = \"25.00 °C\", tolerance = \"2.0 K\", source = \"log \
+                 (invented)\", confirmed = true }\n\n";
+    let rest = format!(
+        "{input}{}",
+        reaction("Ti(cr) + O2(g) -> TiO2(cr, alpha)", "room")
+    );
+    let known = forms(&rest);
+    assert!(known.said("temperature-uncertainty").is_empty());
+    // u² = 0.5² + (0.002·2/√3)², by hand: ΔCp = 60 − 30 − 32 J/(mol K).
+    let u = known.result("r.heat")["standard-uncertainty"]
+        .as_f64()
+        .unwrap_or_default();
+    assert!(
+        (u - libm::sqrt(0.25 + 0.002 * 0.002 * 4.0 / 3.0)).abs() < 1e-12,
+        "{u}"
+    );
+    let bare = FORMS.replace(
+        "heat-capacity = [{ form = \"polynomial\"",
+        "note = \"none\" #",
+    );
+    let unknown = tried(&["forms.toml"], &[("forms.toml", &bare)], &rest);
+    assert_eq!(unknown.said("temperature-uncertainty")[0].0, "caution");
+    let open = unknown.result("r.heat")["not-covered"][0].clone();
+    assert_eq!(open, "the uncertainty of its temperature");
+}

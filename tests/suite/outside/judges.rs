@@ -243,7 +243,13 @@ fn the_structure_tree_holds_every_value_used() {
                 assert!(text.contains(&said), "{said} of {value}");
             }
             for key in ["substance", "unit", "source", "locator", "standing"] {
-                let said = squeezed(value[key].as_str().expect("a text"));
+                let said = value[key].as_str().expect("a text");
+                // The equation of a measured heat is set with formulas for the names.
+                let said = match value["quantity"] == "measured-heat" {
+                    true => said.split(" of ").next().unwrap_or_default(),
+                    false => said,
+                };
+                let said = squeezed(said);
                 assert!(text.contains(&said), "{key} {said} of {value}");
             }
         }
