@@ -244,9 +244,9 @@ fn the_structure_tree_holds_every_value_used() {
             }
             for key in ["substance", "unit", "source", "locator", "standing"] {
                 let said = value[key].as_str().expect("a text");
-                // The equation of a measured heat is set with formulas for the names.
-                let said = match value["quantity"] == "measured-heat" {
-                    true => said.split(" of ").next().unwrap_or_default(),
+                // The equation of a measured heat is set below the name of its step, with formulas.
+                let said = match key == "substance" && value["quantity"] == "measured-heat" {
+                    true => said.split(": ").next().unwrap_or_default(),
                     false => said,
                 };
                 let said = squeezed(said);
