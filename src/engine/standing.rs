@@ -4,7 +4,7 @@ use std::collections::{BTreeMap, BTreeSet};
 
 use crate::finding::{Finding, FindingCode, Severity, Text};
 use crate::quantity::{Decimal, InputUncertainty, Significance};
-use crate::source::{Form, NO_SOURCE, Problem, Standing, ValueKind, ValueUsed};
+use crate::source::{Form, NO_SOURCE, Problem, Standing, ValueUsed};
 
 use super::outcome::{Outcome, StatedBy};
 
@@ -43,12 +43,10 @@ pub(super) fn not_located(problem: &Problem, text: &Text) -> Vec<Finding> {
     let silent: Vec<&ValueUsed> = silent.collect();
     let without = "without a locator: a checker cannot find the value. Give each entry its table and \
                    page.";
-    // What a cycle states is named with its step instead.
-    let of_cycle = [ValueKind::MeasuredHeat, ValueKind::Correlation];
     let unsourced = problem
         .values
         .iter()
-        .filter(|v| !of_cycle.contains(&v.kind) && v.locator.ends_with(NO_SOURCE));
+        .filter(|v| v.locator.ends_with(NO_SOURCE));
     let unsourced: Vec<&ValueUsed> = unsourced.collect();
     let unsaid =
         "stated by the case without a source: a checker cannot compare the value. Add `source`.";

@@ -31,24 +31,26 @@ pub(super) fn equation(cycle: &ProblemCycle, numbers: &[Exact], turned: bool) ->
 }
 
 /// "7 CO2(g) − 15/2 O2(g)"
-pub(super) fn gases(cycle: &ProblemCycle, step: &ProblemStep) -> String {
-    let mut text = String::new();
+pub(super) fn gases(cycle: &ProblemCycle, step: &ProblemStep) -> Rich {
+    let mut text = Rich::default();
     for (species, nu) in cycle.species.iter().zip(&step.numbers) {
         let phase = species.species.phase.as_ref();
         let gas = phase.is_some_and(|p| p.label == PhaseLabel::Gas);
         if !gas || nu.is_zero() {
             continue;
         }
-        let sign = match (text.is_empty(), nu.is_negative()) {
+        let sign = match (text.0.is_empty(), nu.is_negative()) {
             (true, false) => "",
             (true, true) => "\u{2212}",
             (false, false) => " + ",
             (false, true) => " \u{2212} ",
         };
-        text += &format!("{sign}{}{}", coefficient(&nu.abs()), species.label);
+        text = text
+            .and(format!("{sign}{}", coefficient(&nu.abs())))
+            .with(Rich::from(species.species.pieces()));
     }
-    if text.is_empty() {
-        "no gas".to_string()
+    if text.0.is_empty() {
+        Rich::plain("no gas")
     } else {
         text
     }

@@ -78,7 +78,7 @@ impl Shown<'_> {
             let (bomb, work) = (step.bomb.as_ref()?, heat.gas_work.as_ref()?);
             Some(vec![
                 Rich::plain(step.name.clone()),
-                Rich::plain(gases(self.cycle, step)),
+                gases(self.cycle, step),
                 Rich::plain(sign_or_zero(&bomb.gas_moles)),
                 Rich::plain(shown(work)),
                 Rich::plain(shown(&heat.measured)),

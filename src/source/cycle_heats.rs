@@ -4,7 +4,7 @@
 use num_traits::Signed;
 
 use crate::case::{Cycle, CycleStep, Given, Measured, StepCorrelation, StepHeat};
-use crate::finding::{Fault, FaultCode, Finding, FindingCode, Located, Severity, Span};
+use crate::finding::{Fault, FaultCode, Located};
 use crate::notation::PhaseLabel;
 use crate::quantity::{Dimension, Exact, Quantity, to_f64};
 
@@ -43,10 +43,7 @@ impl Resolver<'_> {
         quantity: &Located<Quantity>,
     ) -> Option<usize> {
         let place = format!("cycles.{}, {name}", cycle.id.value);
-        if step.source.is_none() {
-            self.no_source("measured heat", &place, &step.span);
-        }
-        let from = stated_by(&step.source, &step.locator);
+        let from = stated_by(step.source.as_deref(), step.locator.as_deref());
         let measured = match step.measured {
             Measured::Enthalpy => "enthalpy",
             Measured::InternalEnergy => "internal energy",
@@ -61,18 +58,6 @@ impl Resolver<'_> {
             note: None,
             span: &quantity.span,
         }))
-    }
-
-    fn no_source(&mut self, what: &str, place: &str, span: &Span) {
-        self.findings.push(Finding {
-            severity: Severity::Caution,
-            code: FindingCode::NotLocated,
-            message: format!(
-                "{place}: the {what} names no source. Give the report and the place in it: \
-                 source = \"…\", locator = \"…\"."
-            ),
-            at: self.text.place(span.start),
-        });
     }
 
     /// Correlations between heats that the case states, each with its row among the values used.
@@ -112,11 +97,7 @@ impl Resolver<'_> {
         let [first, second] = stated.between.map(|index| steps[index].name.as_str());
         let pair = format!("{first} and {second}");
         let place = format!("cycles.{}, correlations", cycle.id.value);
-        if stated.source.is_none() {
-            let place = format!("{place}, {pair}");
-            self.no_source("correlation coefficient", &place, &stated.span);
-        }
-        let from = stated_by(&stated.source, &stated.locator);
+        let from = stated_by(stated.source.as_deref(), stated.locator.as_deref());
         let value = self.case_value(CaseValue {
             kind: ValueKind::Correlation,
             label: pair,
@@ -213,15 +194,12 @@ impl Resolver<'_> {
     }
 }
 
-/// "report RC-26-014, table 3"
-fn stated_by(source: &Option<String>, locator: &Option<String>) -> String {
-    let parts: Vec<&str> = [source, locator]
-        .into_iter()
-        .flatten()
-        .map(String::as_str)
-        .collect();
-    match parts.is_empty() {
-        true => NO_SOURCE.to_string(),
-        false => parts.join(", "),
+/// "report RC-26-014, table 3"; it ends on `NO_SOURCE` where a locator stands alone, too.
+fn stated_by(source: Option<&str>, locator: Option<&str>) -> String {
+    match (source, locator) {
+        (Some(source), Some(locator)) => format!("{source}, {locator}"),
+        (Some(source), None) => source.to_string(),
+        (None, Some(locator)) => format!("{locator}, {NO_SOURCE}"),
+        (None, None) => NO_SOURCE.to_string(),
     }
 }
