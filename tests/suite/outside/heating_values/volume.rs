@@ -2,8 +2,9 @@
 
 use super::fuel;
 
-/// Methane, ideal gas, gross: 1010.0 Btu per cubic foot at 60 °F and 14.696 psia (two public
-/// transcriptions, one of which names GPA 2145; the standard was not seen, mark T). Its molar
+/// Methane, ideal gas, gross: 1010.0 Btu per cubic foot at 60 °F and 14.696 psia (as two
+/// public programs carry the figure, one of which names GPA 2145; the standard was not seen,
+/// mark T). Its molar
 /// value is of another vintage than ours by a few hundredths of a kJ/mol, 0.07 Btu here.
 #[test]
 fn methane_has_its_published_heat_per_cubic_foot() {
